@@ -1,0 +1,14 @@
+/** Use cases, reports and the command line; the only module with a console. */
+module org.solewright.app {
+    requires transitive org.solewright.domain;
+    requires org.solewright.formats;
+    requires org.solewright.analysis;
+    requires static transitive org.jspecify;
+    requires info.picocli;
+    requires com.fasterxml.jackson.databind;
+
+    exports org.solewright.app.cli;
+
+    opens org.solewright.app.cli to
+            info.picocli;
+}

@@ -1,0 +1,10 @@
+/**
+ * Files and what they mean: C3D, models, tables. Everything comes out in SI units of the domain; units are converted
+ * here and nowhere else. No mathematics beyond the formats' own rules, no console.
+ */
+module org.solewright.formats {
+    requires transitive org.solewright.domain;
+    requires static transitive org.jspecify;
+
+    exports org.solewright.formats.io;
+}
