@@ -1,0 +1,54 @@
+package org.solewright.domain.gait;
+
+import java.util.List;
+
+/**
+ * One contact of a foot with the ground, and what it may be used for. A row of the contacts table, written by the tool
+ * and accepted back from the user.
+ *
+ * @param trial name of the recording
+ * @param side whose foot
+ * @param platforms numbers of the platforms it stood on as in the recording, from 1; empty where none saw it
+ * @param start contact on the recording's clock, s
+ * @param end foot-off on the recording's clock, s, not before {@code start}
+ * @param whole whether all its load is known
+ * @param usedFor what it is used for, one word each; no word contains a space or semicolon
+ * @param notUsedFor what it is not used for, likewise
+ * @param why the reason in one sentence; empty where there is nothing to say
+ */
+public record ContactRow(
+        String trial,
+        Side side,
+        List<Integer> platforms,
+        double start,
+        double end,
+        boolean whole,
+        List<String> usedFor,
+        List<String> notUsedFor,
+        String why) {
+
+    /** Copies the lists and checks the times and the words. */
+    public ContactRow {
+        platforms = List.copyOf(platforms);
+        usedFor = List.copyOf(usedFor);
+        notUsedFor = List.copyOf(notUsedFor);
+        if (!(start <= end) || !Double.isFinite(start) || !Double.isFinite(end)) {
+            throw new IllegalArgumentException("contact from " + start + " s to " + end + " s");
+        }
+        for (int platform : platforms) {
+            if (platform < 1) {
+                throw new IllegalArgumentException("platform number " + platform + ", expected 1 or more");
+            }
+        }
+        checkWords(usedFor);
+        checkWords(notUsedFor);
+    }
+
+    private static void checkWords(List<String> words) {
+        for (String word : words) {
+            if (word.isEmpty() || word.indexOf(' ') >= 0 || word.indexOf(';') >= 0) {
+                throw new IllegalArgumentException("use of a contact '" + word + "', expected one word");
+            }
+        }
+    }
+}
