@@ -30,7 +30,7 @@ public record TransitionRow(Map<String, Cell> cells) {
      *
      * @param value finite, in the unit of the column's name
      */
-    public record Number(double value) implements Cell {
+    public record Amount(double value) implements Cell {
 
         @Override
         public String text() {
@@ -43,11 +43,11 @@ public record TransitionRow(Map<String, Cell> cells) {
      *
      * @param value a count
      */
-    public record Count(long value) implements Cell {
+    public record Count(int value) implements Cell {
 
         @Override
         public String text() {
-            return Long.toString(value);
+            return Integer.toString(value);
         }
     }
 
@@ -91,7 +91,7 @@ public record TransitionRow(Map<String, Cell> cells) {
      */
     public OptionalDouble number(String column) {
         Cell cell = cells.get(column);
-        if (cell instanceof Number n) {
+        if (cell instanceof Amount n) {
             return OptionalDouble.of(n.value());
         }
         return cell instanceof Count c ? OptionalDouble.of(c.value()) : OptionalDouble.empty();
@@ -125,7 +125,7 @@ public record TransitionRow(Map<String, Cell> cells) {
         public Builder number(String column, double value) {
             check(column, false);
             if (Double.isFinite(value)) {
-                cells.put(column, new Number(value));
+                cells.put(column, new Amount(value));
             } else {
                 cells.remove(column);
             }
@@ -152,7 +152,7 @@ public record TransitionRow(Map<String, Cell> cells) {
          * @return this
          * @throws IllegalArgumentException where there is no such column of numbers
          */
-        public Builder count(String column, long value) {
+        public Builder count(String column, int value) {
             check(column, false);
             cells.put(column, new Count(value));
             return this;
