@@ -5,6 +5,12 @@
 module org.solewright.formats {
     requires transitive org.solewright.domain;
     requires static transitive org.jspecify;
+    requires jakarta.xml.bind;
+    requires java.xml;
 
+    exports org.solewright.formats.footmodel;
     exports org.solewright.formats.io;
+
+    opens org.solewright.formats.footmodel.landmarksxml to
+            jakarta.xml.bind;
 }
