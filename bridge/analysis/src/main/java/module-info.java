@@ -6,4 +6,6 @@ module org.solewright.analysis {
     requires transitive org.solewright.domain;
     requires static transitive org.jspecify;
     requires commons.math3;
+
+    exports org.solewright.analysis.fitting;
 }

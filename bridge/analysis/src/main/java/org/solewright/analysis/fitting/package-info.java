@@ -1,0 +1,9 @@
+/**
+ * From landmarks to a segmented foot: rigid fits, joint centres, model frames, inertia, contact pads. SI units; the
+ * laboratory frame L is whatever the recording has, with a stated up direction; model frames M have x forward, y up, z
+ * to the subject's right. Sources stand at each formula. No files, no events, no loads.
+ */
+@NullMarked
+package org.solewright.analysis.fitting;
+
+import org.jspecify.annotations.NullMarked;
