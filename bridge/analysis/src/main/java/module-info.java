@@ -8,4 +8,5 @@ module org.solewright.analysis {
     requires commons.math3;
 
     exports org.solewright.analysis.fitting;
+    exports org.solewright.analysis.numerics;
 }
