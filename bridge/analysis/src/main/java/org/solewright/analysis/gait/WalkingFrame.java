@@ -1,0 +1,137 @@
+package org.solewright.analysis.gait;
+
+import java.util.ArrayList;
+import java.util.EnumMap;
+import java.util.List;
+import java.util.Map;
+import org.solewright.domain.gait.Side;
+import org.solewright.domain.geometry.Rotation;
+import org.solewright.domain.geometry.Vec3;
+
+/**
+ * The walking frame of one pass: x along the straight line fitted to the pelvis over the longest whole number of strides
+ * in view (else the whole pass), y up, z to the subject's right ([Wu & Cavanagh 1995]).
+ */
+final class WalkingFrame {
+
+    private WalkingFrame() {}
+
+    /**
+     * The frame.
+     *
+     * @param trial tracks in the laboratory frame
+     * @param shortestStride s, for telling peaks apart
+     * @return R_LW
+     * @throws IllegalArgumentException where the pelvis is not tracked in two frames or does not move
+     */
+    static Rotation of(WalkingTrial trial, double shortestStride) {
+        Rotation first = along(trial, direction(trial, 0, trial.frames() - 1));
+        int[] strides = longestStrides(trial, first, shortestStride);
+        return strides.length == 0 ? first : along(trial, direction(trial, strides[0], strides[1]));
+    }
+
+    private static Rotation along(WalkingTrial trial, Vec3 direction) {
+        return Rotation.ofYandX(trial.up(), direction);
+    }
+
+    /** Horizontal velocity of the straight line fitted to the pelvis, by least squares over time. */
+    private static Vec3 direction(WalkingTrial trial, int from, int to) {
+        double meanFrame = 0;
+        Vec3 mean = Vec3.ZERO;
+        int n = 0;
+        for (int i = from; i <= to; i++) {
+            if (trial.pelvis().isTracked(i)) {
+                meanFrame += i;
+                mean = mean.plus(trial.pelvis().at(i));
+                n++;
+            }
+        }
+        if (n < 2) {
+            throw new IllegalArgumentException("pelvis tracked in " + n + " frames, expected at least 2");
+        }
+        meanFrame /= n;
+        mean = mean.times(1.0 / n);
+        Vec3 slope = Vec3.ZERO;
+        for (int i = from; i <= to; i++) {
+            if (trial.pelvis().isTracked(i)) {
+                slope = slope.plus(trial.pelvis().at(i).minus(mean).times(i - meanFrame));
+            }
+        }
+        return slope.minus(trial.up().times(slope.dot(trial.up())));
+    }
+
+    private static int[] longestStrides(WalkingTrial trial, Rotation R_LW, double shortestStride) {
+        int[] best = {};
+        for (Side side : trial.feet().keySet()) {
+            List<Integer> contacts = contactFrames(trial, R_LW, side, shortestStride);
+            if (contacts.size() > 1) {
+                int from = contacts.get(0);
+                int to = contacts.get(contacts.size() - 1);
+                if (best.length == 0 || to - from > best[1] - best[0]) {
+                    best = new int[] {from, to};
+                }
+            }
+        }
+        return best;
+    }
+
+    private static List<Integer> contactFrames(
+            WalkingTrial trial, Rotation R_LW, Side side, double shortestStride) {
+        FootTracks foot = trial.feet().get(side);
+        double[] ahead = new double[trial.frames()];
+        for (int i = 0; i < ahead.length; i++) {
+            ahead[i] = foot.heel(i).minus(trial.pelvis().at(i)).dot(R_LW.x());
+        }
+        return KinematicEvents.peaks(ahead, (int) Math.round(shortestStride * trial.rate()));
+    }
+
+    /**
+     * Time on the ground of both feet from kinematics.
+     *
+     * @param trial tracks in the laboratory frame
+     * @param R_LW walking frame
+     * @param shortestStride s
+     * @return footfalls in order of their start
+     */
+    static List<Footfall> footfalls(WalkingTrial trial, Rotation R_LW, double shortestStride) {
+        int apart = (int) Math.round(shortestStride * trial.rate());
+        Map<Side, List<Footfall>> bySide = new EnumMap<>(Side.class);
+        for (Side side : trial.feet().keySet()) {
+            FootTracks foot = trial.feet().get(side);
+            double[] behind = new double[trial.frames()];
+            for (int i = 0; i < behind.length; i++) {
+                behind[i] = trial.pelvis().at(i).minus(foot.headCentre(i)).dot(R_LW.x());
+            }
+            bySide.put(
+                    side,
+                    pair(side, trial, contactFrames(trial, R_LW, side, shortestStride), KinematicEvents.peaks(
+                            behind, apart)));
+        }
+        List<Footfall> all = new ArrayList<>();
+        bySide.values().forEach(all::addAll);
+        all.sort(java.util.Comparator.comparingDouble(Footfall::start));
+        return all;
+    }
+
+    private static List<Footfall> pair(Side side, WalkingTrial trial, List<Integer> contacts, List<Integer> offs) {
+        List<Footfall> falls = new ArrayList<>();
+        double first = trial.time(0);
+        double last = trial.time(trial.frames() - 1);
+        if (!offs.isEmpty() && (contacts.isEmpty() || offs.get(0) < contacts.get(0))) {
+            falls.add(new Footfall(side, first, trial.time(offs.get(0)), false, true));
+        }
+        for (int c : contacts) {
+            double end = last;
+            boolean seen = false;
+            for (int o : offs) {
+                if (o > c) {
+                    end = trial.time(o);
+                    seen = true;
+                    break;
+                }
+            }
+            falls.add(new Footfall(side, trial.time(c), end, true, seen));
+        }
+        return falls;
+    }
+}
