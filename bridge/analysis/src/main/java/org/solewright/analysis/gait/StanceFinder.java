@@ -119,7 +119,7 @@ final class StanceFinder {
     }
 
     private PlatformStance stance(PlatformLoads platform, ContactDetector.Loaded loaded, Side side) {
-        FootTracks foot = feet_W.get(side);
+        FootTracks foot = trial.foot(side).in(R_LW);
         int flat = trial.frame(loaded.start() + FLAT_AT * (loaded.end() - loaded.start()));
         Map<Border, Double> over = foot.isTracked(flat) ? overlaps(platform, foot, flat) : Map.of();
         Set<Use> excluded = EnumSet.noneOf(Use.class);

@@ -135,7 +135,7 @@ public final class StepFinder {
         WalkingTrial trial = pass.trial();
         double s = (stance.start() - trial.startTime()) * trial.rate();
         int frame = (int) Math.max(0, Math.min(trial.frames() - 2, Math.floor(s)));
-        FootTracks foot = trial.feet().get(stance.side());
+        FootTracks foot = trial.foot(stance.side());
         Vec3 p = foot.heel(frame).times(1 - (s - frame)).plus(foot.heel(frame + 1).times(s - frame));
         return pass.R_LW().inverseVector(p);
     }

@@ -77,7 +77,7 @@ final class WalkingFrame {
 
     private static List<Integer> contactFrames(
             WalkingTrial trial, Rotation R_LW, Side side, double shortestStride) {
-        FootTracks foot = trial.feet().get(side);
+        FootTracks foot = trial.foot(side);
         double[] ahead = new double[trial.frames()];
         for (int i = 0; i < ahead.length; i++) {
             ahead[i] = foot.heel(i).minus(trial.pelvis().at(i)).dot(R_LW.x());
@@ -97,7 +97,7 @@ final class WalkingFrame {
         int apart = (int) Math.round(shortestStride * trial.rate());
         Map<Side, List<Footfall>> bySide = new EnumMap<>(Side.class);
         for (Side side : trial.feet().keySet()) {
-            FootTracks foot = trial.feet().get(side);
+            FootTracks foot = trial.foot(side);
             double[] behind = new double[trial.frames()];
             for (int i = 0; i < behind.length; i++) {
                 behind[i] = trial.pelvis().at(i).minus(foot.headCentre(i)).dot(R_LW.x());

@@ -64,6 +64,21 @@ public record WalkingTrial(
         platforms = List.copyOf(platforms);
     }
 
+    /**
+     * Tracks of a foot.
+     *
+     * @param side one of {@link #feet()}
+     * @return tracks in the laboratory frame
+     * @throws IllegalArgumentException where that foot is not tracked
+     */
+    FootTracks foot(Side side) {
+        FootTracks foot = feet.get(side);
+        if (foot == null) {
+            throw new IllegalArgumentException(side.word() + " foot asked for, tracked are " + feet.keySet());
+        }
+        return foot;
+    }
+
     int frames() {
         return pelvis.frames();
     }

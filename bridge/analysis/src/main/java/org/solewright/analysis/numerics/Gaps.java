@@ -75,7 +75,7 @@ public final class Gaps {
         double[] y = new double[t.length];
         for (int c = 0; c < width; c++) {
             for (int k = 0; k < t.length; k++) {
-                y[k] = x[(int) t[k] * width + c];
+                y[k] = x[((int) t[k]) * width + c];
             }
             PolynomialSplineFunction spline = new SplineInterpolator().interpolate(t, y);
             for (int i = start; i < end; i++) {
