@@ -3,8 +3,10 @@ package org.solewright.analysis.cost;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.SplittableRandom;
+import org.solewright.analysis.gait.Step;
 import org.solewright.analysis.gait.StepLoads;
 import org.solewright.analysis.numerics.Series;
 import org.solewright.domain.cost.Measure;
@@ -38,6 +40,8 @@ public record StepMechanics(
     private static final double UP_DOUBT_STRIDE = 0.003;
     private static final double FORWARD_DOUBT = 0.02;
     private static final double MASS_DOUBT = 0.01;
+    private static final double STEADY_SPEED = 0.04;
+    private static final double STEADY_WORK = 0.1;
     private static final int DRAWS = 400;
     private static final long SEED = 20261201L;
 
@@ -51,10 +55,11 @@ public record StepMechanics(
     /**
      * Computes one transition.
      *
-     * @param loads the step
+     * @param step the step
      * @return its mechanics
      */
-    public static StepMechanics of(StepLoads loads) {
+    public static StepMechanics of(Step step) {
+        StepLoads loads = step.loads();
         CentreOfMassMotion motion = CentreOfMassMotion.over(
                 loads.totalForce().components(),
                 loads.windowFrom(),
@@ -69,6 +74,10 @@ public record StepMechanics(
         works(loads, motion, values, findings);
         kinematics(loads, motion, values);
         collision(loads, motion, values);
+        putFinite(values, Measure.STEP_LENGTH, step.length());
+        putFinite(values, Measure.STEP_WIDTH, step.width());
+        putFinite(values, Measure.STEP_TIME, step.time());
+        steadiness(step, values, findings);
         Map<Measure, Double> deviations = spread(loads, motion, values);
         return new StepMechanics(
                 values,
@@ -77,6 +86,29 @@ public record StepMechanics(
                 motion.power(loads.trailingForce().components()),
                 motion.power(loads.leadingForce().components()),
                 findings);
+    }
+
+    private static void steadiness(Step step, Map<Measure, Double> values, List<Finding> findings) {
+        double net = values.getOrDefault(Measure.COMBINED_POSITIVE, Double.NaN)
+                + values.getOrDefault(Measure.COMBINED_NEGATIVE, Double.NaN);
+        double perMass = net / values.getOrDefault(Measure.MASS, Double.NaN);
+        double slowest = step.neighbourSpeeds().stream().mapToDouble(v -> v).min().orElse(Double.NaN);
+        double fastest = step.neighbourSpeeds().stream().mapToDouble(v -> v).max().orElse(Double.NaN);
+        double change = fastest / slowest - 1;
+        if (Math.abs(perMass) >= STEADY_WORK || change > STEADY_SPEED) {
+            findings.add(Finding.warning(
+                    "gait.unsteady",
+                    place(step.loads()),
+                    String.format(
+                            Locale.ROOT,
+                            "net work %.3f J/kg (steady: under %.1f) and neighbouring steps from %.2f to %.2f m/s (steady:"
+                                    + " within %.0f %%); compare this step with steady ones only with care",
+                            perMass,
+                            STEADY_WORK,
+                            slowest,
+                            fastest,
+                            100 * STEADY_SPEED)));
+        }
     }
 
     private static void kinematics(StepLoads loads, CentreOfMassMotion motion, Map<Measure, Double> values) {

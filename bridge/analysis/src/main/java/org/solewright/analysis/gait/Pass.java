@@ -151,6 +151,46 @@ public final class Pass {
     }
 
     /**
+     * The load of a stance on one platform at a time, interpolated between samples.
+     *
+     * @param stance a stance of this pass
+     * @param time s
+     * @return the load; empty where the stance spans platforms or the time lies outside the samples
+     */
+    public Optional<StanceLoad> load(Stance stance, double time) {
+        if (stance.platforms().size() != 1) {
+            return Optional.empty();
+        }
+        for (PlatformLoads p : trial.platforms()) {
+            double s = (time - p.time(0)) * p.rate();
+            double nearest = Math.rint(s);
+            s = Math.abs(s - nearest) < 1e-6 ? nearest : s;
+            int i = (int) Math.floor(s);
+            if (p.number() != stance.platforms().get(0) || i < 0 || i >= p.samples()) {
+                continue;
+            }
+            double f = s - i;
+            if (f == 0) {
+                return Optional.of(new StanceLoad(p.vertical(i), p.centreOfPressure(i)));
+            }
+            if (i + 1 < p.samples()) {
+                return Optional.of(new StanceLoad(
+                        p.vertical(i) * (1 - f) + p.vertical(i + 1) * f,
+                        p.centreOfPressure(i).times(1 - f).plus(p.centreOfPressure(i + 1).times(f))));
+            }
+        }
+        return Optional.empty();
+    }
+
+    /**
+     * Load under one foot.
+     *
+     * @param vertical force against gravity, N
+     * @param centreOfPressure laboratory frame, m; NaN where unknown
+     */
+    public record StanceLoad(double vertical, Vec3 centreOfPressure) {}
+
+    /**
      * Contact of the other foot that ends a stance's single support, from platforms, else from kinematics.
      *
      * @param stance a stance of this pass

@@ -120,7 +120,28 @@ public final class StepFinder {
                 pass.settings().shortestPhase(),
                 pass.settings().gravity());
         double[] heels = heels(trailing, leading);
-        return Optional.of(new Step(number, loads, heels[0], heels[1], time));
+        return Optional.of(new Step(number, loads, heels[0], heels[1], time, neighbourSpeeds(trailing, leading)));
+    }
+
+    /** Speeds from contact to contact of the steps around the leading contact, platform contacts preferred. */
+    private List<Double> neighbourSpeeds(Stance trailing, Stance leading) {
+        List<Double> contacts = new ArrayList<>();
+        contacts.add(trailing.start());
+        contacts.add(leading.start());
+        for (Footfall f : pass.footfalls()) {
+            boolean isNew = f.isStartSeen()
+                    && contacts.stream().noneMatch(c -> Math.abs(c - f.start()) < pass.settings().shortestContact());
+            if (isNew) {
+                contacts.add(f.start());
+            }
+        }
+        contacts.sort(null);
+        int at = contacts.indexOf(trailing.start());
+        List<Double> speeds = new ArrayList<>();
+        for (int i = Math.max(0, at - 1); i <= Math.min(contacts.size() - 2, at + 1); i++) {
+            pass.pelvisVelocity(contacts.get(i), contacts.get(i + 1)).ifPresent(v -> speeds.add(v.x()));
+        }
+        return speeds;
     }
 
     /** Forward and sideways distance of the heels at their contacts. */
