@@ -123,23 +123,26 @@ public final class StepFinder {
         return Optional.of(new Step(number, loads, heels[0], heels[1], time, neighbourSpeeds(trailing, leading)));
     }
 
-    /** Speeds from contact to contact of the steps around the leading contact, platform contacts preferred. */
+    /**
+     * Speeds from contact to contact of this step and its neighbours. All contacts from kinematics: mixed with those from
+     * platforms their different delays would look like changes of speed. Where kinematics saw too few, from platforms.
+     */
     private List<Double> neighbourSpeeds(Stance trailing, Stance leading) {
-        List<Double> contacts = new ArrayList<>();
-        contacts.add(trailing.start());
-        contacts.add(leading.start());
-        for (Footfall f : pass.footfalls()) {
-            boolean isNew = f.isStartSeen()
-                    && contacts.stream().noneMatch(c -> Math.abs(c - f.start()) < pass.settings().shortestContact());
-            if (isNew) {
-                contacts.add(f.start());
-            }
+        List<Double> contacts = pass.footfalls().stream()
+                .filter(Footfall::isStartSeen)
+                .map(Footfall::start)
+                .filter(t -> Math.abs(t - trailing.start()) < 2 * trailing.duration())
+                .toList();
+        if (contacts.size() < 3) {
+            contacts = pass.stances().stream().map(Stance::start).toList();
         }
-        contacts.sort(null);
-        int at = contacts.indexOf(trailing.start());
         List<Double> speeds = new ArrayList<>();
-        for (int i = Math.max(0, at - 1); i <= Math.min(contacts.size() - 2, at + 1); i++) {
-            pass.pelvisVelocity(contacts.get(i), contacts.get(i + 1)).ifPresent(v -> speeds.add(v.x()));
+        for (int i = 0; i + 1 < contacts.size(); i++) {
+            boolean isNear = contacts.get(i + 1) > trailing.start() - 0.5 * trailing.duration()
+                    && contacts.get(i) < leading.start() + 0.5 * trailing.duration();
+            if (isNear) {
+                pass.pelvisVelocity(contacts.get(i), contacts.get(i + 1)).ifPresent(v -> speeds.add(v.x()));
+            }
         }
         return speeds;
     }

@@ -78,8 +78,8 @@ class CentreOfMassMotionTest {
             low = Math.min(low, d);
             high = Math.max(high, d);
         }
-        // exact velocity on a finer grid; samples 1 ms apart miss an extreme by at most (w 0.5 ms)^2/2 of its size.
-        assertThat(m.greatestTurn()).isCloseTo(high - low, within(0.4 * Math.pow(OMEGA * 0.0005, 2) / 2 + 1e-6));
+        // exact velocity on a finer grid; samples 1 ms apart miss an extreme by about (w 0.5 ms)^2/2.
+        assertThat(m.greatestTurn()).isCloseTo(high - low, within(2e-5));
     }
 
     private static double square(double x) {
