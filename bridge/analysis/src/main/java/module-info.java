@@ -7,6 +7,8 @@ module org.solewright.analysis {
     requires static transitive org.jspecify;
     requires commons.math3;
 
+    exports org.solewright.analysis.cost;
     exports org.solewright.analysis.fitting;
+    exports org.solewright.analysis.gait;
     exports org.solewright.analysis.numerics;
 }

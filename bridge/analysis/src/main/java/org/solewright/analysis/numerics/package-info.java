@@ -1,5 +1,6 @@
 /**
- * Numerical methods that know nothing of gait: roots, minima, small linear systems. Numbers in, numbers out; matrices
+ * Numerical methods that know nothing of gait: roots, minima, small linear systems, filters, gaps,
+ * sampled curves. Numbers in, numbers out; matrices
  * are flat and row-major.
  */
 @NullMarked
