@@ -1,0 +1,38 @@
+package org.solewright.analysis.cost;
+
+/**
+ * Work of the positive and of the negative part of a sampled power that runs straight between its samples, split at its
+ * zero crossings.
+ *
+ * @param positive J, not negative
+ * @param negative J, not positive
+ */
+public record PowerWork(double positive, double negative) {
+
+    /**
+     * The works of sampled power.
+     *
+     * @param power W, equally spaced, unmodified
+     * @param timeStep s, above 0
+     * @return both works; 0 for fewer than two samples
+     */
+    public static PowerWork of(double[] power, double timeStep) {
+        double positive = 0;
+        double negative = 0;
+        for (int i = 1; i < power.length; i++) {
+            double a = power[i - 1];
+            double b = power[i];
+            if (a >= 0 && b >= 0) {
+                positive += (a + b) / 2;
+            } else if (a <= 0 && b <= 0) {
+                negative += (a + b) / 2;
+            } else {
+                double high = Math.max(a, b);
+                double low = Math.min(a, b);
+                positive += high * high / (2 * (high - low));
+                negative -= low * low / (2 * (high - low));
+            }
+        }
+        return new PowerWork(positive * timeStep, negative * timeStep);
+    }
+}
