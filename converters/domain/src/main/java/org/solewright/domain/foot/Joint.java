@@ -56,8 +56,9 @@ public record Joint(
      * An axis of rotation.
      *
      * @param name such as {@code talocrural}
-     * @param direction unit vector in the proximal segment's frame, z component not negative on both sides of the body,
-     *     so that toes moving up or the sole turning inwards on a right foot count positive
+     * @param direction unit vector in the proximal segment's frame; about the transverse axes (talocrural, midtarsal,
+     *     metatarsophalangeal) z is positive, so that toes moving up count positive on both sides; the subtalar axis points
+     *     forward and up, so that turning the sole inwards counts positive on a right foot and negative on a left one
      * @param basis where it comes from
      * @param sd standard deviation of its direction, rad; empty where unknown
      */
