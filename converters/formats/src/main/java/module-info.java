@@ -7,10 +7,16 @@ module org.solewright.formats {
     requires static transitive org.jspecify;
     requires jakarta.xml.bind;
     requires java.xml;
+    requires de.siegmar.fastcsv;
 
     exports org.solewright.formats.footmodel;
     exports org.solewright.formats.io;
+    exports org.solewright.formats.table;
 
+    opens org.solewright.formats.footmodel.costxml to
+            jakarta.xml.bind;
+    opens org.solewright.formats.footmodel.footxml to
+            jakarta.xml.bind;
     opens org.solewright.formats.footmodel.landmarksxml to
             jakarta.xml.bind;
 }

@@ -29,7 +29,16 @@ public record PostureCost(
      * @param value with its unit
      * @param basis {@code given} by the user or {@code default}
      */
-    public record Setting(String name, String value, String basis) {}
+    public record Setting(String name, String value, String basis) {
+
+        /** Checks that the name says something and the basis is one of the two words. */
+        public Setting {
+            if (name.isBlank() || !(basis.equals("given") || basis.equals("default"))) {
+                throw new IllegalArgumentException(
+                        "setting '" + name + "' of basis '" + basis + "', expected given or default");
+            }
+        }
+    }
 
     /** Copies the lists. */
     public PostureCost {

@@ -12,8 +12,8 @@ import java.util.List;
  * @param start contact on the recording's clock, s
  * @param end foot-off on the recording's clock, s, not before {@code start}
  * @param whole whether all its load is known
- * @param usedFor what it is used for, one word each; no word contains a space or semicolon
- * @param notUsedFor what it is not used for, likewise
+ * @param usedFor what it is used for
+ * @param notUsedFor what it is not used for
  * @param why the reason in one sentence; empty where there is nothing to say
  */
 public record ContactRow(
@@ -23,11 +23,11 @@ public record ContactRow(
         double start,
         double end,
         boolean whole,
-        List<String> usedFor,
-        List<String> notUsedFor,
+        List<Use> usedFor,
+        List<Use> notUsedFor,
         String why) {
 
-    /** Copies the lists and checks the times and the words. */
+    /** Copies the lists and checks times and platforms. */
     public ContactRow {
         platforms = List.copyOf(platforms);
         usedFor = List.copyOf(usedFor);
@@ -38,16 +38,6 @@ public record ContactRow(
         for (int platform : platforms) {
             if (platform < 1) {
                 throw new IllegalArgumentException("platform number " + platform + ", expected 1 or more");
-            }
-        }
-        checkWords(usedFor);
-        checkWords(notUsedFor);
-    }
-
-    private static void checkWords(List<String> words) {
-        for (String word : words) {
-            if (word.isEmpty() || word.indexOf(' ') >= 0 || word.indexOf(';') >= 0) {
-                throw new IllegalArgumentException("use of a contact '" + word + "', expected one word");
             }
         }
     }

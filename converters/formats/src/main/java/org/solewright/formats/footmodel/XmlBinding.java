@@ -58,8 +58,16 @@ final class XmlBinding<T> {
     record Parsed<T>(T root, String source, IdentityHashMap<Object, Integer> lines) {
 
         FormatException wrong(Object element, String message) {
+            return new FormatException(source, place(element) + message, CORRECT);
+        }
+
+        FormatException wrong(Object element, String message, Throwable cause) {
+            return new FormatException(source, place(element) + message, CORRECT, cause);
+        }
+
+        private String place(Object element) {
             Integer line = lines.get(element);
-            return new FormatException(source, (line == null ? "" : "line " + line + ": ") + message, CORRECT);
+            return line == null ? "" : "line " + line + ": ";
         }
     }
 

@@ -17,18 +17,20 @@ public final class Spelling {
      *
      * @param written what was found
      * @param known what would have been right
-     * @return the closest, the first of several; empty where none lies within a third of the letters
+     * @return the closest, the first of several; empty where none lies within a third of the longer
+     *     word's letters
      */
     public static Optional<String> nearest(String written, Collection<String> known) {
         String word = written.toLowerCase(Locale.ROOT);
-        int best = Math.max(1, word.length() / 3) + 1;
+        int best = LONGEST;
         Optional<String> nearest = Optional.empty();
         for (String candidate : known) {
-            if (word.length() > LONGEST || Math.abs(candidate.length() - word.length()) >= best) {
+            int longer = Math.max(word.length(), candidate.length());
+            if (longer > LONGEST) {
                 continue;
             }
             int distance = distance(word, candidate.toLowerCase(Locale.ROOT));
-            if (distance < best) {
+            if (distance < best && distance <= Math.max(1, longer / 3)) {
                 best = distance;
                 nearest = Optional.of(candidate);
             }
