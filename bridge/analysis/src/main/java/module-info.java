@@ -8,6 +8,7 @@ module org.solewright.analysis {
     requires commons.math3;
 
     exports org.solewright.analysis.cost;
+    exports org.solewright.analysis.dynamics;
     exports org.solewright.analysis.fitting;
     exports org.solewright.analysis.gait;
     exports org.solewright.analysis.numerics;

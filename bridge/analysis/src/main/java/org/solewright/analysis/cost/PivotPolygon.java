@@ -1,5 +1,7 @@
 package org.solewright.analysis.cost;
 
+import org.solewright.domain.cost.WorkForm;
+
 /**
  * A step over a foot whose pivots lie anywhere in the limb frame (hip at the origin, limb axis down), so that the vaults
  * have different radii. The angle a transition subtends at the hip is 2 atan2(sqrt((s-a+b)(s+a-b)),
@@ -136,5 +138,36 @@ public final class PivotPolygon {
                 * Math.atan2(
                         Math.sqrt((s - a + b) * (s + a - b)),
                         Math.sqrt((a + b - s) * (a + b + s)));
+    }
+
+    /**
+     * Work of a transition over m v^2/2, v the speed before it.
+     *
+     * @param form how the work is counted
+     * @param transition zero-based
+     * @return factor, not negative
+     * @throws LimitException REVERSES_AT_TRANSITION for noPush from a right angle on
+     */
+    public double factor(WorkForm form, int transition) throws LimitException {
+        double angle = angle(transition);
+        if (form == WorkForm.NO_PUSH) {
+            RollingFoot.checkForward(angle);
+        }
+        return TransitionWork.factorOfAngle(form, angle);
+    }
+
+    /**
+     * Work of the step over m v^2/2, summed over its transitions.
+     *
+     * @param form how the work is counted
+     * @return factor, not negative
+     * @throws LimitException REVERSES_AT_TRANSITION for noPush where a transition reaches a right angle
+     */
+    public double factor(WorkForm form) throws LimitException {
+        double sum = 0;
+        for (int transition = 0; transition < transitions(); transition++) {
+            sum += factor(form, transition);
+        }
+        return sum;
     }
 }

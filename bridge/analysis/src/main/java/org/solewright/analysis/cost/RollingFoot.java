@@ -93,7 +93,7 @@ public record RollingFoot(
                             gap, stepLength, edge));
         }
         double contact = Math.asin(gap / (2 * edge));
-        double lean = contact + slope(arcHalfAngle, limbLength, arcRadius);
+        double lean = contact + edgeAngle(limbLength, arcRadius, arcHalfAngle);
         return new RollingFoot(stepLength, limbLength, arcRadius, arcHalfAngle, lean, contact, true);
     }
 
@@ -168,12 +168,17 @@ public record RollingFoot(
     }
 
     /**
-     * Lean of the line from contact to hip when the limb has rolled to the edge.
+     * Angle at the hip between the limb's axis and the arc's edge.
      *
      * @return rad; means something for a truncated arc
      */
     public double rolledHalfAngle() {
-        return slope(arcHalfAngle, limbLength, arcRadius);
+        return edgeAngle(limbLength, arcRadius, arcHalfAngle);
+    }
+
+    private static double edgeAngle(double limbLength, double arcRadius, double arcHalfAngle) {
+        return Math.atan2(
+                arcRadius * Math.sin(arcHalfAngle), limbLength - arcRadius + arcRadius * Math.cos(arcHalfAngle));
     }
 
     /**

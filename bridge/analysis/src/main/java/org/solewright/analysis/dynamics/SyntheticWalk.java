@@ -44,16 +44,15 @@ public final class SyntheticWalk {
      */
     public SyntheticWalk(WalkParameters parameters) {
         this.p = parameters;
-        this.radius = p.limbLength() - p.footLength();
-        int n = p.segments();
-        double inner = n > 0 ? p.footLength() / n : 0;
+        this.radius = p.radius();
+        double inner = p.innerSpacing();
         double last = p.stepLength() - p.footLength();
         if (!(radius > 0) || !(inner < 2 * radius) || !(last > 0) || !(last < 2 * radius)) {
             throw new IllegalArgumentException("walk with vault radius " + radius + " m, pivots " + inner + " and " + last
                     + " m apart, expected more than 0 m and less than two radii");
         }
         this.innerLean = Math.asin(inner / (2 * radius));
-        this.stepLean = Math.asin(last / (2 * radius));
+        this.stepLean = p.stepLean();
         if (!(topRateSquared() > 0)) {
             throw new IllegalArgumentException("walk with " + p.referenceSpeed() + " m/s at the step does not pass the top"
                     + " of a vault of " + radius + " m");
@@ -67,9 +66,7 @@ public final class SyntheticWalk {
     }
 
     private double topRateSquared() {
-        double half = Math.sin(stepLean / 2);
-        double speed = p.referenceSpeed();
-        return (speed * speed - 4 * p.gravity() * radius * half * half) / (radius * radius);
+        return p.topSpeedSquared() / (radius * radius);
     }
 
     private double rate(double lean) {

@@ -44,6 +44,56 @@ public record WalkParameters(
         }
     }
 
+    /**
+     * Radius of the vaults.
+     *
+     * @return L - f, m; not above 0 where nothing is left of the limb
+     */
+    public double radius() {
+        return limbLength - footLength;
+    }
+
+    /**
+     * Distance of neighbouring pivots of the foot.
+     *
+     * @return m; 0 without segments
+     */
+    public double innerSpacing() {
+        return segments > 0 ? footLength / segments : 0;
+    }
+
+    /**
+     * Lean at the ideal step transition.
+     *
+     * @return rad; NaN where the limb does not reach
+     */
+    public double stepLean() {
+        return Math.asin((stepLength - footLength) / (2 * radius()));
+    }
+
+    /**
+     * Square of the hip's speed at the top of a vault.
+     *
+     * @return m2/s2; not above 0 where the hip does not pass the top
+     */
+    public double topSpeedSquared() {
+        double half = Math.sin(stepLean() / 2);
+        return referenceSpeed * referenceSpeed - 4 * gravity * radius() * half * half;
+    }
+
+    /**
+     * Least push of the limb at the ends of the vaults as they are walked, over the mass: g cos a - v^2/l.
+     *
+     * @return m/s2; negative where the limb would have to pull
+     */
+    public double leastVaultPush() {
+        double lean = (1 - stepBridgeShare) * stepLean();
+        double inner = (1 - innerBridgeShare) * Math.asin(innerSpacing() / (2 * radius()));
+        double widest = Math.max(lean, inner);
+        double half = Math.sin(widest / 2);
+        return gravity * Math.cos(widest) - (topSpeedSquared() / radius() + 4 * gravity * half * half);
+    }
+
     private static void check(String name, double value, String unit) {
         if (!(value > 0) || Double.isInfinite(value)) {
             throw new IllegalArgumentException(

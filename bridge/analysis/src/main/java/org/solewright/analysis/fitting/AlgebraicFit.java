@@ -34,7 +34,7 @@ public final class AlgebraicFit {
      */
     public static Optional<FittedSphere> kasa(double[] points, int dimensions) {
         Centred c = new Centred(points, ones(points, dimensions), dimensions);
-        if (!(c.spread > 0)) {
+        if (!(c.spread > 0) || Double.isInfinite(c.spread)) {
             return Optional.empty();
         }
         int columns = dimensions + 2;
@@ -103,7 +103,7 @@ public final class AlgebraicFit {
      */
     public static Optional<FittedSphere> pratt(double[] points, int dimensions) {
         Centred c = new Centred(points, ones(points, dimensions), dimensions);
-        if (!(c.spread > 0)) {
+        if (!(c.spread > 0) || Double.isInfinite(c.spread)) {
             return Optional.empty();
         }
         int columns = dimensions + 2;
@@ -160,7 +160,7 @@ public final class AlgebraicFit {
      */
     public static Optional<FittedSphere> taubin(double[] points, double[] weights, int dimensions) {
         Centred c = new Centred(points, weights, dimensions);
-        if (!(c.spread > 0)) {
+        if (!(c.spread > 0) || Double.isInfinite(c.spread)) {
             return Optional.empty();
         }
         int columns = dimensions + 2;
