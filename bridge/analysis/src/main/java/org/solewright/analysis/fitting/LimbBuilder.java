@@ -108,8 +108,14 @@ final class LimbBuilder {
         return Optional.ofNullable(origins.get(name)).orElseThrow();
     }
 
+    /**
+     * One segment. How a foot's mass falls to its slices is an assumption, though their sum is not; of a table with one
+     * radius of gyration (Dempster) so is the tensor.
+     */
     private Segment segment(SegmentName name, Optional<SegmentName> parent, BodyMoments moments, double length) {
-        Basis basis = tableBasis();
+        boolean sliced = split.isPresent() && name != SegmentName.SHANK;
+        Basis basis = sliced ? Basis.ASSUMED : tableBasis();
+        Basis tensorBasis = settings.inertia() == InertiaTable.DEMPSTER ? Basis.ASSUMED : basis;
         double share = moments.mass() / settings.mass().value();
         OptionalDouble bodySd = settings.mass().sd();
         OptionalDouble sd =
@@ -123,12 +129,12 @@ final class LimbBuilder {
                 new Quantity(moments.mass(), basis, sd),
                 Located.of(moments.centre().minus(origin(name)), basis),
                 moments.inertia(),
-                basis,
+                tensorBasis,
                 Quantity.of(length, lengthBasis),
                 false);
     }
 
-    /** A table by sex for a subject of unknown sex, or for anybody but an adult, is an assumption. */
+    /** A table by sex for a subject of unknown sex, or for one who is not an adult, is an assumption. */
     private Basis tableBasis() {
         boolean sexNeeded = settings.inertia() == InertiaTable.DE_LEVA;
         return sexNeeded && settings.sex().isEmpty() ? Basis.ASSUMED : settings.adultRegression();

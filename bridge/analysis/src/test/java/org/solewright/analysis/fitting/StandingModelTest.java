@@ -150,6 +150,7 @@ class StandingModelTest {
         // head (0.14,-0.055,-0.02) in the foot's frame
         assertThat(foot.mass().value()).isCloseTo(0.0145 * 80, ROUNDING);
         assertThat(foot.mass().basis()).isEqualTo(Basis.REGRESSION);
+        assertThat(foot.inertiaBasis()).isEqualTo(Basis.ASSUMED);
         assertAt(foot.centreOfMass().position(), 0.0675, -0.03, 0.0125);
         double length2 = 0.145 * 0.145 + 0.05 * 0.05 + 0.065 * 0.065;
         // exact: the trace does not depend on the axes; radii keep the proportions of the mean of [de Leva 1996]'s sexes
@@ -198,6 +199,15 @@ class StandingModelTest {
         subject.remove(Landmark.TOE_TIP);
         assertThat(subject.limb(Side.RIGHT).segments().stream().map(Segment::name))
                 .containsExactly(SegmentName.SHANK, SegmentName.FOOT);
+    }
+
+    @Test
+    void massesOfSlicesAreAssumedThoughTheWholeIsNot() {
+        List<Segment> split = subject.limb(Side.RIGHT).segments();
+        assertThat(split.stream().map(s -> s.mass().basis()))
+                .containsExactly(Basis.REGRESSION, Basis.ASSUMED, Basis.ASSUMED);
+        subject.segments = OptionalInt.of(1);
+        assertThat(subject.limb(Side.RIGHT).segments().get(1).mass().basis()).isEqualTo(Basis.REGRESSION);
     }
 
     @Test
