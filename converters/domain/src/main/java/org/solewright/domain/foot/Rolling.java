@@ -94,7 +94,18 @@ public record Rolling(List<Arc> arcs, List<OutlinePoint> outline, List<Pivot> pi
      * @param from begin, per cent of stance
      * @param to end, per cent of stance
      */
-    public record Pivot(double position, double height, double from, double to) {}
+    public record Pivot(double position, double height, double from, double to) {
+
+        private static final double WHOLE = 100;
+
+        /** Checks that the place is finite and the times lie in order within stance. */
+        public Pivot {
+            if (!Double.isFinite(position + height) || !(from >= 0 && from <= to && to <= WHOLE)) {
+                throw new IllegalArgumentException("pivot at " + position + " m, " + height + " m high, from " + from
+                        + " to " + to + " % of stance, expected a finite place and 0 to 100 % in order");
+            }
+        }
+    }
 
     /**
      * A sphere.
@@ -103,7 +114,16 @@ public record Rolling(List<Arc> arcs, List<OutlinePoint> outline, List<Pivot> pi
      * @param centre in the knee frame, m
      * @param rms root mean square distance of the path from the sphere, m
      */
-    public record Cap(double radius, Vec3 centre, double rms) {}
+    public record Cap(double radius, Vec3 centre, double rms) {
+
+        /** Checks that the radius is more than 0 and all is finite. */
+        public Cap {
+            if (!(radius > 0) || !centre.isFinite() || !Double.isFinite(radius + rms)) {
+                throw new IllegalArgumentException("cap of radius " + radius + " m about " + centre + ", rms " + rms
+                        + " m, expected finite numbers and a radius of more than 0 m");
+            }
+        }
+    }
 
     /** Copies the lists. */
     public Rolling {

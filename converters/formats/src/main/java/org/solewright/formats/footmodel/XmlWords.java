@@ -28,8 +28,11 @@ final class XmlWords {
         return value == null ? OptionalDouble.empty() : OptionalDouble.of(Objects.requireNonNull(value));
     }
 
+    /** Sets an attribute where there is a finite number, such as not for the radius's deviation of a flat arc. */
     static void put(OptionalDouble value, DoubleConsumer setter) {
-        value.ifPresent(setter);
+        if (value.isPresent() && Double.isFinite(value.getAsDouble())) {
+            setter.accept(value.getAsDouble());
+        }
     }
 
     /**

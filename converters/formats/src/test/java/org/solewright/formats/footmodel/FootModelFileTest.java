@@ -9,6 +9,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import javax.xml.transform.stream.StreamSource;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -16,6 +18,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.foot.FootModel;
+import org.solewright.domain.foot.Rolling;
 import org.solewright.formats.io.FormatException;
 import org.xmlunit.builder.Input;
 import org.xmlunit.validation.Languages;
@@ -156,5 +159,38 @@ class FootModelFileTest {
         Path file = folder.resolve("odd.xml");
         FootModelFile.write(file, odd);
         assertThat(FootModelFile.read(file).findings().get(0).message()).isEqualTo("c\ufffd\ufffdd");
+    }
+
+    @Test
+    void deviationThatIsNotFiniteIsLeftOut() throws Exception {
+        FootModel model = InventedModel.full();
+        Rolling.Arc nearlyFlat = new Rolling.Arc(
+                Rolling.Frame.SHANK,
+                1e-200,
+                OptionalDouble.of(Double.NaN),
+                OptionalDouble.of(Double.POSITIVE_INFINITY),
+                OptionalDouble.empty(),
+                OptionalDouble.empty(),
+                0.2,
+                0.001,
+                1);
+        FootModel odd = new FootModel(
+                model.side(),
+                model.version(),
+                model.subject(),
+                model.sources(),
+                model.segments(),
+                model.joints(),
+                model.landmarks(),
+                new Rolling(List.of(nearlyFlat), List.of(), List.of(), Optional.empty()),
+                model.pads(),
+                model.findings(),
+                model.cautions());
+        Path file = folder.resolve("flat.xml");
+        FootModelFile.write(file, odd);
+        Rolling.Arc arc = FootModelFile.read(file).rolling().arcs().get(0);
+        assertThat(arc.radiusSd()).isEmpty();
+        assertThat(arc.curvatureSd()).isEmpty();
+        assertThat(arc.curvature()).isEqualTo(1e-200);
     }
 }
