@@ -9,6 +9,7 @@ module org.solewright.formats {
     requires java.xml;
     requires de.siegmar.fastcsv;
 
+    exports org.solewright.formats.c3d;
     exports org.solewright.formats.footmodel;
     exports org.solewright.formats.io;
     exports org.solewright.formats.table;

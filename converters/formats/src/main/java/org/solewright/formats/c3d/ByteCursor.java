@@ -1,0 +1,117 @@
+package org.solewright.formats.c3d;
+
+import org.solewright.formats.io.FormatException;
+
+/**
+ * Bounds-checked reading of numbers and text from a file's bytes in the order of one processor. Positions are offsets from
+ * the start of the file; a field that does not end inside the file is an error that names its offset.
+ */
+final class ByteCursor {
+
+    private final String source;
+    private final byte[] bytes;
+    private final Processor processor;
+
+    ByteCursor(String source, byte[] bytes, Processor processor) {
+        this.source = source;
+        this.bytes = bytes;
+        this.processor = processor;
+    }
+
+    ByteCursor as(Processor other) {
+        return new ByteCursor(source, bytes, other);
+    }
+
+    String source() {
+        return source;
+    }
+
+    int length() {
+        return bytes.length;
+    }
+
+    Processor processor() {
+        return processor;
+    }
+
+    boolean holds(long offset, long count) {
+        return offset >= 0 && count >= 0 && offset + count <= bytes.length;
+    }
+
+    int u8(int offset) throws FormatException {
+        check(offset, 1);
+        return bytes[offset] & 0xff;
+    }
+
+    int i8(int offset) throws FormatException {
+        check(offset, 1);
+        return bytes[offset];
+    }
+
+    int u16(int offset) throws FormatException {
+        check(offset, 2);
+        return rawU16(offset);
+    }
+
+    int i16(int offset) throws FormatException {
+        return (short) u16(offset);
+    }
+
+    float f32(int offset) throws FormatException {
+        check(offset, 4);
+        return rawF32(offset);
+    }
+
+    /** Without a check: the caller has made sure that the block lies inside the file. */
+    int rawU16(int offset) {
+        int a = bytes[offset] & 0xff;
+        int b = bytes[offset + 1] & 0xff;
+        return processor == Processor.MIPS ? (a << 8) | b : (b << 8) | a;
+    }
+
+    /** Without a check: the caller has made sure that the block lies inside the file. */
+    float rawF32(int offset) {
+        int a = bytes[offset] & 0xff;
+        int b = bytes[offset + 1] & 0xff;
+        int c = bytes[offset + 2] & 0xff;
+        int d = bytes[offset + 3] & 0xff;
+        return switch (processor) {
+            case INTEL -> Float.intBitsToFloat((d << 24) | (c << 16) | (b << 8) | a);
+            case MIPS -> Float.intBitsToFloat((a << 24) | (b << 16) | (c << 8) | d);
+            case DEC -> vax((b << 24) | (a << 16) | (d << 8) | c);
+        };
+    }
+
+    /**
+     * VAX F: sign, exponent with excess 128, fraction below a hidden 0.1; a quarter of what the bits mean in IEEE 754.
+     * Exponent 0 is 0 whatever the fraction.
+     */
+    private static float vax(int bits) {
+        int exponent = (bits >>> 23) & 0xff;
+        if (exponent == 0) {
+            return 0;
+        }
+        double fraction = ((bits & 0x7fffff) | 0x800000) / (double) (1 << 24);
+        double value = Math.scalb(fraction, exponent - 128);
+        return (float) (bits < 0 ? -value : value);
+    }
+
+    /** Text as stored: Windows-1252 where it is no valid UTF-8; trailing blanks and zeros dropped. */
+    String text(int offset, int count) throws FormatException {
+        check(offset, count);
+        int end = offset + count;
+        while (end > offset && (bytes[end - 1] == ' ' || bytes[end - 1] == 0)) {
+            end--;
+        }
+        return Text.decode(bytes, offset, end - offset);
+    }
+
+    private void check(int offset, int count) throws FormatException {
+        if (!holds(offset, count)) {
+            throw new FormatException(
+                    source,
+                    "ends at byte " + bytes.length + " inside a field of " + count + " bytes at offset " + offset,
+                    "get a complete copy of the file");
+        }
+    }
+}

@@ -1,0 +1,112 @@
+package org.solewright.formats.c3d;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.motion.RecordedEvent;
+import org.solewright.domain.motion.Recording;
+import org.solewright.formats.io.FormatException;
+
+/**
+ * A C3D file: its content in the file's own units, and what has to be said about it.
+ *
+ * @param name the file's name without folder
+ * @param processor whose numbers it holds
+ * @param isReal whether samples are reals, else integers
+ * @param firstFrame number of the first frame
+ * @param rate frames per second, Hz; NaN where no rate is stored
+ * @param unit length unit as stored; empty where unknown
+ * @param labels one per point; blank ones named {@code point_17}, repeated ones ended by {@code #2}
+ * @param points samples; none where only the header was read
+ * @param analogLabels one per channel
+ * @param analogUnits one per channel
+ * @param analog samples; none where only the header was read
+ * @param events EVENT group first, then header events
+ * @param parameters the parameter section
+ * @param platforms force platforms as stored
+ * @param declaredFrames frames that the file says it has
+ * @param findings what has to be said
+ */
+public record C3dFile(
+        String name,
+        Processor processor,
+        boolean isReal,
+        int firstFrame,
+        double rate,
+        String unit,
+        List<String> labels,
+        C3dPoints points,
+        List<String> analogLabels,
+        List<String> analogUnits,
+        C3dAnalog analog,
+        List<RecordedEvent> events,
+        C3dParameters parameters,
+        List<C3dPlatform> platforms,
+        long declaredFrames,
+        List<Finding> findings) {
+
+    /** Copies the lists. */
+    public C3dFile {
+        labels = List.copyOf(labels);
+        analogLabels = List.copyOf(analogLabels);
+        analogUnits = List.copyOf(analogUnits);
+        events = List.copyOf(events);
+        platforms = List.copyOf(platforms);
+        findings = List.copyOf(findings);
+    }
+
+    /**
+     * Reads a whole file.
+     *
+     * @param file a C3D file
+     * @return its content
+     * @throws IOException where it cannot be read
+     * @throws FormatException where it is no C3D file or ends before its first frame
+     */
+    public static C3dFile read(Path file) throws IOException, FormatException {
+        return read(file, true);
+    }
+
+    /**
+     * Reads header and parameters alone and touches no data block.
+     *
+     * @param file a C3D file
+     * @return its content without samples
+     * @throws IOException where it cannot be read
+     * @throws FormatException where it is no C3D file
+     */
+    public static C3dFile readHeader(Path file) throws IOException, FormatException {
+        return read(file, false);
+    }
+
+    private static C3dFile read(Path file, boolean withData) throws IOException, FormatException {
+        Path last = file.getFileName();
+        String name = last == null ? file.toString() : last.toString();
+        long size = Files.size(file);
+        if (size > Integer.MAX_VALUE - 8) {
+            throw new FormatException(
+                    file.toString(), "has " + size + " bytes, more than the 2 GB that can be read", "split the recording");
+        }
+        return new C3dReader(file.toString(), name, Files.readAllBytes(file), withData).read();
+    }
+
+    /**
+     * Number of frames read.
+     *
+     * @return zero or more
+     */
+    public int frames() {
+        return points.frames();
+    }
+
+    /**
+     * The content in SI units with platform loads on the subject.
+     *
+     * @return the recording; its findings are this file's and those of units and platforms
+     */
+    public Recording toRecording() {
+        return C3dRecording.of(this);
+    }
+}

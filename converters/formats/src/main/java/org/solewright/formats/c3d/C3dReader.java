@@ -1,0 +1,371 @@
+package org.solewright.formats.c3d;
+
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.RecordedEvent;
+import org.solewright.formats.io.FormatException;
+
+/** Reads one file: sniff, header, parameters, then data, each checked before anything is allocated. */
+final class C3dReader {
+
+    private static final int BLOCK = 512;
+    private static final int KEY = 0x50;
+    private static final int MOST_POINTS = 65535;
+
+    private final String source;
+    private final String name;
+    private final byte[] bytes;
+    private final boolean withData;
+    private final List<Finding> findings = new ArrayList<>();
+
+    C3dReader(String source, String name, byte[] bytes, boolean withData) {
+        this.source = source;
+        this.name = name;
+        this.bytes = bytes;
+        this.withData = withData;
+    }
+
+    C3dFile read() throws FormatException {
+        sniff();
+        ByteCursor any = new ByteCursor(source, bytes, Processor.INTEL);
+        int block = any.u8(0);
+        ByteCursor cursor = any.as(processor(any, block));
+        C3dHeader header = C3dHeader.read(cursor);
+        C3dParameters parameters = hasParameters(cursor, block)
+                ? C3dParameters.read(cursor, block, header.dataBlock(), findings)
+                : C3dParameters.none();
+        return assemble(cursor, header, parameters);
+    }
+
+    private void sniff() throws FormatException {
+        if (bytes.length == 0) {
+            throw new FormatException(source, "is empty", "get a complete copy of the file");
+        }
+        if (bytes.length < 2 || (bytes[1] & 0xff) != KEY) {
+            throw new FormatException(
+                    source,
+                    "is not a C3D file: byte 1 is " + (bytes.length < 2 ? "missing" : hex(bytes[1])) + ", expected 0x50",
+                    "give a C3D file");
+        }
+        if (bytes.length < BLOCK) {
+            throw new FormatException(
+                    source,
+                    "has " + bytes.length + " bytes, less than the header's 512",
+                    "get a complete copy of the file");
+        }
+    }
+
+    private static String hex(byte b) {
+        return "0x" + Integer.toHexString(b & 0xff);
+    }
+
+    private Processor processor(ByteCursor c, int block) throws FormatException {
+        long at = (block - 1L) * BLOCK;
+        if (block > 0 && c.holds(at, 4)) {
+            int key = c.u8((int) at + 3);
+            for (Processor p : Processor.values()) {
+                if (p.key() == key) {
+                    return p;
+                }
+            }
+            findings.add(Finding.warning(
+                    "processor.unknown",
+                    "",
+                    "the processor byte is " + key + ", expected 84, 85 or 86; it is told from the header's numbers"));
+        } else if (block > 0) {
+            throw new FormatException(
+                    source,
+                    "ends at byte " + bytes.length + " before its parameter section at byte " + at,
+                    "get a complete copy of the file");
+        }
+        return guess(c);
+    }
+
+    /** The processor under which the header's data block and rate make sense. */
+    private static Processor guess(ByteCursor c) throws FormatException {
+        for (Processor p : Processor.values()) {
+            C3dHeader h = C3dHeader.read(c.as(p));
+            if (h.rate() >= 1 && h.rate() < 1e5 && h.dataBlock() > 0 && h.dataBlock() < 1000) {
+                return p;
+            }
+        }
+        return Processor.INTEL;
+    }
+
+    private static boolean hasParameters(ByteCursor c, int block) {
+        return block > 0 && c.holds((block - 1L) * BLOCK, 8);
+    }
+
+    private C3dFile assemble(ByteCursor c, C3dHeader header, C3dParameters p) throws FormatException {
+        double stored = p.number("POINT", "SCALE");
+        float scale = Double.isNaN(stored) ? header.scale() : (float) stored;
+        boolean isReal = scale < 0;
+        DataLayout layout = layout(c, header, p, isReal);
+        long declared = FrameCount.declared(header, p);
+        layout = frames(c, layout, header, p);
+        double rate = p.number("POINT", "RATE");
+        if (!(rate > 0)) {
+            rate = header.rate() > 0 ? header.rate() : Double.NaN;
+        }
+        C3dPoints points = withData ? C3dPoints.read(c, layout, scale) : C3dPoints.none(layout.points());
+        flags(points);
+        List<String> labels = Labels.of(C3dParameter.joined(p.continued("POINT", "LABELS")), layout.points(), "point_");
+        List<String> analogLabels =
+                Labels.of(C3dParameter.joined(p.continued("ANALOG", "LABELS")), layout.channels(), "analog_");
+        List<String> analogUnits = new ArrayList<>();
+        List<String> units = C3dParameter.joined(p.continued("ANALOG", "UNITS"));
+        for (int k = 0; k < layout.channels(); k++) {
+            analogUnits.add(k < units.size() ? units.get(k) : "");
+        }
+        int firstFrame = FrameCount.first(header, p);
+        List<RecordedEvent> events = events(p);
+        events.addAll(header.events());
+        return new C3dFile(
+                name,
+                c.processor(),
+                isReal,
+                firstFrame,
+                rate,
+                p.find("POINT", "UNITS").map(u -> u.text(0)).orElse(""),
+                labels,
+                points,
+                analogLabels,
+                analogUnits,
+                analog(c, layout, p, rate),
+                events,
+                p,
+                platforms(p),
+                declared,
+                findings);
+    }
+
+    /** Points, channels and samples per frame: the file's size decides where header and parameters disagree. */
+    private DataLayout layout(ByteCursor c, C3dHeader header, C3dParameters p, boolean isReal) {
+        int block = header.dataBlock();
+        double stored = p.find("POINT", "DATA_START").map(d -> d.unsigned(0)).orElse(Double.NaN);
+        if (block < 1 && stored >= 1) {
+            block = (int) stored;
+        }
+        int start = (int) Math.min((Math.max(1, block) - 1L) * BLOCK, c.length());
+        int perFrame = header.analogPerFrame();
+        if (perFrame == 0) {
+            double ratio = p.number("ANALOG", "RATE") / p.number("POINT", "RATE");
+            perFrame = ratio >= 1 && ratio < 1e4 ? (int) Math.round(ratio) : header.analogWords() > 0 ? 1 : 0;
+        }
+        double used = p.find("ANALOG", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
+        int channels = Double.isNaN(used) ? header.analogWords() / Math.max(1, perFrame) : (int) used;
+        int points = header.points();
+        double usedPoints = p.find("POINT", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
+        if (!Double.isNaN(usedPoints) && usedPoints != points) {
+            findings.add(Finding.warning(
+                    "points.count",
+                    "",
+                    "the header says " + points + " points per frame, POINT:USED " + (int) usedPoints));
+            DataLayout byHeader = new DataLayout(start, 0, points, channels, perFrame, isReal);
+            DataLayout byParameters = new DataLayout(start, 0, (int) usedPoints, channels, perFrame, isReal);
+            long frames = FrameCount.declared(header, p);
+            if (misfit(c, byParameters, frames) < misfit(c, byHeader, frames)) {
+                points = (int) usedPoints;
+            }
+        }
+        DataLayout layout = new DataLayout(start, 0, Math.min(points, MOST_POINTS), channels, perFrame, isReal);
+        int words = header.analogWords();
+        if (words != channels * perFrame) {
+            long frames = FrameCount.declared(header, p);
+            int byWords = words / Math.max(1, perFrame);
+            DataLayout other = new DataLayout(start, 0, layout.points(), byWords, perFrame, isReal);
+            findings.add(Finding.warning(
+                    "analog.count",
+                    "",
+                    "the header says " + words + " analog words per frame, the parameters " + channels
+                            + " channels of " + perFrame + " samples"));
+            if (misfit(c, other, frames) < misfit(c, layout, frames)) {
+                layout = other;
+            }
+        }
+        return layout;
+    }
+
+    private static long misfit(ByteCursor c, DataLayout layout, long frames) {
+        long room = c.length() - (long) layout.start();
+        return Math.abs(room - frames * layout.frameBytes());
+    }
+
+    private DataLayout frames(ByteCursor c, DataLayout layout, C3dHeader header, C3dParameters p)
+            throws FormatException {
+        long room = Math.max(0, c.length() - (long) layout.start());
+        long bytes = layout.frameBytes();
+        if (bytes == 0) {
+            if (p.all().isEmpty()) {
+                throw new FormatException(
+                        source, "has neither parameters nor frames", "get a complete copy of the file");
+            }
+            return layout;
+        }
+        long fits = room / bytes;
+        long count = FrameCount.of(header, p, fits, findings);
+        if (count > fits) {
+            if (fits == 0 && p.all().isEmpty()) {
+                throw new FormatException(
+                        source,
+                        "ends at byte " + c.length() + " before its first frame at byte " + layout.start(),
+                        "get a complete copy of the file");
+            }
+            findings.add(Finding.warning(
+                    "file.truncated",
+                    "",
+                    "the file says " + count + " frames and ends after " + fits + " whole ones"));
+            count = fits;
+        } else if (room - count * bytes >= BLOCK) {
+            findings.add(Finding.note(
+                    "file.surplus", "", (room - count * bytes) + " bytes follow the last frame and are not read"));
+        }
+        return layout.withFrames((int) count);
+    }
+
+    private void flags(C3dPoints points) {
+        if (points.written65535() > 0) {
+            findings.add(Finding.note(
+                    "points.flag-65535",
+                    "",
+                    points.written65535() + " samples carry the flag 65535, which is -1 without its sign: missing"));
+        }
+        if (points.outOfRange() > 0) {
+            findings.add(Finding.note(
+                    "points.flag-range",
+                    "",
+                    points.outOfRange()
+                            + " samples carry a fourth word outside 16 bits: taken as valid with unknown residual"));
+        }
+        missingWithCoordinates(points);
+    }
+
+    private void missingWithCoordinates(C3dPoints points) {
+        if (points.frames() == 0 || points.points() == 0) {
+            return;
+        }
+        boolean isAnyPlaced = false;
+        for (int frame = 0; frame < points.frames(); frame++) {
+            for (int point = 0; point < points.points(); point++) {
+                if (points.isValid(frame, point)) {
+                    return;
+                }
+                isAnyPlaced |= points.coordinate(frame, point, 0) != 0 || points.coordinate(frame, point, 1) != 0;
+            }
+        }
+        if (isAnyPlaced) {
+            findings.add(Finding.warning(
+                    "points.all-missing",
+                    "",
+                    "every sample is flagged missing although coordinates are stored; the flags are obeyed"));
+        }
+    }
+
+    private C3dAnalog analog(ByteCursor c, DataLayout layout, C3dParameters p, double pointRate) {
+        int n = layout.channels();
+        if (n == 0 || layout.analogPerFrame() == 0) {
+            return new C3dAnalog(0, n, Double.NaN, new float[0], new double[n], new double[n]);
+        }
+        boolean isUnsigned = p.find("ANALOG", "FORMAT")
+                .map(f -> f.text(0).equalsIgnoreCase("UNSIGNED"))
+                .orElse(false);
+        double general = p.number("ANALOG", "GEN_SCALE");
+        double[] offset = new double[n];
+        double[] factor = new double[n];
+        List<C3dParameter> offsets = p.continued("ANALOG", "OFFSET");
+        List<C3dParameter> scales = p.continued("ANALOG", "SCALE");
+        for (int k = 0; k < n; k++) {
+            offset[k] = at(offsets, k, isUnsigned).orElse(0.0);
+            factor[k] = at(scales, k, false).orElse(1.0) * (Double.isNaN(general) ? 1 : general);
+        }
+        double rate = pointRate * layout.analogPerFrame();
+        float[] raw = withData ? C3dAnalog.raw(c, layout, isUnsigned) : new float[0];
+        int samples = withData ? layout.frames() * layout.analogPerFrame() : 0;
+        return new C3dAnalog(samples, n, rate, raw, offset, factor);
+    }
+
+    private static Optional<Double> at(List<C3dParameter> parts, int index, boolean isUnsigned) {
+        int k = index;
+        for (C3dParameter part : parts) {
+            if (k < part.count()) {
+                double v = isUnsigned ? part.unsigned(k) : part.number(k);
+                return Double.isNaN(v) ? Optional.empty() : Optional.of(v);
+            }
+            k -= part.count();
+        }
+        return Optional.empty();
+    }
+
+    private static List<RecordedEvent> events(C3dParameters p) {
+        List<RecordedEvent> events = new ArrayList<>();
+        Optional<C3dParameter> times = p.find("EVENT", "TIMES");
+        double used = p.find("EVENT", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
+        if (times.isEmpty()) {
+            return events;
+        }
+        List<String> labels = C3dParameter.joined(p.continued("EVENT", "LABELS"));
+        List<String> contexts = C3dParameter.joined(p.continued("EVENT", "CONTEXTS"));
+        int stored = times.get().count() / 2;
+        int count = Double.isNaN(used) ? stored : (int) Math.min(used, stored);
+        for (int k = 0; k < count; k++) {
+            double time = 60 * times.get().number(2 * k) + times.get().number(2 * k + 1);
+            if (Double.isFinite(time)) {
+                events.add(new RecordedEvent(
+                        time,
+                        k < contexts.size() ? contexts.get(k) : "",
+                        k < labels.size() ? labels.get(k) : "",
+                        RecordedEvent.Source.GROUP));
+            }
+        }
+        return events;
+    }
+
+    private static List<C3dPlatform> platforms(C3dParameters p) {
+        List<C3dPlatform> platforms = new ArrayList<>();
+        String group = "FORCE_PLATFORM";
+        double used = p.find(group, "USED").map(u -> u.unsigned(0)).orElse(0.0);
+        Optional<C3dParameter> types = p.find(group, "TYPE");
+        Optional<C3dParameter> channels = p.find(group, "CHANNEL");
+        Optional<C3dParameter> calibration = p.find(group, "CAL_MATRIX");
+        int perPlatform = channels.filter(c -> !c.dimensions().isEmpty())
+                .map(c -> c.dimensions().get(0))
+                .orElse(0);
+        int count = (int) Math.min(Double.isNaN(used) ? 0 : used, types.map(C3dParameter::count).orElse(0));
+        Map<String, C3dParameter> found = new HashMap<>();
+        p.find(group, "CORNERS").ifPresent(v -> found.put("CORNERS", v));
+        p.find(group, "ORIGIN").ifPresent(v -> found.put("ORIGIN", v));
+        int matrix = calibration
+                .filter(c -> c.dimensions().size() >= 2)
+                .map(c -> c.dimensions().get(0) * c.dimensions().get(1))
+                .orElse(0);
+        for (int k = 0; k < count; k++) {
+            List<Vec3> corners = new ArrayList<>();
+            for (int i = 0; i < 4; i++) {
+                corners.add(triple(found.get("CORNERS"), 4 * k + i));
+            }
+            List<Integer> of = new ArrayList<>();
+            for (int i = 0; i < perPlatform; i++) {
+                double v = channels.get().unsigned(k * perPlatform + i);
+                of.add(Double.isNaN(v) ? 0 : (int) v);
+            }
+            List<Double> values = new ArrayList<>();
+            for (int i = 0; i < matrix && (k + 1) * matrix <= calibration.get().count(); i++) {
+                values.add(calibration.get().number(k * matrix + i));
+            }
+            int type = (int) types.get().number(k);
+            platforms.add(new C3dPlatform(k + 1, type, corners, triple(found.get("ORIGIN"), k), of, values));
+        }
+        return platforms;
+    }
+
+    private static Vec3 triple(@org.jspecify.annotations.Nullable C3dParameter p, int index) {
+        return p == null
+                ? new Vec3(Double.NaN, Double.NaN, Double.NaN)
+                : new Vec3(p.number(3 * index), p.number(3 * index + 1), p.number(3 * index + 2));
+    }
+}

@@ -1,0 +1,312 @@
+package org.solewright.formats.c3d;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.gait.PlatformLoads;
+import org.solewright.domain.geometry.Vec3;
+
+/**
+ * Force-platform channels to the ground reaction on the subject, in the laboratory frame (types 1 to 4).
+ *
+ * <p>Platform axes P: x along c1 + c4 - c2 - c3, z = x cross (c1 + c2 - c3 - c4), pointing down. ORIGIN points from the
+ * measuring origin to the surface centre, so its z is negative; files with a positive one mean the opposite. Moments are
+ * force times the file's length unit whatever the label says. Whether a file stores reaction or action is told by the sign
+ * of the vertical force on its most loaded platform.
+ */
+final class PlatformReader {
+
+    private static final int FORCES = 3;
+    private static final double UNLOADED = 10;
+    private static final double RISE = 50;
+    private static final double LOW_PERCENTILE = 0.005;
+
+    private final C3dFile file;
+    private final double metres;
+    private final boolean isUnitKnown;
+    private final List<Finding> findings;
+
+    PlatformReader(C3dFile file, double metres, boolean isUnitKnown, List<Finding> findings) {
+        this.file = file;
+        this.metres = metres;
+        this.isUnitKnown = isUnitKnown;
+        this.findings = findings;
+    }
+
+    /** Platform axes in the laboratory frame. */
+    private record Axes(Vec3 x, Vec3 y, Vec3 z) {
+        static Axes of(List<Vec3> c) {
+            Vec3 x = c.get(0).plus(c.get(3)).minus(c.get(1)).minus(c.get(2)).unit();
+            Vec3 z = x.cross(c.get(0).plus(c.get(1)).minus(c.get(2)).minus(c.get(3)))
+                    .unit();
+            return new Axes(x, z.cross(x), z);
+        }
+
+        Vec3 toLaboratory(double[] v, int at, double sign) {
+            return x.times(sign * v[at]).plus(y.times(sign * v[at + 1])).plus(z.times(sign * v[at + 2]));
+        }
+    }
+
+    /** A platform that can be used, with its wrench in platform axes about the surface centre, before the sign. */
+    private static final class Usable {
+        private final C3dPlatform platform;
+        private final Axes axes;
+        private final boolean hasCop;
+        private final double[] force;
+        private final double[] moment;
+
+        Usable(C3dPlatform platform, Axes axes, boolean hasCop, double[] force, double[] moment) {
+            this.platform = platform;
+            this.axes = axes;
+            this.hasCop = hasCop;
+            this.force = force;
+            this.moment = moment;
+        }
+
+        double vertical(int sample) {
+            return -force[FORCES * sample + 2];
+        }
+    }
+
+    List<PlatformLoads> loads() {
+        List<Usable> usable = new ArrayList<>();
+        for (C3dPlatform p : file.platforms()) {
+            usable(p).ifPresent(usable::add);
+        }
+        double sign = sign(usable);
+        List<PlatformLoads> loads = new ArrayList<>();
+        for (Usable u : usable) {
+            loads.add(loads(u, sign));
+        }
+        return loads;
+    }
+
+    private Optional<Usable> usable(C3dPlatform p) {
+        String where = "platform " + p.number();
+        int channels = p.type() == 3 ? 8 : 6;
+        if (p.type() < 1 || p.type() > 4) {
+            return refuse(where, "is of type " + p.type() + ", which this version does not read");
+        }
+        if (p.channels().size() < channels
+                || p.channels().subList(0, channels).stream()
+                        .anyMatch(c -> c < 1 || c > file.analog().channels())) {
+            return refuse(where, "names channels " + p.channels() + ", expected " + channels + " between 1 and "
+                    + file.analog().channels());
+        }
+        if (!p.corners().stream().allMatch(Vec3::isFinite)) {
+            return refuse(where, "has corners that are not finite");
+        }
+        if (isUnitKnown && !LengthUnit.hasPlausibleSides(p.corners(), metres)) {
+            return refuse(where, "has sides outside 0.05 to 3 m");
+        }
+        Axes axes;
+        try {
+            axes = Axes.of(p.corners());
+        } catch (IllegalArgumentException e) {
+            return refuse(where, "has corners that span no plane");
+        }
+        if (p.type() == 4 && p.calibration().size() < 36) {
+            return refuse(where, "is of type 4 and has no 6 x 6 calibration matrix");
+        }
+        boolean hasOrigin = p.origin().isFinite();
+        boolean isZero = hasOrigin && p.origin().norm() == 0;
+        boolean hasCop = isUnitKnown && (p.type() == 1 || (hasOrigin && !(p.type() == 3 && isZero)));
+        if (!hasCop) {
+            findings.add(Finding.warning(
+                    "platform.no-cop",
+                    where,
+                    (isUnitKnown ? "its ORIGIN is " + (isZero ? "0" : "not stored") : "the length unit is not known")
+                            + ": its forces are used, a centre of pressure cannot be computed"));
+        }
+        return Optional.of(wrench(p, axes, hasCop));
+    }
+
+    private Optional<Usable> refuse(String where, String why) {
+        findings.add(Finding.warning(
+                "platform.unusable", where, "the platform " + why + "; it is left out, the others are used"));
+        return Optional.empty();
+    }
+
+    private Vec3 origin(C3dPlatform p) {
+        Vec3 o = p.origin();
+        if (!o.isFinite()) {
+            return Vec3.ZERO;
+        }
+        boolean isUpward = o.z() > 0;
+        if (isUpward && p.type() != 1) {
+            findings.add(Finding.warning(
+                    "platform.origin-sign",
+                    "platform " + p.number(),
+                    String.format(
+                            Locale.ROOT,
+                            "ORIGIN has z = %.1f %s, expected negative (from the measuring origin to the surface, z down);"
+                                    + " %s reversed",
+                            o.z(),
+                            file.unit(),
+                            p.type() == 3 ? "its z is" : "it is")));
+        }
+        if (p.type() == 3) {
+            return new Vec3(o.x(), o.y(), isUpward ? -o.z() : o.z());
+        }
+        return isUpward ? o.times(-1) : o;
+    }
+
+    private Usable wrench(C3dPlatform p, Axes axes, boolean hasCop) {
+        int n = file.analog().samples();
+        int width = p.type() == 3 ? 8 : 6;
+        double[] c = channels(p, n, width);
+        Vec3 o = origin(p);
+        // ORIGIN 1 and 2 of type 3 are the sensors' distances a and b, not a place.
+        Vec3 arm = p.type() == 3 ? new Vec3(0, 0, o.z()) : o;
+        double[] force = new double[FORCES * n];
+        double[] moment = new double[FORCES * n];
+        double[] w = new double[6];
+        for (int i = 0; i < n; i++) {
+            six(p, c, i * width, o, w);
+            int at = FORCES * i;
+            System.arraycopy(w, 0, force, at, FORCES);
+            if (p.type() == 1) {
+                // Channels 4 and 5 are the centre of pressure from the surface centre, 6 the free moment about it.
+                moment[at] = w[4] * w[2] * metres;
+                moment[at + 1] = -w[3] * w[2] * metres;
+                moment[at + 2] = (w[3] * w[1] - w[4] * w[0] + w[5]) * metres;
+            } else {
+                // M about the surface centre = M about the measuring origin - o x F.
+                moment[at] = (w[3] - (arm.y() * w[2] - arm.z() * w[1])) * metres;
+                moment[at + 1] = (w[4] - (arm.z() * w[0] - arm.x() * w[2])) * metres;
+                moment[at + 2] = (w[5] - (arm.x() * w[1] - arm.y() * w[0])) * metres;
+            }
+        }
+        return new Usable(p, axes, hasCop, force, moment);
+    }
+
+    /** Forces and moments about the measuring origin (type 1: centre of pressure and free moment), file's units. */
+    private static void six(C3dPlatform p, double[] c, int at, Vec3 o, double[] w) {
+        if (p.type() == 3) {
+            double a = o.x();
+            double b = o.y();
+            w[0] = c[at] + c[at + 1];
+            w[1] = c[at + 2] + c[at + 3];
+            w[2] = c[at + 4] + c[at + 5] + c[at + 6] + c[at + 7];
+            w[3] = b * (c[at + 4] + c[at + 5] - c[at + 6] - c[at + 7]);
+            w[4] = a * (-c[at + 4] + c[at + 5] + c[at + 6] - c[at + 7]);
+            w[5] = b * (-c[at] + c[at + 1]) + a * (c[at + 2] - c[at + 3]);
+        } else if (p.type() == 4) {
+            for (int row = 0; row < 6; row++) {
+                double sum = 0;
+                for (int column = 0; column < 6; column++) {
+                    sum += p.calibration().get(6 * column + row) * c[at + column];
+                }
+                w[row] = sum;
+            }
+        } else {
+            System.arraycopy(c, at, w, 0, 6);
+        }
+    }
+
+    /** The platform's channels, {@code [samples][width]}, less the mean of the ZERO window where that is unloaded. */
+    private double[] channels(C3dPlatform p, int n, int width) {
+        double[] c = new double[n * width];
+        for (int k = 0; k < width; k++) {
+            int channel = p.channels().get(k) - 1;
+            for (int i = 0; i < n; i++) {
+                c[i * width + k] = file.analog().value(i, channel);
+            }
+        }
+        int[] window = zeroWindow(n);
+        if (window.length == 0 || !isUnloaded(p, c, n, width, window)) {
+            return c;
+        }
+        for (int k = 0; k < width; k++) {
+            double sum = 0;
+            for (int i = window[0]; i < window[1]; i++) {
+                sum += c[i * width + k];
+            }
+            double mean = sum / (window[1] - window[0]);
+            for (int i = 0; i < n; i++) {
+                c[i * width + k] -= mean;
+            }
+        }
+        return c;
+    }
+
+    /** Samples of the ZERO window, from inclusive, to exclusive; empty where there is none. */
+    private int[] zeroWindow(int n) {
+        Optional<C3dParameter> zero = file.parameters().find("FORCE_PLATFORM", "ZERO");
+        int frames = file.frames();
+        if (zero.isEmpty() || zero.get().count() < 2 || frames == 0) {
+            return new int[0];
+        }
+        int perFrame = n / frames;
+        long first = Math.max(1, (long) zero.get().number(0));
+        long last = Math.min(frames, (long) zero.get().number(1));
+        return last < first ? new int[0] : new int[] {(int) (first - 1) * perFrame, (int) last * perFrame};
+    }
+
+    private boolean isUnloaded(C3dPlatform p, double[] c, int n, int width, int[] window) {
+        double[] vertical = new double[n];
+        double[] w = new double[6];
+        for (int i = 0; i < n; i++) {
+            six(p, c, i * width, p.origin(), w);
+            vertical[i] = w[2];
+        }
+        double[] sorted = vertical.clone();
+        Arrays.sort(sorted);
+        // The stored sign is not known yet: the load rises to the side on which the extreme is farther from the median.
+        double median = sorted[n / 2];
+        boolean isNegative = median - sorted[0] > sorted[n - 1] - median;
+        int rank = (int) Math.round(LOW_PERCENTILE * (n - 1));
+        double low = isNegative ? -sorted[n - 1 - rank] : sorted[rank];
+        double high = isNegative ? -sorted[0] : sorted[n - 1];
+        double mean = 0;
+        for (int i = window[0]; i < window[1]; i++) {
+            mean += (isNegative ? -vertical[i] : vertical[i]) / (window[1] - window[0]);
+        }
+        return Math.abs(mean - low) <= UNLOADED && high - low > RISE;
+    }
+
+    /** +1 where the file stores the reaction on the subject, -1 where it stores the action on the floor. */
+    private static double sign(List<Usable> usable) {
+        double extreme = 0;
+        for (Usable u : usable) {
+            for (int i = 0; i < u.force.length / FORCES; i++) {
+                double v = u.vertical(i);
+                if (Math.abs(v) > Math.abs(extreme)) {
+                    extreme = v;
+                }
+            }
+        }
+        return extreme < 0 ? -1 : 1;
+    }
+
+    private PlatformLoads loads(Usable u, double sign) {
+        int n = u.force.length / FORCES;
+        double[] force = new double[FORCES * n];
+        double[] moment = new double[FORCES * n];
+        for (int i = 0; i < n; i++) {
+            put(u.axes.toLaboratory(u.force, FORCES * i, sign), force, FORCES * i);
+            put(u.axes.toLaboratory(u.moment, FORCES * i, sign), moment, FORCES * i);
+        }
+        List<Vec3> corners =
+                u.platform.corners().stream().map(c -> c.times(metres)).toList();
+        return new PlatformLoads(
+                u.platform.number(),
+                u.platform.type(),
+                corners,
+                u.axes.z().times(-1),
+                file.analog().rate(),
+                (file.firstFrame() - 1) / file.rate(),
+                u.hasCop,
+                force,
+                moment);
+    }
+
+    private static void put(Vec3 v, double[] out, int at) {
+        out[at] = v.x();
+        out[at + 1] = v.y();
+        out[at + 2] = v.z();
+    }
+}
