@@ -18,7 +18,7 @@ import picocli.CommandLine.ScopeType;
         versionProvider = Version.class,
         scope = ScopeType.INHERIT,
         synopsisSubcommandLabel = "COMMAND",
-        subcommands = {SolveCommand.class})
+        subcommands = {SolveCommand.class, PosturesCommand.class})
 public final class Main {
 
     @Option(names = "--trace", scope = ScopeType.INHERIT, description = "Print a stack trace with an error.")

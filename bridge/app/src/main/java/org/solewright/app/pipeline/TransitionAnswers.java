@@ -15,6 +15,7 @@ import org.solewright.analysis.cost.Halving;
 import org.solewright.analysis.cost.LimitException;
 import org.solewright.analysis.cost.OptimumFoot;
 import org.solewright.analysis.cost.VaultingStep;
+import org.solewright.domain.cost.FootRule;
 import org.solewright.domain.cost.WorkForm;
 
 /** The questions {@code transition.*}. */
@@ -62,27 +63,19 @@ final class TransitionAnswers {
                         "workForm"));
     }
 
-    /** How the foot length is chosen. */
-    private enum FootRule {
-        GIVEN,
-        EQUAL,
-        OPTIMUM
-    }
-
     /** A step with its factor in one form. */
     private record Costed(WorkForm form, VaultingStep step, double factor) {}
 
     private static FootRule footRule(QuestionInputs in) throws CallerError {
-        String word = in.word("footRule").orElse("given");
-        return switch (word) {
-            case "given" -> FootRule.GIVEN;
-            case "equal" -> FootRule.EQUAL;
-            case "optimum" -> FootRule.OPTIMUM;
-            default -> throw new CallerError(
-                    CallerError.Code.WRONG_TYPE,
-                    "input 'footRule' is \"" + QuestionInputs.shown(word)
-                            + "\", expected one of given, equal, optimum");
-        };
+        String word = in.word("footRule").orElse(FootRule.GIVEN.word());
+        for (FootRule rule : FootRule.values()) {
+            if (rule.word().equals(word)) {
+                return rule;
+            }
+        }
+        throw new CallerError(
+                CallerError.Code.WRONG_TYPE,
+                "input 'footRule' is \"" + QuestionInputs.shown(word) + "\", expected one of given, equal, optimum");
     }
 
     private static ObjectNode step(QuestionInputs in) throws CallerError, LimitException {
