@@ -249,7 +249,7 @@ public final class LandmarkTracks {
      * Tracks of one foot as the contact analysis needs them.
      *
      * @param side the foot
-     * @return tracks; empty where heel or every metatarsal head is missing
+     * @return tracks; empty where heel or every forefoot landmark is missing
      */
     public Optional<FootTracks> foot(Side side) {
         List<double[]> heads = new ArrayList<>();
@@ -258,6 +258,9 @@ public final class LandmarkTracks {
             track(l, side).ifPresent(heads::add);
         }
         Optional<double[]> toe = track(Landmark.TOE_TIP, side).or(() -> track(Landmark.HALLUX_TIP, side));
+        if (heads.isEmpty()) {
+            toe.ifPresent(heads::add);
+        }
         return heads.isEmpty()
                 ? Optional.empty()
                 : track(Landmark.CALCANEUS_POSTERIOR, side).map(heel -> new FootTracks(heel, heads, toe));

@@ -80,6 +80,26 @@ public final class Pass {
     }
 
     /**
+     * The same pass with the user's verdicts on its stances.
+     *
+     * @param judged stances in the same order and number as {@link #stances()}
+     * @param more findings to be added
+     * @return the pass
+     * @throws IllegalArgumentException where the number differs
+     */
+    public Pass judged(List<Stance> judged, List<Finding> more) {
+        if (judged.size() != stances.size()) {
+            throw new IllegalArgumentException(
+                    judged.size() + " verdicts for " + stances.size() + " stances, expected as many");
+        }
+        List<PlatformStance> changed = new ArrayList<>();
+        for (int i = 0; i < judged.size(); i++) {
+            changed.add(stances.get(i).with(judged.get(i)));
+        }
+        return with(changed, more);
+    }
+
+    /**
      * The recording.
      *
      * @return as given

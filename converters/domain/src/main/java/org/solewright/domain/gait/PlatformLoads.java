@@ -216,4 +216,14 @@ public final class PlatformLoads {
     public void copyForceTo(double[] out, int offset) {
         System.arraycopy(force, 0, out, offset, force.length);
     }
+
+    /**
+     * All moment samples into the caller's array.
+     *
+     * @param out target, {@code [samples][3]} row-major, N m, about the surface centre, laboratory frame
+     * @param offset first index written
+     */
+    public void copyMomentTo(double[] out, int offset) {
+        System.arraycopy(moment, 0, out, offset, moment.length);
+    }
 }

@@ -1,0 +1,51 @@
+package org.solewright.analysis.gait;
+
+import java.util.List;
+import java.util.Optional;
+import org.solewright.domain.finding.Basis;
+import org.solewright.domain.finding.Quantity;
+import org.solewright.domain.gait.Use;
+
+/**
+ * The subject's mass from the mean vertical load of work windows: over those with two whole contacts, else over all.
+ *
+ * @param mass kg, measured, with its SD: between windows, for one window the 1 % of a window's mass
+ * @param windows how many windows
+ * @param isWhole whether the windows had two whole contacts
+ */
+public record SubjectMass(Quantity mass, int windows, boolean isWhole) {
+
+    private static final double WINDOW_DOUBT = 0.01;
+
+    /**
+     * The mass.
+     *
+     * @param steps steps by pass
+     * @return empty where there is no step
+     */
+    public static Optional<SubjectMass> of(List<List<Step>> steps) {
+        List<Step> all = steps.stream().flatMap(List::stream).toList();
+        List<Step> whole = all.stream()
+                .filter(s -> s.loads().trailing().allows(Use.MASS) && s.loads().leading().allows(Use.MASS))
+                .toList();
+        List<Step> used = whole.isEmpty() ? all : whole;
+        if (used.isEmpty()) {
+            return Optional.empty();
+        }
+        double[] masses = used.stream()
+                .mapToDouble(s -> s.loads().totalForce().up().mean(s.loads().windowFrom(), s.loads().windowTo())
+                        / s.loads().gravity())
+                .toArray();
+        double mean = 0;
+        for (double m : masses) {
+            mean += m / masses.length;
+        }
+        double sum = 0;
+        for (double m : masses) {
+            sum += (m - mean) * (m - mean);
+        }
+        double sd = masses.length > 1 ? Math.sqrt(sum / (masses.length - 1)) : WINDOW_DOUBT * mean;
+        return Optional.of(
+                new SubjectMass(Quantity.of(mean, Basis.MEASURED, sd), masses.length, !whole.isEmpty()));
+    }
+}

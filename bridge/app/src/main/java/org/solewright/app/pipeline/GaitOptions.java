@@ -1,0 +1,48 @@
+package org.solewright.app.pipeline;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.solewright.domain.foot.Population;
+import org.solewright.domain.foot.Sex;
+
+/**
+ * What fit and appraise are given in common.
+ *
+ * @param standing standing recordings; several are pooled; may be empty for appraise
+ * @param walking walking recordings, at least one
+ * @param landmarks landmark map
+ * @param mass body mass, kg
+ * @param stature body height, m
+ * @param population whose regressions apply
+ * @param sex where given
+ * @param contacts a contacts table that overrides what was found
+ * @param floor height of the floor along up in the laboratory frame, m
+ * @param isMirrored whether the laboratory frame is to be mirrored
+ * @param markerRadius m
+ * @param markerCutoff low-pass for markers, Hz; 0: none
+ */
+public record GaitOptions(
+        List<Path> standing,
+        List<Path> walking,
+        Path landmarks,
+        OptionalDouble mass,
+        OptionalDouble stature,
+        Population population,
+        Optional<Sex> sex,
+        Optional<Path> contacts,
+        OptionalDouble floor,
+        boolean isMirrored,
+        OptionalDouble markerRadius,
+        double markerCutoff) {
+
+    /** Low-pass for markers where none is given, Hz (03 section 2). */
+    public static final double DEFAULT_MARKER_CUTOFF = 10;
+
+    /** Copies the lists. */
+    public GaitOptions {
+        standing = List.copyOf(standing);
+        walking = List.copyOf(walking);
+    }
+}

@@ -1,0 +1,266 @@
+package org.solewright.app.pipeline;
+
+import java.util.ArrayList;
+import java.util.EnumMap;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import org.solewright.analysis.gait.ContactReview;
+import org.solewright.analysis.gait.FootTracks;
+import org.solewright.analysis.gait.GaitSettings;
+import org.solewright.analysis.gait.LandmarkTracks;
+import org.solewright.analysis.gait.Mirror;
+import org.solewright.analysis.gait.Pass;
+import org.solewright.analysis.gait.PassChecks;
+import org.solewright.analysis.gait.Step;
+import org.solewright.analysis.gait.StepFinder;
+import org.solewright.analysis.gait.SubjectMass;
+import org.solewright.analysis.gait.WalkingTrial;
+import org.solewright.domain.finding.Basis;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.finding.Quantity;
+import org.solewright.domain.foot.LandmarkMap;
+import org.solewright.domain.gait.ContactRow;
+import org.solewright.domain.gait.PlatformLoads;
+import org.solewright.domain.gait.Side;
+import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.Recording;
+
+/**
+ * One subject's walking, analysed: what fit and appraise share. Recordings in, passes, steps and mass out.
+ */
+final class GaitSubject {
+
+    private static final double LARGEST_TILT = Math.toRadians(20);
+
+    private final GaitOptions options;
+    private final LandmarkMap map;
+    private final List<ContactRow> contacts;
+    private final List<Finding> findings = new ArrayList<>();
+    private final List<LandmarkTracks> walking = new ArrayList<>();
+    private List<Pass> passes = List.of();
+    private List<List<Step>> steps = List.of();
+    private Optional<Quantity> mass = Optional.empty();
+
+    private GaitSubject(GaitOptions options, LandmarkMap map, List<ContactRow> contacts) {
+        this.options = options;
+        this.map = map;
+        this.contacts = contacts;
+    }
+
+    /**
+     * Analyses the walking recordings.
+     *
+     * @param options what the user gave
+     * @param map landmark map
+     * @param contacts the user's verdicts on contacts, may be empty
+     * @param recordings walking recordings in the user's order
+     * @param up against gravity from the standing trial, where there is one
+     * @param limbLength hip to floor, m; empty where not known
+     * @return the analysed subject
+     * @throws UseCaseException where a recording lacks what is needed
+     */
+    static GaitSubject of(
+            GaitOptions options,
+            LandmarkMap map,
+            List<ContactRow> contacts,
+            List<Recording> recordings,
+            Optional<Vec3> up,
+            Optional<Double> limbLength)
+            throws UseCaseException {
+        GaitSubject subject = new GaitSubject(options, map, contacts);
+        for (Recording r : recordings) {
+            Recording seen = options.isMirrored() ? Mirror.of(r, subject.up(r, up)) : r;
+            subject.walking.add(LandmarkTracks.of(seen, map, options.markerCutoff(), subject.findings));
+            subject.findings.addAll(LandmarkCoverage.repeatedLabels(r));
+        }
+        subject.analyse(up, limbLength);
+        return subject;
+    }
+
+    private void analyse(Optional<Vec3> standingUp, Optional<Double> limbLength) throws UseCaseException {
+        List<WalkingTrial> trials = new ArrayList<>();
+        for (LandmarkTracks tracks : walking) {
+            trials.add(trial(tracks, standingUp));
+        }
+        GaitSettings first = limbLength
+                .map(l -> new GaitSettings(GaitSettings.STANDARD_GRAVITY, l, weight(options.mass())))
+                .orElseGet(() -> new GaitSettings(
+                        GaitSettings.STANDARD_GRAVITY,
+                        GaitSettings.unknownSubject().limbLength(),
+                        weight(options.mass())));
+        run(trials, first, new ArrayList<>());
+        double found = mass.map(Quantity::value).orElse(Double.NaN);
+        GaitSettings second =
+                new GaitSettings(first.gravity(), first.limbLength(), found * GaitSettings.STANDARD_GRAVITY);
+        run(trials, second, findings);
+        findings.addAll(PassChecks.platformHeights(passes));
+        checkMass();
+        for (Pass pass : passes) {
+            if (Mirror.isMirrored(pass).orElse(false)) {
+                findings.add(Finding.error(
+                        "frame.mirrored",
+                        pass.trial().name(),
+                        "the landmarks called right lie on the walker's left: the laboratory frame is left-handed or the"
+                                + " sides are swapped; check the map, or give --mirrored"));
+            }
+            if (pass.stances().isEmpty()) {
+                findings.add(Finding.error(
+                        "loads.no-contact",
+                        pass.trial().name(),
+                        "no foot of the subject stood on a force platform: record a pass that hits the platforms"));
+            }
+        }
+    }
+
+    private static double weight(java.util.OptionalDouble mass) {
+        return mass.orElse(Double.NaN) * GaitSettings.STANDARD_GRAVITY;
+    }
+
+    private void run(List<WalkingTrial> trials, GaitSettings settings, List<Finding> into) throws UseCaseException {
+        List<Pass> found = new ArrayList<>();
+        for (WalkingTrial trial : trials) {
+            found.add(Pass.of(trial, settings));
+        }
+        passes = ContactReview.of(found);
+        if (!contacts.isEmpty()) {
+            passes = ContactOverrides.apply(contacts, passes, into);
+        }
+        List<List<Step>> all = new ArrayList<>();
+        for (Pass pass : passes) {
+            List<Step> of = pass.trial().platforms().isEmpty() ? List.of() : StepFinder.steps(pass, into);
+            into.addAll(PassChecks.bias(pass, of));
+            all.add(of);
+            into.addAll(pass.findings());
+        }
+        steps = all;
+        mass = SubjectMass.of(steps).map(SubjectMass::mass);
+    }
+
+    private void checkMass() {
+        Optional<SubjectMass> measured = SubjectMass.of(steps);
+        if (options.mass().isPresent()) {
+            double given = options.mass().getAsDouble();
+            measured.ifPresent(m -> {
+                if (Math.abs(m.mass().value() / given - 1) > 0.03) {
+                    findings.add(Finding.warning(
+                            "mass.differs",
+                            "subject",
+                            String.format(
+                                    Locale.ROOT,
+                                    "mass given %.1f kg, platforms measured %.1f kg: check both",
+                                    given,
+                                    m.mass().value())));
+                }
+            });
+            mass = Optional.of(Quantity.of(given, Basis.MEASURED));
+            return;
+        }
+        measured.ifPresent(m -> {
+            findings.add(Finding.warning(
+                    "mass.not-given",
+                    "subject",
+                    String.format(
+                            Locale.ROOT,
+                            "no mass was given; %.1f kg is taken from the mean vertical load of %d work window%s",
+                            m.mass().value(),
+                            m.windows(),
+                            m.windows() == 1 ? "" : "s")));
+            if (!m.isWhole()) {
+                findings.add(Finding.warning(
+                        "mass.over-edge",
+                        "subject",
+                        "no work window has two whole contacts; the mass comes from stances that were not wholly on"
+                                + " their platforms: give --mass"));
+            }
+        });
+    }
+
+    private WalkingTrial trial(LandmarkTracks tracks, Optional<Vec3> standingUp) throws UseCaseException {
+        Map<Side, FootTracks> feet = new EnumMap<>(Side.class);
+        for (Side side : Side.values()) {
+            if (map.entries().stream().anyMatch(e -> e.side().map(side::equals).orElse(false))) {
+                LandmarkCoverage.requireWalking(map, tracks, side);
+                tracks.foot(side).ifPresent(f -> feet.put(side, f));
+            }
+        }
+        Recording r = tracks.recording();
+        double[] pelvis = tracks.pelvis()
+                .orElseThrow(() -> new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        r.name(),
+                        "the walking recording lacks every pelvic landmark (asis, psis, sacrum, trochanter_major)",
+                        "map at least one: the walking direction and speed come from the pelvis"));
+        int tracked = 0;
+        for (int i = 0; i < pelvis.length; i += 3) {
+            tracked += Double.isNaN(pelvis[i]) ? 0 : 1;
+        }
+        if (tracked < 2) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT,
+                    r.name(),
+                    "the pelvic landmarks are seen together in " + tracked + " of " + r.frames() + " frames",
+                    "map landmarks that are seen while walking");
+        }
+        return new WalkingTrial(
+                r.name(), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
+    }
+
+    /** Up from the platforms' normals, else from the standing trial; they must agree within 20 degrees. */
+    private Vec3 up(Recording recording, Optional<Vec3> standing) throws UseCaseException {
+        Vec3 sum = Vec3.ZERO;
+        for (PlatformLoads p : recording.platforms()) {
+            sum = sum.plus(p.up());
+        }
+        if (sum.norm() > 0.5) {
+            Vec3 up = sum.unit();
+            if (standing.isPresent() && !(Math.acos(Math.min(1, up.dot(standing.get()))) < LARGEST_TILT)) {
+                findings.add(Finding.warning(
+                        "frame.up-differs",
+                        recording.name(),
+                        String.format(
+                                Locale.ROOT,
+                                "the platforms' normals and the standing trial disagree about up by %.0f deg; the"
+                                        + " platforms' is used",
+                                Math.toDegrees(Math.acos(Math.min(1, up.dot(standing.get())))))));
+            }
+            return up;
+        }
+        return standing.orElseThrow(() -> new UseCaseException(
+                UseCaseException.Kind.INPUT,
+                recording.name(),
+                "neither a force platform nor a standing recording says where up is",
+                "record platforms or give --standing"));
+    }
+
+    List<Finding> findings() {
+        return findings;
+    }
+
+    List<Pass> passes() {
+        return passes;
+    }
+
+    List<LandmarkTracks> walking() {
+        return walking;
+    }
+
+    /** Steps by pass, in the passes' order. */
+    List<List<Step>> steps() {
+        return steps;
+    }
+
+    /** Given, else measured; empty where neither. */
+    Optional<Quantity> mass() {
+        return mass;
+    }
+
+    /** Tracks by recording name. */
+    Map<String, LandmarkTracks> tracksByTrial() {
+        Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>();
+        walking.forEach(t -> byTrial.put(t.recording().name(), t));
+        return byTrial;
+    }
+}
