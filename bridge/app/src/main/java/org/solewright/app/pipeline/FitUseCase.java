@@ -1,0 +1,431 @@
+package org.solewright.app.pipeline;
+
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.EnumMap;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import java.util.Set;
+import org.solewright.analysis.fitting.InertiaTable;
+import org.solewright.analysis.fitting.SegmentTracking;
+import org.solewright.analysis.fitting.StandingLimb;
+import org.solewright.analysis.fitting.StandingModel;
+import org.solewright.analysis.fitting.StandingOutcome;
+import org.solewright.analysis.fitting.StandingPosture;
+import org.solewright.analysis.fitting.StandingSettings;
+import org.solewright.analysis.gait.GaitSettings;
+import org.solewright.analysis.gait.LandmarkTracks;
+import org.solewright.analysis.gait.Pass;
+import org.solewright.domain.finding.Basis;
+import org.solewright.domain.finding.Cautions;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.finding.Quantity;
+import org.solewright.domain.finding.Severity;
+import org.solewright.domain.finding.SourceFile;
+import org.solewright.domain.foot.FootModel;
+import org.solewright.domain.foot.Landmark;
+import org.solewright.domain.foot.LandmarkMap;
+import org.solewright.domain.foot.Population;
+import org.solewright.domain.foot.Rolling;
+import org.solewright.domain.gait.ContactRow;
+import org.solewright.domain.gait.Side;
+import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.PointTrack;
+import org.solewright.domain.motion.Recording;
+import org.solewright.formats.io.FormatException;
+
+/** Fits a segmented foot model per side from standing and walking recordings. */
+public final class FitUseCase {
+
+    private static final double DEFORMED = 0.0045;
+    private static final double GAP = 0.017;
+    private static final double PROVISIONAL_MASS = 70;
+
+    /**
+     * What the user asked for.
+     *
+     * @param gait recordings and subject; at least one standing recording
+     * @param sides sides to be fitted
+     * @param isBothAsked whether a side without landmarks is left out with a warning instead of an error
+     * @param segments parts of the foot; empty: as many as the landmarks allow, up to three
+     * @param inertia table of masses and moments of inertia
+     * @param subjectId identifier without personal data
+     * @param version version of the tool
+     */
+    public record Request(
+            GaitOptions gait,
+            Set<Side> sides,
+            boolean isBothAsked,
+            OptionalInt segments,
+            InertiaTable inertia,
+            String subjectId,
+            String version) {
+
+        /** Copies the set. */
+        public Request {
+            sides = Set.copyOf(sides);
+        }
+    }
+
+    /**
+     * What came of it.
+     *
+     * @param models by side
+     * @param limbs the standing limbs by side
+     * @param rollOvers what each side's stances showed
+     * @param contacts contact table
+     * @param findings all findings, once each
+     * @param failed names of inputs that failed
+     */
+    record Result(
+            Map<Side, FootModel> models,
+            Map<Side, StandingLimb> limbs,
+            Map<Side, WalkingRollOver> rollOvers,
+            GaitSubject subject,
+            List<ContactRow> contacts,
+            List<Finding> findings,
+            List<String> failed) {}
+
+    private final Request request;
+    private final List<Finding> findings = new ArrayList<>();
+    private final List<SourceFile> sources = new ArrayList<>();
+
+    private FitUseCase(Request request) {
+        this.request = request;
+    }
+
+    /**
+     * Runs the fit without writing anything.
+     *
+     * @param request what is asked
+     * @return models and findings
+     * @throws UseCaseException where an input lacks what is needed
+     * @throws FormatException where a file is not as its format says
+     */
+    static Result run(Request request) throws UseCaseException, FormatException {
+        return new FitUseCase(request).run();
+    }
+
+    private Result run() throws UseCaseException, FormatException {
+        GaitOptions options = request.gait();
+        LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
+        List<Recording> standing = InputFiles.recordings(options.standing(), "standing", sources, findings);
+        List<Recording> walking = InputFiles.recordings(options.walking(), "walking", sources, findings);
+        List<ContactRow> contacts = options.contacts().isPresent()
+                ? InputFiles.contacts(options.contacts().get(), sources)
+                : List.of();
+        List<Recording> all = new ArrayList<>(standing);
+        all.addAll(walking);
+        findings.addAll(LandmarkCoverage.missingLabels(map, all));
+        StandingTrial stood = stood(map, standing, options);
+        Vec3 up = up(stood, walking);
+        StandingPosture posture = stood.posture(up, options.floor());
+        Set<Side> sides = sides(map, stood);
+        OptionalDouble limbLength = provisionalLimbLength(posture, sides);
+        GaitSubject subject = GaitSubject.of(
+                options,
+                map,
+                contacts,
+                walking,
+                Optional.of(up),
+                limbLength.isPresent() ? Optional.of(limbLength.getAsDouble()) : Optional.empty());
+        Quantity mass = subject.mass()
+                .orElseThrow(() -> new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        walking.get(0).name(),
+                        "no mass was given and no walking recording has a step on its platforms to measure it",
+                        "give --mass KG, or recordings with two consecutive platform contacts"));
+        Map<Side, FootModel> models = new EnumMap<>(Side.class);
+        Map<Side, StandingLimb> limbs = new EnumMap<>(Side.class);
+        Map<Side, WalkingRollOver> rollOvers = new EnumMap<>(Side.class);
+        for (Side side : sides) {
+            StandingLimb limb = built(posture, mass, side, stood);
+            WalkingRollOver rollOver = rollOver(limb, subject, stood, mass);
+            limbs.put(side, limb);
+            rollOvers.put(side, rollOver);
+        }
+        findings.addAll(subject.findings());
+        for (Side side : sides) {
+            StandingLimb limb = get(limbs, side);
+            WalkingRollOver rollOver = get(rollOvers, side);
+            Rolling rolling = rollOver.rolling();
+            limb.findings().forEach(this::addOnce);
+            rollOver.findings().forEach(this::addOnce);
+            models.put(side, model(limb, rolling, rollOver.effectiveFootLength()));
+        }
+        List<Finding> shared = List.copyOf(findings);
+        models.replaceAll((side, m) -> withFindings(m, shared));
+        return new Result(
+                models, limbs, rollOvers, subject, ContactOverrides.rows(subject.passes()), shared, failed(shared));
+    }
+
+    private static <T> T get(Map<Side, T> map, Side side) {
+        T value = map.get(side);
+        if (value == null) {
+            throw new IllegalStateException("no entry for the " + side.word() + " side");
+        }
+        return value;
+    }
+
+    private void addOnce(Finding finding) {
+        if (!findings.contains(finding)) {
+            findings.add(finding);
+        }
+    }
+
+    private static List<String> failed(List<Finding> findings) {
+        return findings.stream()
+                .filter(f -> f.severity() == Severity.ERROR)
+                .map(Finding::where)
+                .distinct()
+                .toList();
+    }
+
+    private StandingTrial stood(LandmarkMap map, List<Recording> standing, GaitOptions options) {
+        List<LandmarkTracks> tracks = new ArrayList<>();
+        for (Recording r : standing) {
+            Recording seen = r;
+            if (options.isMirrored()) {
+                Vec3 up = new StandingTrial(List.of(LandmarkTracks.of(r, map, 0, new ArrayList<>())))
+                        .up()
+                        .orElse(Vec3.Z);
+                seen = org.solewright.analysis.gait.Mirror.of(r, up);
+            }
+            tracks.add(LandmarkTracks.of(seen, map, 0, findings));
+        }
+        return new StandingTrial(tracks);
+    }
+
+    private Vec3 up(StandingTrial stood, List<Recording> walking) throws UseCaseException {
+        Vec3 sum = Vec3.ZERO;
+        for (Recording r : walking) {
+            for (var p : r.platforms()) {
+                sum = sum.plus(p.up());
+            }
+        }
+        Optional<Vec3> platforms = sum.norm() > 0.5 ? Optional.of(sum.unit()) : stood.platformUp();
+        // The standing trial's floor is level in its own laboratory axes: small tilts of platform corners are not up.
+        return platforms.map(p -> stood.up().filter(s -> s.dot(p) > Math.cos(Math.toRadians(2))).orElse(p))
+                .or(stood::up)
+                .orElseThrow(() -> new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        request.gait().standing().get(0).toString(),
+                        "neither platforms nor the landmarks of hips and malleoli say where up is",
+                        "map malleolus_lateral and trochanter_major or asis of both sides"));
+    }
+
+    /** Sides that are asked for and have what standing needs. */
+    private Set<Side> sides(LandmarkMap map, StandingTrial stood) throws UseCaseException {
+        Set<Side> sides = new java.util.TreeSet<>();
+        UseCaseException first = null;
+        for (Side side : Side.values()) {
+            if (!request.sides().contains(side)) {
+                continue;
+            }
+            try {
+                LandmarkCoverage.requireStanding(map, stood.tracks(), side);
+                sides.add(side);
+            } catch (UseCaseException e) {
+                boolean isMapped = map.entries().stream()
+                        .anyMatch(x -> x.side().map(side::equals).orElse(false));
+                if (!request.isBothAsked() || isMapped) {
+                    throw e;
+                }
+                first = first == null ? e : first;
+                findings.add(Finding.warning(
+                        "landmarks.side-missing",
+                        side.word(),
+                        "the landmark map names nothing of the " + side.word() + " side: no model for it"));
+            }
+        }
+        if (sides.isEmpty() && first != null) {
+            throw first;
+        }
+        return sides;
+    }
+
+    private StandingSettings settings(Quantity mass) {
+        GaitOptions o = request.gait();
+        return new StandingSettings(
+                request.subjectId(),
+                mass,
+                o.stature().isPresent()
+                        ? Optional.of(Quantity.of(o.stature().getAsDouble(), Basis.MEASURED))
+                        : Optional.empty(),
+                o.population(),
+                o.sex(),
+                o.markerRadius().isPresent()
+                        ? Quantity.of(o.markerRadius().getAsDouble(), Basis.MEASURED)
+                        : StandingSettings.DEFAULT_MARKER_RADIUS,
+                request.segments(),
+                request.inertia());
+    }
+
+    private OptionalDouble provisionalLimbLength(StandingPosture posture, Set<Side> sides) {
+        Quantity mass = Quantity.of(PROVISIONAL_MASS, Basis.ASSUMED);
+        return sides.stream()
+                .map(s -> StandingModel.build(posture, settings(mass), s))
+                .filter(StandingOutcome.Built.class::isInstance)
+                .mapToDouble(o -> ((StandingOutcome.Built) o).limb().limbLength().value())
+                .average();
+    }
+
+    private StandingLimb built(StandingPosture posture, Quantity mass, Side side, StandingTrial stood)
+            throws UseCaseException {
+        StandingOutcome outcome = StandingModel.build(posture, settings(mass), side);
+        if (outcome instanceof StandingOutcome.Refused refused) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT,
+                    stood.tracks().get(0).recording().name(),
+                    refused.message(),
+                    refused.whatToDo());
+        }
+        return ((StandingOutcome.Built) outcome).limb();
+    }
+
+    private WalkingRollOver rollOver(
+            StandingLimb limb, GaitSubject subject, StandingTrial stood, Quantity mass) {
+        boolean isHuman = request.gait().population() != Population.OTHER;
+        WalkingRollOver rollOver =
+                new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
+        Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>(subject.tracksByTrial());
+        Map<String, List<SegmentTracking>> fits = new LinkedHashMap<>();
+        List<Double> ankleGaps = new ArrayList<>();
+        for (Pass pass : subject.passes()) {
+            LandmarkTracks tracks = byTrial.get(pass.trial().name());
+            if (tracks == null) {
+                continue;
+            }
+            LimbMotion motion = LimbMotion.of(stood, tracks, limb.side());
+            if (motion.shank().isEmpty()) {
+                findings.add(Finding.warning(
+                        "rolling.shank-not-tracked",
+                        pass.trial().name(),
+                        "fewer than three points of the " + limb.side().word()
+                                + " shank are tracked together: no roll-over in the shank frame"));
+            }
+            collect(fits, "shank", motion.shank());
+            collect(fits, "foot", motion.foot());
+            collect(fits, "thigh", motion.thigh());
+            gap(pass, motion, limb).ifPresent(ankleGaps::add);
+            rollOver.add(pass, motion);
+        }
+        fits.forEach((segment, list) -> deformed(limb, segment, list));
+        jointGap(limb, ankleGaps);
+        return rollOver;
+    }
+
+    private static void collect(
+            Map<String, List<SegmentTracking>> fits, String segment, Optional<SegmentTracking> tracking) {
+        tracking.ifPresent(t ->
+                fits.computeIfAbsent(segment, k -> new ArrayList<>()).add(t));
+    }
+
+    private void deformed(StandingLimb limb, String segment, List<SegmentTracking> fits) {
+        double rms = rootMeanSquare(fits.stream().map(SegmentTracking::rms).toList());
+        double shape = rootMeanSquare(fits.stream().map(SegmentTracking::shapeChange).toList());
+        double limit = DEFORMED * limb.limbLength().value();
+        if (rms > limit) {
+            findings.add(Finding.warning(
+                    "cluster.deformed",
+                    limb.side().word() + " " + segment,
+                    String.format(
+                            Locale.ROOT,
+                            "the points of the %s %s depart from their standing shape by %.1f mm rms (distances between"
+                                    + " them change by %.1f mm rms), over the limit of %.1f mm: its pose while walking is"
+                                    + " that uncertain; check for swapped or moved markers",
+                            limb.side().word(),
+                            segment,
+                            1000 * rms,
+                            1000 * shape,
+                            1000 * limit)));
+        }
+    }
+
+    private static double rootMeanSquare(List<Double> values) {
+        double sum = 0;
+        for (double v : values) {
+            sum += v * v / values.size();
+        }
+        return Math.sqrt(sum);
+    }
+
+    /** Root mean square distance of the ankle as shank and foot carry it, over the pass's stances of this foot. */
+    private static Optional<Double> gap(Pass pass, LimbMotion motion, StandingLimb limb) {
+        double sum = 0;
+        int n = 0;
+        for (var stance : pass.stances()) {
+            if (stance.side() != limb.side()) {
+                continue;
+            }
+            double rate = pass.trial().rate();
+            int last = (int) Math.floor((stance.end() - pass.trial().startTime()) * rate);
+            for (int frame = (int) Math.max(0, Math.ceil((stance.start() - pass.trial().startTime()) * rate));
+                    frame <= last;
+                    frame++) {
+                int at = frame;
+                Optional<Vec3> byShank = motion.ankle(limb, at);
+                Optional<Vec3> byFoot =
+                        motion.foot().flatMap(f -> f.at(limb.ankle().position(), at));
+                if (byShank.isPresent() && byFoot.isPresent()) {
+                    double d = byShank.get().distance(byFoot.get());
+                    sum += d * d;
+                    n++;
+                }
+            }
+        }
+        return n == 0 ? Optional.empty() : Optional.of(Math.sqrt(sum / n));
+    }
+
+    private void jointGap(StandingLimb limb, List<Double> gaps) {
+        double gap = rootMeanSquare(gaps);
+        if (!gaps.isEmpty() && gap > GAP * limb.limbLength().value()) {
+            findings.add(Finding.warning(
+                    "joint.gap",
+                    limb.side().word() + " ankle",
+                    String.format(
+                            Locale.ROOT,
+                            "shank and foot put the %s ankle %.0f mm rms apart, over the limit of %.0f mm",
+                            limb.side().word(),
+                            1000 * gap,
+                            1000 * GAP * limb.limbLength().value())));
+        }
+    }
+
+    private FootModel model(StandingLimb limb, Rolling rolling, Optional<Quantity> effectiveFootLength) {
+        FootModel standing = limb.model(request.version(), sources, Cautions.LINES);
+        return new FootModel(
+                standing.side(),
+                standing.version(),
+                limb.subject(effectiveFootLength),
+                standing.sources(),
+                standing.segments(),
+                standing.joints(),
+                standing.landmarks(),
+                rolling,
+                standing.pads(),
+                standing.findings(),
+                standing.cautions());
+    }
+
+    private static FootModel withFindings(FootModel m, List<Finding> findings) {
+        return new FootModel(
+                m.side(),
+                m.version(),
+                m.subject(),
+                m.sources(),
+                m.segments(),
+                m.joints(),
+                m.landmarks(),
+                m.rolling(),
+                m.pads(),
+                findings,
+                m.cautions());
+    }
+}
