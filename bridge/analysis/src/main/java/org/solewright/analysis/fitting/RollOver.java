@@ -3,6 +3,7 @@ package org.solewright.analysis.fitting;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
+import org.solewright.analysis.numerics.Sample;
 import org.solewright.domain.foot.Rolling;
 
 /**
@@ -65,9 +66,11 @@ public final class RollOver {
         for (RollOverPath p : paths) {
             arcs.add(arc(p));
         }
-        double curvature = arcs.stream().mapToDouble(FittedArc::curvature).average().orElseThrow();
+        Sample sample =
+                Sample.of(arcs.stream().mapToDouble(FittedArc::curvature).toArray());
+        double curvature = sample.mean();
         OptionalDouble sd =
-                arcs.size() == 1 ? blockSd(arcs.get(0), paths.get(0).rate()) : deviation(arcs, curvature);
+                arcs.size() == 1 ? blockSd(arcs.get(0), paths.get(0).rate()) : sample.sd();
         OptionalDouble radiusSd = sd.isPresent() && curvature != 0
                 ? OptionalDouble.of(sd.getAsDouble() / (curvature * curvature))
                 : OptionalDouble.empty();
@@ -84,14 +87,6 @@ public final class RollOver {
                         .average()
                         .orElseThrow()),
                 arcs.size());
-    }
-
-    private static OptionalDouble deviation(List<FittedArc> arcs, double mean) {
-        double sum = 0;
-        for (FittedArc a : arcs) {
-            sum += (a.curvature() - mean) * (a.curvature() - mean);
-        }
-        return OptionalDouble.of(Math.sqrt(sum / (arcs.size() - 1)));
     }
 
     private static OptionalDouble mean(List<OptionalDouble> values) {

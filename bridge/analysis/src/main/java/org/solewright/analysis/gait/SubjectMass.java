@@ -2,6 +2,7 @@ package org.solewright.analysis.gait;
 
 import java.util.List;
 import java.util.Optional;
+import org.solewright.analysis.numerics.Sample;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.gait.Use;
@@ -36,16 +37,9 @@ public record SubjectMass(Quantity mass, int windows, boolean isWhole) {
                 .mapToDouble(s -> s.loads().totalForce().up().mean(s.loads().windowFrom(), s.loads().windowTo())
                         / s.loads().gravity())
                 .toArray();
-        double mean = 0;
-        for (double m : masses) {
-            mean += m / masses.length;
-        }
-        double sum = 0;
-        for (double m : masses) {
-            sum += (m - mean) * (m - mean);
-        }
-        double sd = masses.length > 1 ? Math.sqrt(sum / (masses.length - 1)) : WINDOW_DOUBT * mean;
+        Sample sample = Sample.of(masses);
+        double sd = sample.sd().orElse(WINDOW_DOUBT * sample.mean());
         return Optional.of(
-                new SubjectMass(Quantity.of(mean, Basis.MEASURED, sd), masses.length, !whole.isEmpty()));
+                new SubjectMass(Quantity.of(sample.mean(), Basis.MEASURED, sd), masses.length, !whole.isEmpty()));
     }
 }

@@ -18,7 +18,12 @@ import picocli.CommandLine.ScopeType;
         versionProvider = Version.class,
         scope = ScopeType.INHERIT,
         synopsisSubcommandLabel = "COMMAND",
-        subcommands = {SolveCommand.class, PosturesCommand.class})
+        subcommands = {
+            FitCommand.class,
+            AppraiseCommand.class,
+            PosturesCommand.class,
+            SolveCommand.class,
+        })
 public final class Main {
 
     @Option(names = "--trace", scope = ScopeType.INHERIT, description = "Print a stack trace with an error.")

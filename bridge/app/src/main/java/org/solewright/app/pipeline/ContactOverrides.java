@@ -58,7 +58,7 @@ final class ContactOverrides {
     private static Stance judge(ContactRow row, Stance stance, List<Finding> findings) {
         Set<Use> excluded = EnumSet.noneOf(Use.class);
         for (Use use : Use.values()) {
-            if (row.notUsedFor().contains(use.word())) {
+            if (row.notUsedFor().contains(use)) {
                 excluded.add(use);
             }
         }
@@ -104,10 +104,8 @@ final class ContactOverrides {
         List<ContactRow> rows = new ArrayList<>();
         for (Pass pass : passes) {
             for (Stance s : pass.stances()) {
-                List<String> used = Arrays.stream(Use.values())
-                        .filter(s::allows)
-                        .map(Use::word)
-                        .toList();
+                List<Use> used =
+                        Arrays.stream(Use.values()).filter(s::allows).toList();
                 rows.add(new ContactRow(
                         s.trial(),
                         s.side(),
@@ -116,7 +114,7 @@ final class ContactOverrides {
                         s.end(),
                         s.whole(),
                         used,
-                        words(s.notUsedFor()),
+                        s.notUsedFor().stream().sorted().toList(),
                         s.why()));
             }
         }

@@ -1,7 +1,5 @@
 package org.solewright.app.pipeline;
 
-import java.io.IOException;
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
@@ -29,14 +27,12 @@ import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.finding.Severity;
 import org.solewright.domain.finding.SourceFile;
 import org.solewright.domain.foot.FootModel;
-import org.solewright.domain.foot.Landmark;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.geometry.Vec3;
-import org.solewright.domain.motion.PointTrack;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.io.FormatException;
 
@@ -160,6 +156,16 @@ public final class FitUseCase {
             models.put(side, model(limb, rolling, rollOver.effectiveFootLength()));
         }
         List<Finding> shared = List.copyOf(findings);
+        for (Finding f : shared) {
+            boolean isStanding = f.severity() == Severity.ERROR && !failedTrials(subject).contains(f.where());
+            if (isStanding) {
+                throw new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        standing.get(0).name(),
+                        f.message(),
+                        "correct it and fit again (" + f.code() + ")");
+            }
+        }
         models.replaceAll((side, m) -> withFindings(m, shared));
         return new Result(
                 models, limbs, rollOvers, subject, ContactOverrides.rows(subject.passes()), shared, failed(shared));
@@ -177,6 +183,10 @@ public final class FitUseCase {
         if (!findings.contains(finding)) {
             findings.add(finding);
         }
+    }
+
+    private static List<String> failedTrials(GaitSubject subject) {
+        return failed(subject.findings());
     }
 
     private static List<String> failed(List<Finding> findings) {
@@ -229,7 +239,7 @@ public final class FitUseCase {
                 continue;
             }
             try {
-                LandmarkCoverage.requireStanding(map, stood.tracks(), side);
+                LandmarkCoverage.requireStanding(map, stood, side);
                 sides.add(side);
             } catch (UseCaseException e) {
                 boolean isMapped = map.entries().stream()

@@ -1,6 +1,7 @@
 package org.solewright.app.pipeline;
 
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -44,5 +45,14 @@ public record GaitOptions(
     public GaitOptions {
         standing = List.copyOf(standing);
         walking = List.copyOf(walking);
+    }
+
+    /** All files of the call. */
+    List<Path> inputs() {
+        List<Path> all = new ArrayList<>(standing);
+        all.addAll(walking);
+        all.add(landmarks);
+        contacts.ifPresent(all::add);
+        return all;
     }
 }

@@ -98,21 +98,47 @@ final class GaitSubject {
         run(trials, second, findings);
         findings.addAll(PassChecks.platformHeights(passes));
         checkMass();
-        for (Pass pass : passes) {
-            if (Mirror.isMirrored(pass).orElse(false)) {
-                findings.add(Finding.error(
-                        "frame.mirrored",
-                        pass.trial().name(),
-                        "the landmarks called right lie on the walker's left: the laboratory frame is left-handed or the"
-                                + " sides are swapped; check the map, or give --mirrored"));
-            }
-            if (pass.stances().isEmpty()) {
-                findings.add(Finding.error(
-                        "loads.no-contact",
-                        pass.trial().name(),
-                        "no foot of the subject stood on a force platform: record a pass that hits the platforms"));
+        dropFailed();
+    }
+
+    /** Leaves out recordings that say nothing or the opposite; where none is left, the first one's reason is thrown. */
+    private void dropFailed() throws UseCaseException {
+        List<Finding> failures = new ArrayList<>();
+        for (int i = passes.size() - 1; i >= 0; i--) {
+            Optional<Finding> failure = failure(passes.get(i));
+            if (failure.isPresent()) {
+                failures.add(0, failure.get());
+                walking.remove(i);
+                passes.remove(i);
+                steps.remove(i);
             }
         }
+        if (passes.isEmpty() && !failures.isEmpty()) {
+            Finding first = failures.get(0);
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT, first.where(), first.message(), whatToDo(first.code()));
+        }
+        findings.addAll(failures);
+    }
+
+    private static Optional<Finding> failure(Pass pass) {
+        if (Mirror.isMirrored(pass).orElse(false)) {
+            return Optional.of(Finding.error(
+                    "frame.mirrored",
+                    pass.trial().name(),
+                    "the landmarks called right lie on the walker's left: the laboratory frame is left-handed or the"
+                            + " sides are swapped"));
+        }
+        return pass.stances().isEmpty()
+                ? Optional.of(Finding.error(
+                        "loads.no-contact", pass.trial().name(), "no tracked foot stood on a force platform"))
+                : Optional.empty();
+    }
+
+    private static String whatToDo(String code) {
+        return code.equals("frame.mirrored")
+                ? "check the landmark map, or give --mirrored"
+                : "give a recording that hits the platforms";
     }
 
     private static double weight(java.util.OptionalDouble mass) {
@@ -124,9 +150,9 @@ final class GaitSubject {
         for (WalkingTrial trial : trials) {
             found.add(Pass.of(trial, settings));
         }
-        passes = ContactReview.of(found);
+        passes = new ArrayList<>(ContactReview.of(found));
         if (!contacts.isEmpty()) {
-            passes = ContactOverrides.apply(contacts, passes, into);
+            passes = new ArrayList<>(ContactOverrides.apply(contacts, passes, into));
         }
         List<List<Step>> all = new ArrayList<>();
         for (Pass pass : passes) {
@@ -205,7 +231,7 @@ final class GaitSubject {
                     "map landmarks that are seen while walking");
         }
         return new WalkingTrial(
-                r.name(), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
+                trialName(r), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
     }
 
     /** Up from the platforms' normals, else from the standing trial; they must agree within 20 degrees. */
@@ -235,6 +261,13 @@ final class GaitSubject {
                 "record platforms or give --standing"));
     }
 
+    /** The name of a trial in tables: that of its file without the ending. */
+    static String trialName(Recording recording) {
+        String name = recording.name();
+        int dot = name.lastIndexOf('.');
+        return dot > 0 ? name.substring(0, dot) : name;
+    }
+
     List<Finding> findings() {
         return findings;
     }
@@ -260,7 +293,7 @@ final class GaitSubject {
     /** Tracks by recording name. */
     Map<String, LandmarkTracks> tracksByTrial() {
         Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>();
-        walking.forEach(t -> byTrial.put(t.recording().name(), t));
+        walking.forEach(t -> byTrial.put(trialName(t.recording()), t));
         return byTrial;
     }
 }

@@ -72,10 +72,11 @@ final class LandmarkCoverage {
         return findings;
     }
 
-    static void requireStanding(LandmarkMap map, LandmarkTracks tracks, Side side) throws UseCaseException {
+    static void requireStanding(LandmarkMap map, StandingTrial standing, Side side) throws UseCaseException {
         for (Landmark landmark : NEEDED_STANDING) {
-            if (tracks.mean(landmark, side).isEmpty()) {
-                throw missing(map, tracks.recording(), side, landmark, "standing recording");
+            if (standing.landmark(landmark, side).isEmpty()) {
+                throw missing(
+                        map, standing.tracks().get(0).recording(), side, landmark, "standing recording");
             }
         }
     }

@@ -3,7 +3,6 @@ package org.solewright.app.pipeline;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import org.solewright.analysis.fitting.FittedPath;
 import org.solewright.analysis.fitting.PathFit;
 import org.solewright.analysis.fitting.RollOver;
@@ -11,6 +10,7 @@ import org.solewright.analysis.fitting.RollOverPath;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.Pass;
+import org.solewright.analysis.numerics.Sample;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
@@ -150,14 +150,8 @@ final class WalkingRollOver {
         if (extents.length == 0) {
             return Optional.empty();
         }
-        double mean = java.util.Arrays.stream(extents).average().orElseThrow();
-        double sum = 0;
-        for (double e : extents) {
-            sum += (e - mean) * (e - mean);
-        }
-        OptionalDouble sd =
-                extents.length > 1 ? OptionalDouble.of(Math.sqrt(sum / (extents.length - 1))) : OptionalDouble.empty();
-        return Optional.of(new Quantity(mean, Basis.MEASURED, sd));
+        Sample sample = Sample.of(extents);
+        return Optional.of(new Quantity(sample.mean(), Basis.MEASURED, sample.sd()));
     }
 
     private List<Rolling.OutlinePoint> outline() {

@@ -1,0 +1,62 @@
+package org.solewright.app.cli;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.Callable;
+import org.solewright.app.pipeline.AppraiseReport;
+import org.solewright.app.pipeline.AppraiseUseCase;
+import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.formats.io.FormatException;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Spec;
+
+/** Says what the posture of measured walking cost. */
+@Command(
+        name = "appraise",
+        description = "Says what the posture of measured walking cost, beside other postures of the same limb.",
+        footer = {
+            "",
+            "Example:",
+            "  solewright appraise --model model/foot-model-right.xml --model model/foot-model-left.xml \\",
+            "    --walking walk-1.c3d --walking walk-2.c3d --landmarks map.xml --out cost",
+            "Writes posture-cost.csv, posture-cost.xml, postures.csv, appraise-contacts.csv and appraise-curves.csv.",
+            "Works are mechanical work under stated assumptions, not metabolic energy."
+        })
+final class AppraiseCommand implements Callable<Integer> {
+
+    @Option(
+            names = "--model",
+            paramLabel = "M.xml",
+            description = "Foot model; one per side; may be left out where only the work on the centre of mass is asked.")
+    private List<Path> models = new ArrayList<>();
+
+    @Mixin
+    private GaitArguments gait = new GaitArguments();
+
+    @Option(
+            names = "--out",
+            paramLabel = "DIR",
+            defaultValue = ".",
+            description = "Folder for the results (default: ${DEFAULT-VALUE}).")
+    private Path out = Path.of(".");
+
+    @Spec
+    private CommandSpec spec = CommandSpec.create();
+
+    /** For picocli. */
+    AppraiseCommand() {}
+
+    @Override
+    public Integer call() throws UseCaseException, FormatException {
+        AppraiseUseCase.Request request =
+                new AppraiseUseCase.Request(gait.options(List.of(), null, null, null), models, Version.NUMBER);
+        AppraiseReport report = AppraiseReport.write(request, out);
+        FindingPrinter.print(spec.commandLine().getErr(), report.findings());
+        report.lines().forEach(spec.commandLine().getOut()::println);
+        return report.failed().isEmpty() ? ExitCode.DONE : ExitCode.SOME_FAILED;
+    }
+}

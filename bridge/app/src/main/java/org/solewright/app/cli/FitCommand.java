@@ -1,0 +1,133 @@
+package org.solewright.app.cli;
+
+import java.io.PrintWriter;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.EnumSet;
+import java.util.List;
+import java.util.OptionalInt;
+import java.util.Set;
+import java.util.concurrent.Callable;
+import org.jspecify.annotations.Nullable;
+import org.solewright.analysis.fitting.InertiaTable;
+import org.solewright.app.pipeline.FitReport;
+import org.solewright.app.pipeline.FitUseCase;
+import org.solewright.app.pipeline.GaitOptions;
+import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.domain.gait.Side;
+import org.solewright.formats.io.FormatException;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Spec;
+
+/** Fits a segmented foot model per side. */
+@Command(
+        name = "fit",
+        description = "Fits a segmented foot model per side from standing and walking recordings.",
+        footer = {
+            "",
+            "Example:",
+            "  solewright fit --standing standing.c3d --walking walk-1.c3d --walking walk-2.c3d \\",
+            "    --landmarks map.xml --mass 71.5 --population adult --sex female --out model",
+            "Writes foot-model-right.xml, foot-model-left.xml, fit-contacts.csv and fit-curves.csv to the folder model."
+        })
+final class FitCommand implements Callable<Integer> {
+
+    @Option(
+            names = "--standing",
+            paramLabel = "S.c3d",
+            required = true,
+            description = "Standing recording; may be repeated.")
+    private List<Path> standing = new ArrayList<>();
+
+    @Mixin
+    private GaitArguments gait = new GaitArguments();
+
+    @Option(names = "--stature", paramLabel = "M", description = "Body height, m.")
+    @Nullable
+    private Double stature;
+
+    @Option(names = "--population", paramLabel = "WORD", description = "adult, child or other.")
+    @Nullable
+    private String population;
+
+    @Option(names = "--sex", paramLabel = "WORD", description = "female or male.")
+    @Nullable
+    private String sex;
+
+    @Option(
+            names = "--side",
+            paramLabel = "WORD",
+            defaultValue = "both",
+            description = "left, right or both (default: ${DEFAULT-VALUE}).")
+    private String side = "both";
+
+    @Option(
+            names = "--segments",
+            paramLabel = "N",
+            description = "Parts of the foot, 1 to 3 (default: as many as the landmarks allow).")
+    @Nullable
+    private Integer segments;
+
+    @Option(
+            names = "--inertia",
+            paramLabel = "TABLE",
+            defaultValue = "deleva",
+            description = "deleva or dempster (default: ${DEFAULT-VALUE}).")
+    private String inertia = "deleva";
+
+    @Option(names = "--subject", paramLabel = "ID", defaultValue = "", description = "Identifier for the model.")
+    private String subject = "";
+
+    @Option(
+            names = "--out",
+            paramLabel = "DIR",
+            defaultValue = ".",
+            description = "Folder for the results (default: ${DEFAULT-VALUE}).")
+    private Path out = Path.of(".");
+
+    @Spec
+    private CommandSpec spec = CommandSpec.create();
+
+    /** For picocli. */
+    FitCommand() {}
+
+    @Override
+    public Integer call() throws UseCaseException, FormatException {
+        GaitOptions options = gait.options(standing, stature, population, sex);
+        if (segments != null && (segments < 1 || segments > 3)) {
+            throw GaitArguments.usage(
+                    "--segments", segments + " parts of the foot, this version knows 1 to 3", "use 1, 2 or 3");
+        }
+        FitUseCase.Request request = new FitUseCase.Request(
+                options,
+                sides(),
+                side.equals("both"),
+                segments == null ? OptionalInt.empty() : OptionalInt.of(segments),
+                table(),
+                subject,
+                Version.NUMBER);
+        FitReport report = FitReport.write(request, out);
+        PrintWriter stderr = spec.commandLine().getErr();
+        FindingPrinter.print(stderr, report.findings());
+        report.lines().forEach(spec.commandLine().getOut()::println);
+        return report.failed().isEmpty() ? ExitCode.DONE : ExitCode.SOME_FAILED;
+    }
+
+    private Set<Side> sides() throws UseCaseException {
+        return switch (side) {
+            case "both" -> EnumSet.allOf(Side.class);
+            case "left" -> EnumSet.of(Side.LEFT);
+            case "right" -> EnumSet.of(Side.RIGHT);
+            default -> throw GaitArguments.usage("--side", "'" + side + "' is unknown", "use left, right or both");
+        };
+    }
+
+    private InertiaTable table() throws UseCaseException {
+        return InertiaTable.ofWord(inertia)
+                .orElseThrow(() -> GaitArguments.usage(
+                        "--inertia", "'" + inertia + "' is unknown", "use deleva or dempster"));
+    }
+}

@@ -1,0 +1,140 @@
+package org.solewright.app.cli;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.jspecify.annotations.Nullable;
+import org.solewright.app.pipeline.GaitOptions;
+import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.domain.foot.Population;
+import org.solewright.domain.foot.Sex;
+import picocli.CommandLine.Option;
+
+/** Options that fit and appraise have in common. */
+final class GaitArguments {
+
+    @Option(
+            names = "--walking",
+            paramLabel = "W.c3d",
+            required = true,
+            description = "Walking recording; may be repeated.")
+    private List<Path> walking = new ArrayList<>();
+
+    @Option(names = "--landmarks", paramLabel = "MAP.xml", required = true, description = "Landmark map.")
+    private Path landmarks = Path.of("");
+
+    @Option(names = "--mass", paramLabel = "KG", description = "Body mass, kg; else measured by the platforms.")
+    @Nullable
+    private Double mass;
+
+    @Option(names = "--contacts", paramLabel = "C.csv", description = "Contacts table whose verdicts stand.")
+    @Nullable
+    private Path contacts;
+
+    @Option(names = "--floor", paramLabel = "Z", description = "Height of the floor along up, m.")
+    @Nullable
+    private Double floor;
+
+    @Option(names = "--mirrored", description = "The laboratory frame is left-handed: mirror it.")
+    private boolean isMirrored;
+
+    @Option(names = "--marker-radius", paramLabel = "M", description = "Marker radius, m (default: 0.007, assumed).")
+    @Nullable
+    private Double markerRadius;
+
+    @Option(
+            names = "--marker-low-pass",
+            paramLabel = "HZ",
+            defaultValue = "10",
+            description = "Low-pass for markers, Hz; 0: none (default: ${DEFAULT-VALUE}).")
+    private double markerCutoff;
+
+    @Option(
+            names = "--events",
+            paramLabel = "KIND",
+            defaultValue = "platform",
+            description = "Where contacts come from; this version knows platform.")
+    private String events = "platform";
+
+    /** For picocli. */
+    GaitArguments() {}
+
+    /**
+     * The options as the use cases take them.
+     *
+     * @param standing standing recordings
+     * @param stature m
+     * @param population word of the command line
+     * @param sex word of the command line
+     * @return checked options
+     * @throws UseCaseException where a value is out of range
+     */
+    GaitOptions options(
+            List<Path> standing, @Nullable Double stature, @Nullable String population, @Nullable String sex)
+            throws UseCaseException {
+        if (!events.equals("platform")) {
+            throw usage("--events", "this version takes contacts from platforms only", "use --events platform");
+        }
+        check("--mass", mass, 0.01, 1e5, "kg");
+        check("--stature", stature, 0.05, 10, "m");
+        check("--floor", floor, -100, 100, "m");
+        check("--marker-radius", markerRadius, 0, 0.1, "m");
+        check("--marker-low-pass", markerCutoff, 0, 1e4, "Hz");
+        return new GaitOptions(
+                standing,
+                walking,
+                landmarks,
+                optional(mass),
+                optional(stature),
+                population(population),
+                sex(sex),
+                Optional.ofNullable(contacts),
+                optional(floor),
+                isMirrored,
+                optional(markerRadius),
+                markerCutoff);
+    }
+
+    private static OptionalDouble optional(@Nullable Double value) {
+        return value == null ? OptionalDouble.empty() : OptionalDouble.of(value);
+    }
+
+    private static void check(String name, @Nullable Double value, double low, double high, String unit)
+            throws UseCaseException {
+        if (value != null && !(value >= low && value <= high)) {
+            throw usage(
+                    name,
+                    String.format(
+                            Locale.ROOT, "%s %s is out of range, expected %s to %s %s", value, unit, low, high, unit),
+                    "give a number in that range");
+        }
+    }
+
+    static Population population(@Nullable String word) throws UseCaseException {
+        if (word == null) {
+            return Population.UNKNOWN;
+        }
+        return Population.ofWord(word)
+                .filter(p -> p != Population.UNKNOWN)
+                .orElseThrow(() -> usage("--population", "'" + word + "' is unknown", "use adult, child or other"));
+    }
+
+    static Optional<Sex> sex(@Nullable String word) throws UseCaseException {
+        if (word == null) {
+            return Optional.empty();
+        }
+        for (Sex s : Sex.values()) {
+            if (s.word().equals(word)) {
+                return Optional.of(s);
+            }
+        }
+        throw usage("--sex", "'" + word + "' is unknown", "use female or male");
+    }
+
+    static UseCaseException usage(String option, String message, String whatToDo) {
+        return new UseCaseException(UseCaseException.Kind.USAGE, option, message, whatToDo);
+    }
+}
