@@ -12,16 +12,12 @@ import org.solewright.domain.geometry.Vec3;
  */
 public final class SegmentTracking {
 
-    private final List<Optional<Pose>> poses;
-    private final double rms;
-    private final double shapeChange;
+    private final List<Optional<RigidFit>> fits;
     private final int fitted;
 
-    private SegmentTracking(List<Optional<Pose>> poses, double rms, double shapeChange, int fitted) {
-        this.poses = List.copyOf(poses);
-        this.rms = rms;
-        this.shapeChange = shapeChange;
-        this.fitted = fitted;
+    private SegmentTracking(List<Optional<RigidFit>> fits) {
+        this.fits = List.copyOf(fits);
+        this.fitted = (int) fits.stream().filter(Optional::isPresent).count();
     }
 
     /**
@@ -45,27 +41,14 @@ public final class SegmentTracking {
             a[3 * k + 2] = reference.get(k).z();
         }
         double[] b = new double[a.length];
-        List<Optional<Pose>> poses = new ArrayList<>(frames);
-        double sumRms = 0;
-        double sumShape = 0;
-        int fitted = 0;
+        List<Optional<RigidFit>> fits = new ArrayList<>(frames);
         for (int frame = 0; frame < frames; frame++) {
             for (int k = 0; k < tracks.size(); k++) {
                 System.arraycopy(tracks.get(k), 3 * frame, b, 3 * k, 3);
             }
-            Optional<RigidFit> fit = RigidFit.of(a, b);
-            poses.add(fit.map(RigidFit::pose));
-            if (fit.isPresent()) {
-                sumRms += fit.get().rms() * fit.get().rms();
-                sumShape += fit.get().shapeChange() * fit.get().shapeChange();
-                fitted++;
-            }
+            fits.add(RigidFit.of(a, b));
         }
-        return new SegmentTracking(
-                poses,
-                fitted == 0 ? Double.NaN : Math.sqrt(sumRms / fitted),
-                fitted == 0 ? Double.NaN : Math.sqrt(sumShape / fitted),
-                fitted);
+        return new SegmentTracking(fits);
     }
 
     /**
@@ -76,7 +59,7 @@ public final class SegmentTracking {
      * @return where it is now, m; empty where the pose is not known
      */
     public Optional<Vec3> at(Vec3 standing, int frame) {
-        return poses.get(frame).map(p -> p.transformPosition(standing));
+        return fits.get(frame).map(f -> f.pose().transformPosition(standing));
     }
 
     /**
@@ -86,25 +69,17 @@ public final class SegmentTracking {
      * @return X from standing to present, laboratory frame; empty where not known
      */
     public Optional<Pose> pose(int frame) {
-        return poses.get(frame);
+        return fits.get(frame).map(RigidFit::pose);
     }
 
     /**
-     * Root mean square distance of carried and present points over all fitted frames.
+     * The fit in a frame: its rms and the change of shape tell how far the segment was rigid.
      *
-     * @return m; NaN where no frame was fitted
+     * @param frame zero-based
+     * @return the fit; empty where not known
      */
-    public double rms() {
-        return rms;
-    }
-
-    /**
-     * Root mean square change of the distances between the points over all fitted frames.
-     *
-     * @return m; NaN where no frame was fitted
-     */
-    public double shapeChange() {
-        return shapeChange;
+    public Optional<RigidFit> fit(int frame) {
+        return fits.get(frame);
     }
 
     /**

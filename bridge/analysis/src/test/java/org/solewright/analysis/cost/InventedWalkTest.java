@@ -131,14 +131,14 @@ class InventedWalkTest {
     private static double[] foot(SyntheticWalk walk, int side, double t) {
         for (int j = side - 4; j < STEPS + 4; j += 2) {
             if (t >= walk.contact(j) && t <= walk.off(j)) {
-                return new double[] {walk.pivotX(j, 0), 0};
+                return new double[] {j * PARAMETERS.stepLength(), 0};
             }
             if (t > walk.off(j) && t < walk.contact(j + 2)) {
                 double u = (t - walk.off(j)) / (walk.contact(j + 2) - walk.off(j));
                 double smooth = u * u * u * (10 - 15 * u + 6 * u * u);
-                double x = walk.pivotX(j, 0);
+                double x = j * PARAMETERS.stepLength();
                 return new double[] {
-                    x + smooth * (walk.pivotX(j + 2, 0) - x), 0.06 * Math.pow(Math.sin(Math.PI * u), 2)
+                    x + smooth * ((j + 2) * PARAMETERS.stepLength() - x), 0.06 * Math.pow(Math.sin(Math.PI * u), 2)
                 };
             }
         }
@@ -149,7 +149,7 @@ class InventedWalkTest {
         int samples = (int) Math.round((frames - 1) / RATE * LOAD_RATE) + 1;
         double[] force = new double[3 * samples];
         double[] moment = new double[3 * samples];
-        double from = walk.pivotX(foot, 0) - 0.2;
+        double from = foot * PARAMETERS.stepLength() - 0.2;
         double to = from + 0.62;
         double side = foot % 2 == 0 ? -0.1 : 0.1;
         Vec3 centre = new Vec3((from + to) / 2, 0, 0);

@@ -7,7 +7,10 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.OptionalDouble;
+import org.solewright.analysis.cost.ComparedPostures;
+import org.solewright.domain.cost.TransitionColumns;
 import org.solewright.domain.cost.TransitionRow;
+import org.solewright.domain.finding.Cautions;
 import org.solewright.domain.finding.Finding;
 import org.solewright.formats.footmodel.PostureCostFile;
 import org.solewright.formats.io.FormatException;
@@ -58,7 +61,11 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
         result.cost().rows().stream()
                 .filter(r -> !r.text("trial").orElse("").equals("*"))
                 .forEach(r -> describe(lines, r));
+        if (!result.postures().isEmpty()) {
+            lines.add("* " + ComparedPostures.THOUGHT_EXPERIMENT);
+        }
         written.forEach(f -> lines.add("wrote " + f));
+        lines.addAll(Cautions.LINES);
         return new AppraiseReport(lines, result.cost().findings(), result.failed());
     }
 
@@ -105,7 +112,7 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
             return;
         }
         String sdColumn = column + "_sd";
-        OptionalDouble sd = org.solewright.domain.cost.TransitionColumns.ALL.contains(sdColumn)
+        OptionalDouble sd = TransitionColumns.ALL.contains(sdColumn)
                 ? row.number(sdColumn)
                 : OptionalDouble.empty();
         lines.add(String.format(Locale.ROOT, "  %-22s %9." + digits + "f", words, value.getAsDouble())

@@ -74,6 +74,9 @@ public final class AppraiseUseCase {
             List<CurveRow> curves,
             List<String> failed) {}
 
+    private static final String GIVEN = "given";
+    private static final String DEFAULT = "default";
+
     private final Request request;
     private final List<Finding> findings = new ArrayList<>();
     private final List<SourceFile> sources = new ArrayList<>();
@@ -147,17 +150,24 @@ public final class AppraiseUseCase {
     private List<PostureCost.Setting> settings() {
         GaitOptions o = request.gait();
         List<PostureCost.Setting> settings = new ArrayList<>();
+        fixed(settings, "gravity_m_s2", Double.toString(GaitSettings.STANDARD_GRAVITY));
         settings.add(new PostureCost.Setting(
-                "gravity_m_s2", Double.toString(GaitSettings.STANDARD_GRAVITY), "assumed"));
-        settings.add(new PostureCost.Setting("marker_low_pass_Hz", Double.toString(o.markerCutoff()), "assumed"));
-        settings.add(new PostureCost.Setting("load_low_pass_Hz", "none", "assumed"));
-        settings.add(new PostureCost.Setting("contact_threshold_N", "min(20, 0.03 m g), at least 5 noise SD", "assumed"));
-        settings.add(new PostureCost.Setting("u_v_up_m_s", "0.015 on a step, 0.003 on a stride", "assumed"));
-        settings.add(new PostureCost.Setting("u_v_forward_m_s", "0.02", "assumed"));
-        settings.add(new PostureCost.Setting("u_mass", "0.01", "assumed"));
-        settings.add(new PostureCost.Setting("mirrored", Boolean.toString(o.isMirrored()), "assumed"));
-        o.mass().ifPresent(m -> settings.add(new PostureCost.Setting("mass_given_kg", Double.toString(m), "measured")));
+                "marker_low_pass_Hz",
+                Double.toString(o.markerCutoff()),
+                o.markerCutoff() == GaitOptions.DEFAULT_MARKER_CUTOFF ? DEFAULT : GIVEN));
+        fixed(settings, "load_low_pass_Hz", "none");
+        fixed(settings, "contact_threshold_N", "min(20, 0.03 m g), at least 5 noise SD");
+        fixed(settings, "u_v_up_m_s", "0.015 on a step, 0.003 on a stride");
+        fixed(settings, "u_v_forward_m_s", "0.02");
+        fixed(settings, "u_mass", "0.01");
+        settings.add(new PostureCost.Setting(
+                "mirrored", Boolean.toString(o.isMirrored()), o.isMirrored() ? GIVEN : DEFAULT));
+        o.mass().ifPresent(m -> settings.add(new PostureCost.Setting("mass_kg", Double.toString(m), GIVEN)));
         return settings;
+    }
+
+    private static void fixed(List<PostureCost.Setting> settings, String name, String value) {
+        settings.add(new PostureCost.Setting(name, value, DEFAULT));
     }
 
     private void readModels() throws UseCaseException, FormatException {

@@ -8,6 +8,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import org.solewright.domain.finding.Basis;
+import org.solewright.domain.finding.Cautions;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.foot.FootModel;
@@ -64,6 +65,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
                 c.end(),
                 c.whole() ? "whole" : "not whole: " + c.why())));
         written.forEach(f -> lines.add("wrote " + f));
+        lines.addAll(Cautions.LINES);
         return new FitReport(lines, result.findings(), result.failed());
     }
 

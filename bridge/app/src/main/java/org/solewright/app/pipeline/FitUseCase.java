@@ -2,6 +2,7 @@ package org.solewright.app.pipeline;
 
 import java.util.ArrayList;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -11,6 +12,7 @@ import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import java.util.Set;
 import org.solewright.analysis.fitting.InertiaTable;
+import org.solewright.analysis.fitting.RigidFit;
 import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.fitting.StandingModel;
@@ -30,8 +32,11 @@ import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
+import org.solewright.domain.foot.Segment;
+import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
+import org.solewright.domain.gait.Stance;
 import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.io.FormatException;
@@ -153,7 +158,7 @@ public final class FitUseCase {
             Rolling rolling = rollOver.rolling();
             limb.findings().forEach(this::addOnce);
             rollOver.findings().forEach(this::addOnce);
-            models.put(side, model(limb, rolling, rollOver.effectiveFootLength()));
+            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), observed(subject, stood, side)));
         }
         List<Finding> shared = List.copyOf(findings);
         for (Finding f : shared) {
@@ -305,7 +310,7 @@ public final class FitUseCase {
         WalkingRollOver rollOver =
                 new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
         Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>(subject.tracksByTrial());
-        Map<String, List<SegmentTracking>> fits = new LinkedHashMap<>();
+        Map<String, List<RigidFit>> fits = new LinkedHashMap<>();
         List<Double> ankleGaps = new ArrayList<>();
         for (Pass pass : subject.passes()) {
             LandmarkTracks tracks = byTrial.get(pass.trial().name());
@@ -320,9 +325,9 @@ public final class FitUseCase {
                         "fewer than three points of the " + limb.side().word()
                                 + " shank are tracked together: no roll-over in the shank frame"));
             }
-            collect(fits, "shank", motion.shank());
-            collect(fits, "foot", motion.foot());
-            collect(fits, "thigh", motion.thigh());
+            collect(fits, "shank", motion.shank(), pass, limb.side());
+            collect(fits, "foot", motion.foot(), pass, limb.side());
+            collect(fits, "thigh", motion.thigh(), pass, limb.side());
             gap(pass, motion, limb).ifPresent(ankleGaps::add);
             rollOver.add(pass, motion);
         }
@@ -331,15 +336,40 @@ public final class FitUseCase {
         return rollOver;
     }
 
+    /** The fits of the frames in which this foot stood on a platform: there the pose is used. */
     private static void collect(
-            Map<String, List<SegmentTracking>> fits, String segment, Optional<SegmentTracking> tracking) {
-        tracking.ifPresent(t ->
-                fits.computeIfAbsent(segment, k -> new ArrayList<>()).add(t));
+            Map<String, List<RigidFit>> fits,
+            String segment,
+            Optional<SegmentTracking> tracking,
+            Pass pass,
+            Side side) {
+        if (tracking.isEmpty()) {
+            return;
+        }
+        List<RigidFit> of = fits.computeIfAbsent(segment, k -> new ArrayList<>());
+        for (int frame : stanceFrames(pass, side)) {
+            tracking.get().fit(frame).ifPresent(of::add);
+        }
     }
 
-    private void deformed(StandingLimb limb, String segment, List<SegmentTracking> fits) {
-        double rms = rootMeanSquare(fits.stream().map(SegmentTracking::rms).toList());
-        double shape = rootMeanSquare(fits.stream().map(SegmentTracking::shapeChange).toList());
+    private static List<Integer> stanceFrames(Pass pass, Side side) {
+        List<Integer> frames = new ArrayList<>();
+        double rate = pass.trial().rate();
+        double start = pass.trial().startTime();
+        for (Stance stance : pass.stances()) {
+            int last = (int) Math.floor((stance.end() - start) * rate);
+            for (int frame = (int) Math.max(0, Math.ceil((stance.start() - start) * rate));
+                    stance.side() == side && frame <= last;
+                    frame++) {
+                frames.add(frame);
+            }
+        }
+        return frames;
+    }
+
+    private void deformed(StandingLimb limb, String segment, List<RigidFit> fits) {
+        double rms = rootMeanSquare(fits.stream().map(RigidFit::rms).toList());
+        double shape = rootMeanSquare(fits.stream().map(RigidFit::shapeChange).toList());
         double limit = DEFORMED * limb.limbLength().value();
         if (rms > limit) {
             findings.add(Finding.warning(
@@ -347,9 +377,9 @@ public final class FitUseCase {
                     limb.side().word() + " " + segment,
                     String.format(
                             Locale.ROOT,
-                            "the points of the %s %s depart from their standing shape by %.1f mm rms (distances between"
-                                    + " them change by %.1f mm rms), over the limit of %.1f mm: its pose while walking is"
-                                    + " that uncertain; check for swapped or moved markers",
+                            "in stance the points of the %s %s depart from their standing shape by %.1f mm rms (distances"
+                                    + " between them change by %.1f mm rms), over the limit of %.1f mm: its pose is that"
+                                    + " uncertain; check for swapped or moved markers",
                             limb.side().word(),
                             segment,
                             1000 * rms,
@@ -370,24 +400,13 @@ public final class FitUseCase {
     private static Optional<Double> gap(Pass pass, LimbMotion motion, StandingLimb limb) {
         double sum = 0;
         int n = 0;
-        for (var stance : pass.stances()) {
-            if (stance.side() != limb.side()) {
-                continue;
-            }
-            double rate = pass.trial().rate();
-            int last = (int) Math.floor((stance.end() - pass.trial().startTime()) * rate);
-            for (int frame = (int) Math.max(0, Math.ceil((stance.start() - pass.trial().startTime()) * rate));
-                    frame <= last;
-                    frame++) {
-                int at = frame;
-                Optional<Vec3> byShank = motion.ankle(limb, at);
-                Optional<Vec3> byFoot =
-                        motion.foot().flatMap(f -> f.at(limb.ankle().position(), at));
-                if (byShank.isPresent() && byFoot.isPresent()) {
-                    double d = byShank.get().distance(byFoot.get());
-                    sum += d * d;
-                    n++;
-                }
+        for (int at : stanceFrames(pass, limb.side())) {
+            Optional<Vec3> byShank = motion.ankle(limb, at);
+            Optional<Vec3> byFoot = motion.foot().flatMap(f -> f.at(limb.ankle().position(), at));
+            if (byShank.isPresent() && byFoot.isPresent()) {
+                double d = byShank.get().distance(byFoot.get());
+                sum += d * d;
+                n++;
             }
         }
         return n == 0 ? Optional.empty() : Optional.of(Math.sqrt(sum / n));
@@ -408,14 +427,43 @@ public final class FitUseCase {
         }
     }
 
-    private FootModel model(StandingLimb limb, Rolling rolling, Optional<Quantity> effectiveFootLength) {
+    /** Segments whose points were tracked in walking: the shank, and the foot's first segment where it holds the heads. */
+    private static Set<SegmentName> observed(GaitSubject subject, StandingTrial stood, Side side) {
+        Set<SegmentName> observed = EnumSet.noneOf(SegmentName.class);
+        for (LandmarkTracks tracks : subject.walking()) {
+            LimbMotion motion = LimbMotion.of(stood, tracks, side);
+            if (motion.shank().isPresent()) {
+                observed.add(SegmentName.SHANK);
+            }
+            if (motion.foot().isPresent()) {
+                observed.add(SegmentName.FOOT);
+            }
+        }
+        return observed;
+    }
+
+    private FootModel model(
+            StandingLimb limb,
+            Rolling rolling,
+            Optional<Quantity> effectiveFootLength,
+            Set<SegmentName> observed) {
         FootModel standing = limb.model(request.version(), sources, Cautions.LINES);
         return new FootModel(
                 standing.side(),
                 standing.version(),
                 limb.subject(effectiveFootLength),
                 standing.sources(),
-                standing.segments(),
+                standing.segments().stream()
+                        .map(g -> new Segment(
+                                g.name(),
+                                g.parent(),
+                                g.mass(),
+                                g.centreOfMass(),
+                                g.inertia(),
+                                g.inertiaBasis(),
+                                g.length(),
+                                observed.contains(g.name())))
+                        .toList(),
                 standing.joints(),
                 standing.landmarks(),
                 rolling,
