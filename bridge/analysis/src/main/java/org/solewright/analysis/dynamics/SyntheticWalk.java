@@ -22,11 +22,6 @@ import org.solewright.domain.cost.WalkTruth;
  */
 public final class SyntheticWalk {
 
-    private static final int MONOTONE_SAMPLES = 2000;
-    private static final double MONOTONE_TOLERANCE = 1e-9;
-    private static final int LIMB_FORCE_SAMPLES = 2000;
-    private static final int WORK_CELLS = 200;
-
     private final WalkParameters p;
     private final double radius;
     private final double innerLean;
@@ -232,8 +227,12 @@ public final class SyntheticWalk {
         return phases.get(moment.phase());
     }
 
-    double stepEndLean() {
-        return stepEnd();
+    double innerIdealLean() {
+        return innerLean;
+    }
+
+    double stepIdealLean() {
+        return stepLean;
     }
 
     double innerEndLean() {
@@ -283,7 +282,7 @@ public final class SyntheticWalk {
     }
 
     /** Pushes of trailing and leading limb along toe-hip and heel-hip in a step bridge. */
-    private void pushes(double[] s, double offset, double[] push) {
+    void pushes(double[] s, double offset, double[] push) {
         double oldX = s[X] - (offset + p.footLength());
         double newX = s[X] - (offset + p.stepLength());
         double oldLength = Math.hypot(oldX, s[Z]);
@@ -301,123 +300,6 @@ public final class SyntheticWalk {
      * @return times, places and works
      */
     public WalkTruth truth() {
-        List<WalkTruth.Place> pivots = new ArrayList<>();
-        for (int k = 0; k <= p.segments(); k++) {
-            pivots.add(new WalkTruth.Place(
-                    radius * Math.sin(pivotAngle(k)), -radius * Math.cos(pivotAngle(k))));
-        }
-        List<WalkTruth.Transition> transitions = new ArrayList<>();
-        for (int phase = 1; phase < phases.size(); phase += 2) {
-            transitions.add(phase == phases.size() - 1 ? stepTruth() : innerTruth(phases.get(phase)));
-        }
-        return new WalkTruth(
-                stepTime,
-                p.stepLength() / stepTime,
-                radius,
-                doubleSupport(),
-                pivots,
-                transitions,
-                leastLimbForce(),
-                isMonotone());
-    }
-
-    private double power(double[] s) {
-        return p.mass() * (s[AX] * s[VX] + (s[AZ] + p.gravity()) * s[VZ]);
-    }
-
-    private WalkTruth.Inner innerTruth(HipPhase bridge) {
-        double[] s = new double[STATE];
-        double positive = quadrature.positive(
-                t -> {
-                    bridge.state(t, s);
-                    return power(s);
-                },
-                0,
-                bridge.duration(),
-                WORK_CELLS);
-        double negative = quadrature.positive(
-                t -> {
-                    bridge.state(t, s);
-                    return -power(s);
-                },
-                0,
-                bridge.duration(),
-                WORK_CELLS);
-        return new WalkTruth.Inner(positive, -negative, bridge.duration(), impulsive(innerLean));
-    }
-
-    private WalkTruth.Step stepTruth() {
-        HipPhase bridge = phases.get(phases.size() - 1);
-        return new WalkTruth.Step(
-                limbWork(bridge, 0, 1),
-                -limbWork(bridge, 0, -1),
-                limbWork(bridge, 1, 1),
-                -limbWork(bridge, 1, -1),
-                quadrature.positive(
-                        t -> {
-                            double[] s = new double[STATE];
-                            bridge.state(t, s);
-                            return power(s);
-                        },
-                        0,
-                        bridge.duration(),
-                        WORK_CELLS),
-                bridge.duration(),
-                impulsive(stepLean));
-    }
-
-    private double limbWork(HipPhase bridge, int limb, int sign) {
-        double[] s = new double[STATE];
-        double[] push = new double[2];
-        return quadrature.positive(
-                t -> {
-                    bridge.state(t, s);
-                    pushes(s, 0, push);
-                    double arm = s[X] - (limb == 0 ? p.footLength() : p.stepLength());
-                    return sign * push[limb] * (arm * s[VX] + s[Z] * s[VZ]) / Math.hypot(arm, s[Z]);
-                },
-                0,
-                bridge.duration(),
-                WORK_CELLS);
-    }
-
-    private WalkTruth.Impulsive impulsive(double lean) {
-        double speed = radius * rate(lean);
-        double energy = p.mass() * speed * speed / 2;
-        double half = Math.sin(lean) * Math.sin(lean);
-        double tangent = Math.tan(lean) * Math.tan(lean);
-        double whole = Math.sin(2 * lean) * Math.sin(2 * lean);
-        return new WalkTruth.Impulsive(
-                speed, 2 * lean, energy * tangent, energy * 2 * half, energy * half, energy * whole);
-    }
-
-    private double leastLimbForce() {
-        HipPhase bridge = phases.get(phases.size() - 1);
-        double[] s = new double[STATE];
-        double[] push = new double[2];
-        double least = Double.POSITIVE_INFINITY;
-        for (int i = 0; i <= LIMB_FORCE_SAMPLES; i++) {
-            bridge.state(bridge.duration() * i / LIMB_FORCE_SAMPLES, s);
-            pushes(s, 0, push);
-            least = Math.min(least, Math.min(push[0], push[1]));
-        }
-        return least;
-    }
-
-    private boolean isMonotone() {
-        double[] s = new double[STATE];
-        for (int phase = 1; phase < phases.size() - 1; phase += 2) {
-            HipPhase bridge = phases.get(phase);
-            double before = Double.NEGATIVE_INFINITY;
-            for (int i = 0; i <= MONOTONE_SAMPLES; i++) {
-                bridge.state(bridge.duration() * i / MONOTONE_SAMPLES, s);
-                double x = s[X] - s[Z] * s[AX] / (s[AZ] + p.gravity());
-                if (x < before - MONOTONE_TOLERANCE) {
-                    return false;
-                }
-                before = x;
-            }
-        }
-        return true;
+        return new TransitionQuadrature(this).truth();
     }
 }

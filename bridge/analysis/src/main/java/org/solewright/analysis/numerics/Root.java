@@ -7,7 +7,7 @@ import org.apache.commons.math3.analysis.solvers.BrentSolver;
 public final class Root {
 
     private static final double ACCURACY = 1e-16;
-    private static final int MOST_EVALUATIONS = 1000;
+    private static final int MOST_EVALUATIONS = 10_000;
 
     private Root() {}
 

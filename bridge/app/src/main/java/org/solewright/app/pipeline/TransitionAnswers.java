@@ -9,9 +9,11 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.solewright.analysis.cost.Crossover;
 import org.solewright.analysis.cost.EqualCost;
 import org.solewright.analysis.cost.Halving;
+import org.solewright.analysis.cost.Limit;
 import org.solewright.analysis.cost.LimitException;
 import org.solewright.analysis.cost.OptimumFoot;
 import org.solewright.analysis.cost.VaultingStep;
@@ -143,28 +145,42 @@ final class TransitionAnswers {
         }
         ObjectNode out = object();
         for (WorkForm form : in.workForms()) {
-            ObjectNode of = object();
             try {
-                of = equalCost(form, segments, limbLength, share, factor);
+                out.set(form.word(), equalCost(form, segments, limbLength, share, factor));
             } catch (LimitException e) {
-                of.put("equal", e.limit().name());
+                if (e.limit() != Limit.NO_SOLUTION) {
+                    throw e;
+                }
+                out.put(form.word(), e.limit().name());
             }
-            out.set(form.word(), of);
         }
         return out;
     }
 
+    /** Each of the two steps has its code in its place where it alone has no value. */
     private static ObjectNode equalCost(
             WorkForm form, double segments, double limbLength, double share, double factor) throws LimitException {
         ObjectNode out = object();
-        describe(out.putObject("equal"), EqualCost.equalVaults(form, segments, limbLength, share, factor));
-        if (segments > 0) {
+        Optional<LimitException> failed = Optional.empty();
+        try {
+            describe(
+                    out.putObject("equal"), EqualCost.equalVaults(form, segments, limbLength, share, factor));
+        } catch (LimitException e) {
+            failed = Optional.of(e);
+            out.put("equal", e.limit().name());
+        }
+        boolean alone = !(segments > 0);
+        if (!alone) {
             try {
                 VaultingStep optimum = EqualCost.optimumFoot(form, segments, limbLength, share, factor);
                 describe(out.putObject("optimum"), optimum);
             } catch (LimitException e) {
                 out.put("optimum", e.limit().name());
+                alone = true;
             }
+        }
+        if (failed.isPresent() && alone) {
+            throw failed.get();
         }
         return out;
     }

@@ -182,6 +182,21 @@ class SolveCommandTest {
     }
 
     @Test
+    void equalCostHasACodeInThePlaceOfTheStepThatDoesNotExist() throws IOException {
+        solve("[{\"question\": \"transition.equal-cost\", \"inputs\": {\"segments\": 1, \"limbLength\": 0.9,"
+                + " \"stepFactor\": 1.5, \"workForm\": \"noPush\"}},"
+                + "{\"question\": \"transition.equal-cost\", \"inputs\": {\"segments\": 0, \"limbLength\": 0.9,"
+                + " \"stepFactor\": 1.5, \"workForm\": \"noPush\"}},"
+                + "{\"question\": \"transition.equal-cost\", \"inputs\": {\"segments\": 1, \"limbLength\": 0.9,"
+                + " \"stepFactor\": 0.3}}]");
+        // exact: two transitions of the equal-vault foot lose up to 1 each, the optimum foot is none at D > L: up to 1
+        assertThat(answer(0).get("outputs").get("equal").has("stepLength")).isTrue();
+        assertThat(answer(0).get("outputs").get("optimum").asText()).isEqualTo("NO_SOLUTION");
+        assertThat(answer(1).get("outputs").get("error").asText()).isEqualTo("NO_SOLUTION");
+        assertThat(answer(2).get("outputs")).hasSize(5);
+    }
+
+    @Test
     void byteOrderMarkAndEmptyListAreAccepted() throws IOException {
         assertThat(solve("\ufeff[]")).isZero();
         assertThat(out.toString()).isEqualTo("[]\n");
