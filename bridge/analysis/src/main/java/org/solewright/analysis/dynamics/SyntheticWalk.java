@@ -4,7 +4,6 @@ import static org.solewright.analysis.dynamics.HipPhase.AX;
 import static org.solewright.analysis.dynamics.HipPhase.AZ;
 import static org.solewright.analysis.dynamics.HipPhase.STATE;
 import static org.solewright.analysis.dynamics.HipPhase.VX;
-import static org.solewright.analysis.dynamics.HipPhase.VZ;
 import static org.solewright.analysis.dynamics.HipPhase.X;
 import static org.solewright.analysis.dynamics.HipPhase.Z;
 
