@@ -1,6 +1,5 @@
 package org.solewright.app.cli;
 
-import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -12,7 +11,6 @@ import org.jspecify.annotations.Nullable;
 import org.solewright.app.pipeline.PostureLandscape;
 import org.solewright.app.pipeline.ResultText;
 import org.solewright.app.pipeline.UseCaseException;
-import org.solewright.domain.finding.Finding;
 import org.solewright.formats.io.FormatException;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
@@ -103,11 +101,7 @@ final class PosturesCommand implements Callable<Integer> {
         } else {
             spec.commandLine().getOut().print(table.csv());
         }
-        PrintWriter err = spec.commandLine().getErr();
-        for (Finding f : table.findings()) {
-            err.println("solewright: " + (f.where().isEmpty() ? "" : f.where() + ": ")
-                    + f.severity().word() + " " + f.code() + ": " + f.message());
-        }
+        FindingPrinter.print(spec.commandLine().getErr(), table.findings());
         return ExitCode.DONE;
     }
 

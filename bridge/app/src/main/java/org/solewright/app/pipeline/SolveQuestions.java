@@ -15,11 +15,13 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
-import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import java.util.TreeMap;
 import org.solewright.analysis.cost.LimitException;
 import org.solewright.formats.io.FormatException;
+import org.solewright.formats.io.Spelling;
 
 /** Answers the questions of a file: 04-posture-cost section 12. */
 public final class SolveQuestions {
@@ -29,6 +31,27 @@ public final class SolveQuestions {
 
     private static final int DEEPEST = 100;
 
+    /** Questions that have a name already and no answer yet. */
+    private static final Set<String> LATER = Set.of(
+            "cost.calibration",
+            "cost.optimum",
+            "cost.optimum-by-speed",
+            "cost.rates",
+            "vault.duration",
+            "vault.level-gait",
+            "vault.passive-gait",
+            "vault.rimless-wheel",
+            "vault.polygon-step",
+            "vault.speed-window",
+            "walker.passive",
+            "walker.powered",
+            "walker.target",
+            "walker.period-doubling",
+            "impact.chain",
+            "sprawl.trochoid",
+            "sprawl.circle",
+            "power.distal");
+
     private final JsonMapper mapper = JsonMapper.builder(JsonFactory.builder()
                     .streamReadConstraints(StreamReadConstraints.builder()
                             .maxNestingDepth(DEEPEST)
@@ -37,7 +60,7 @@ public final class SolveQuestions {
             .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
             .enable(DeserializationFeature.FAIL_ON_READING_DUP_TREE_KEY)
             .build();
-    private final Map<String, Answerer> answerers = new HashMap<>();
+    private final Map<String, Answerer> answerers = new TreeMap<>();
 
     /** With all questions of this version. */
     public SolveQuestions() {
@@ -208,10 +231,15 @@ public final class SolveQuestions {
         }
         Answerer answerer = answerers.get(word.textValue());
         if (answerer == null) {
+            String name = "'" + QuestionInputs.shown(word.textValue()) + "'";
             throw new CallerError(
                     CallerError.Code.UNKNOWN_QUESTION,
-                    "'" + QuestionInputs.shown(word.textValue()) + "' is not answered by this version, which answers "
-                            + String.join(", ", answerers.keySet().stream().sorted().toList()));
+                    LATER.contains(word.textValue())
+                            ? name + " is not answered by this version"
+                            : "there is no question " + name
+                                    + Spelling.nearest(word.textValue(), answerers.keySet())
+                                            .map(n -> ", did you mean '" + n + "'?")
+                                            .orElse(""));
         }
         return answerer;
     }

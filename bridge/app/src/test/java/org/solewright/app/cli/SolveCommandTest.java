@@ -89,7 +89,8 @@ class SolveCommandTest {
                 + "{\"id\": 7, \"question\": \"walker.passive\", \"inputs\": {}},"
                 + "{\"id\": \"t\", \"question\": \"transition.halving\", \"inputs\": {\"stepLength\": \"NaN\","
                 + " \"limbLength\": 0.9}},"
-                + "{\"question\": \"transition.halving\", \"inputs\": {\"stepLength\": 0.6, \"limbLength\": 0.9}}, 3]}");
+                + "{\"question\": \"transition.halving\", \"inputs\": {\"stepLength\": 0.6, \"limbLength\": 0.9}}, 3,"
+                + "{\"question\": \"transition.stepp\"}]}");
         assertThat(code).isEqualTo(1);
         assertThat(answer(0).get("outputs").get("error").asText()).isEqualTo("MISSING_INPUT");
         assertThat(answer(0).get("outputs").get("message").asText()).contains("'speed'");
@@ -99,7 +100,9 @@ class SolveCommandTest {
         assertThat(answer(2).get("outputs").get("error").asText()).isEqualTo("WRONG_TYPE");
         assertThat(answer(3).get("outputs").get("simultaneous").asDouble()).isEqualTo(0.5);
         assertThat(answer(4).get("outputs").get("error").asText()).isEqualTo("WRONG_TYPE");
-        assertThat(err.toString().lines()).hasSize(4);
+        assertThat(err.toString().lines()).hasSize(5);
+        assertThat(answer(5).get("outputs").get("message").asText())
+                .isEqualTo("there is no question 'transition.stepp', did you mean 'transition.step'?");
         assertThat(err.toString().lines().toList().get(0))
                 .startsWith("solewright: ")
                 .contains("question a: MISSING_INPUT: input 'speed' is not given");
