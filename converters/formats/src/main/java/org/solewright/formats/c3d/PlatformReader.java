@@ -36,29 +36,15 @@ final class PlatformReader {
         this.findings = findings;
     }
 
-    /** Platform axes in the laboratory frame. */
-    private record Axes(Vec3 x, Vec3 y, Vec3 z) {
-        static Axes of(List<Vec3> c) {
-            Vec3 x = c.get(0).plus(c.get(3)).minus(c.get(1)).minus(c.get(2)).unit();
-            Vec3 z = x.cross(c.get(0).plus(c.get(1)).minus(c.get(2)).minus(c.get(3)))
-                    .unit();
-            return new Axes(x, z.cross(x), z);
-        }
-
-        Vec3 toLaboratory(double[] v, int at, double sign) {
-            return x.times(sign * v[at]).plus(y.times(sign * v[at + 1])).plus(z.times(sign * v[at + 2]));
-        }
-    }
-
     /** A platform that can be used, with its wrench in platform axes about the surface centre, before the sign. */
     private static final class Usable {
         private final C3dPlatform platform;
-        private final Axes axes;
+        private final PlatformAxes axes;
         private final boolean hasCop;
         private final double[] force;
         private final double[] moment;
 
-        Usable(C3dPlatform platform, Axes axes, boolean hasCop, double[] force, double[] moment) {
+        Usable(C3dPlatform platform, PlatformAxes axes, boolean hasCop, double[] force, double[] moment) {
             this.platform = platform;
             this.axes = axes;
             this.hasCop = hasCop;
@@ -102,9 +88,9 @@ final class PlatformReader {
         if (isUnitKnown && !LengthUnit.hasPlausibleSides(p.corners(), metres)) {
             return refuse(where, "has sides outside 0.05 to 3 m");
         }
-        Axes axes;
+        PlatformAxes axes;
         try {
-            axes = Axes.of(p.corners());
+            axes = PlatformAxes.of(p.corners());
         } catch (IllegalArgumentException e) {
             return refuse(where, "has corners that span no plane");
         }
@@ -154,7 +140,7 @@ final class PlatformReader {
         return isUpward ? o.times(-1) : o;
     }
 
-    private Usable wrench(C3dPlatform p, Axes axes, boolean hasCop) {
+    private Usable wrench(C3dPlatform p, PlatformAxes axes, boolean hasCop) {
         int n = file.analog().samples();
         int width = p.type() == 3 ? 8 : 6;
         double[] c = channels(p, n, width);
