@@ -19,10 +19,13 @@ import picocli.CommandLine.ScopeType;
         scope = ScopeType.INHERIT,
         synopsisSubcommandLabel = "COMMAND",
         subcommands = {
+            SurveyCommand.class,
+            TabulateCommand.class,
             FitCommand.class,
             AppraiseCommand.class,
             PosturesCommand.class,
             SolveCommand.class,
+            DemoCommand.class,
         })
 public final class Main {
 

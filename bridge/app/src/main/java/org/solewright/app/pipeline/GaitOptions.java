@@ -47,6 +47,23 @@ public record GaitOptions(
         walking = List.copyOf(walking);
     }
 
+    /** The same without standing recordings. */
+    GaitOptions withoutStanding() {
+        return new GaitOptions(
+                List.of(),
+                walking,
+                landmarks,
+                mass,
+                stature,
+                population,
+                sex,
+                contacts,
+                floor,
+                isMirrored,
+                markerRadius,
+                markerCutoff);
+    }
+
     /** All files of the call. */
     List<Path> inputs() {
         List<Path> all = new ArrayList<>(standing);

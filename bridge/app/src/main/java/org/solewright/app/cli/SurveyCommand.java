@@ -1,0 +1,72 @@
+package org.solewright.app.cli;
+
+import java.io.PrintWriter;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.Callable;
+import org.solewright.app.pipeline.Survey;
+import org.solewright.app.pipeline.SurveyJson;
+import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.domain.finding.Severity;
+import org.solewright.formats.io.FormatException;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** Says what C3D files hold and what is wrong with them. */
+@Command(
+        name = "survey",
+        description = "Says what a C3D file holds and what is wrong with it.",
+        footer = {"", "Example:", "  solewright survey walk-1.c3d walk-2.c3d --json"})
+final class SurveyCommand implements Callable<Integer> {
+
+    @Parameters(paramLabel = "FILE", arity = "1..*", description = "C3D files.")
+    private List<Path> files = new ArrayList<>();
+
+    @Option(names = "--json", description = "One JSON document per file, each on one line.")
+    private boolean isJson;
+
+    @Option(names = "--header", description = "Read no data block; leave gaps and peaks out.")
+    private boolean isHeaderOnly;
+
+    @Spec
+    private CommandSpec spec = CommandSpec.create();
+
+    /** For picocli. */
+    SurveyCommand() {}
+
+    @Override
+    public Integer call() {
+        PrintWriter out = spec.commandLine().getOut();
+        int failed = 0;
+        for (Path file : files) {
+            try {
+                Survey survey = Survey.of(file, isHeaderOnly);
+                if (isJson) {
+                    out.println(SurveyJson.line(survey));
+                } else {
+                    survey.page().forEach(out::println);
+                }
+                failed += survey.findings().stream().anyMatch(f -> f.severity() == Severity.ERROR) ? 1 : 0;
+            } catch (UseCaseException e) {
+                failed++;
+                report(out, file, "file.unreadable", e.getMessage() + ": " + e.whatToDo());
+            } catch (FormatException e) {
+                failed++;
+                report(out, file, "file.format", e.getMessage() + ": " + e.whatToDo());
+            }
+            out.flush();
+        }
+        return failed == 0 ? ExitCode.DONE : failed == files.size() ? ExitCode.INPUT : ExitCode.SOME_FAILED;
+    }
+
+    private void report(PrintWriter out, Path file, String code, String message) {
+        spec.commandLine().getErr().println("solewright: " + file + ": " + message);
+        if (isJson) {
+            out.println(SurveyJson.failed(file.toString(), code, message));
+        }
+    }
+}
