@@ -11,8 +11,13 @@ final class FindingPrinter {
 
     static void print(PrintWriter err, List<Finding> findings) {
         for (Finding f : findings) {
-            err.println("solewright: " + (f.where().isEmpty() ? "" : f.where() + ": ")
-                    + f.severity().word() + " " + f.code() + ": " + f.message());
+            err.println(printable("solewright: " + (f.where().isEmpty() ? "" : f.where() + ": ")
+                    + f.severity().word() + " " + f.code() + ": " + f.message()));
         }
+    }
+
+    /** Text from files without control characters, which a terminal would obey. */
+    static String printable(String text) {
+        return text.replaceAll("\\p{Cntrl}", "?");
     }
 }

@@ -8,6 +8,7 @@ import java.util.concurrent.Callable;
 import org.solewright.app.pipeline.Survey;
 import org.solewright.app.pipeline.SurveyJson;
 import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Severity;
 import org.solewright.formats.io.FormatException;
 import picocli.CommandLine.Command;
@@ -48,9 +49,16 @@ final class SurveyCommand implements Callable<Integer> {
                 if (isJson) {
                     out.println(SurveyJson.line(survey));
                 } else {
-                    survey.page().forEach(out::println);
+                    survey.page().forEach(l -> out.println(FindingPrinter.printable(l)));
                 }
-                failed += survey.findings().stream().anyMatch(f -> f.severity() == Severity.ERROR) ? 1 : 0;
+                for (Finding f : survey.findings()) {
+                    if (f.severity() == Severity.ERROR) {
+                        failed++;
+                        spec.commandLine().getErr().println("solewright: " + file + ": " + f.message()
+                                + ": get a complete copy of the file");
+                        break;
+                    }
+                }
             } catch (UseCaseException e) {
                 failed++;
                 report(out, file, "file.unreadable", e.getMessage() + ": " + e.whatToDo());
@@ -64,7 +72,7 @@ final class SurveyCommand implements Callable<Integer> {
     }
 
     private void report(PrintWriter out, Path file, String code, String message) {
-        spec.commandLine().getErr().println("solewright: " + file + ": " + message);
+        spec.commandLine().getErr().println(FindingPrinter.printable("solewright: " + file + ": " + message));
         if (isJson) {
             out.println(SurveyJson.failed(file.toString(), code, message));
         }

@@ -24,6 +24,8 @@ import org.solewright.formats.io.FormatException;
  */
 public record Survey(Path path, C3dFile file, Recording recording, boolean isHeaderOnly) {
 
+    private static final int MOST_LISTED = 100;
+
     /**
      * Surveys a file.
      *
@@ -117,7 +119,7 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
         points(lines);
         if (file.analog().channels() > 0) {
             lines.add("  " + file.analog().channels() + " analog channels at " + number(file.analog().rate()) + " Hz: "
-                    + String.join(" ", file.analogLabels()));
+                    + listed(file.analogLabels()));
         }
         for (C3dPlatform p : file.platforms()) {
             lines.add(platform(p));
@@ -142,7 +144,7 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
     private void points(List<String> lines) {
         int n = file.points().points();
         if (isHeaderOnly) {
-            lines.add("  " + n + " points: " + String.join(" ", file.labels()));
+            lines.add("  " + n + " points: " + listed(file.labels()));
             return;
         }
         List<String> whole = new ArrayList<>();
@@ -169,8 +171,11 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
                         file.rate() > 0 ? String.format(Locale.ROOT, " (%.3f s)", longest / file.rate()) : ""));
             }
         }
-        lines.add("  " + n + " points" + (whole.isEmpty() ? "" : ", without gaps: " + String.join(" ", whole)));
-        lines.addAll(gapped);
+        lines.add("  " + n + " points" + (whole.isEmpty() ? "" : ", without gaps: " + listed(whole)));
+        lines.addAll(gapped.subList(0, Math.min(MOST_LISTED, gapped.size())));
+        if (gapped.size() > MOST_LISTED) {
+            lines.add("    ... and " + (gapped.size() - MOST_LISTED) + " more with gaps");
+        }
     }
 
     private String platform(C3dPlatform p) {
@@ -186,6 +191,11 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
                                 ? ""
                                 : String.format(Locale.ROOT, ", peak vertical %.1f N", peakVertical(p.number())));
         return "  platform " + p.number() + ", type " + p.type() + ": " + where;
+    }
+
+    private static String listed(List<String> labels) {
+        return String.join(" ", labels.subList(0, Math.min(MOST_LISTED, labels.size())))
+                + (labels.size() > MOST_LISTED ? " ... and " + (labels.size() - MOST_LISTED) + " more" : "");
     }
 
     private static String number(double v) {

@@ -77,24 +77,40 @@ final class C3dReader {
                     "processor.unknown",
                     "",
                     "the processor byte is " + key + ", expected 84, 85 or 86; it is told from the header's numbers"));
+            return guess(c)
+                    .orElseThrow(() -> new FormatException(
+                            source,
+                            "is not a C3D file: the processor byte at offset " + (at + 3) + " is " + key
+                                    + ", expected 84, 85 or 86, and the header's numbers make no sense",
+                            "give a C3D file"));
         } else if (block > 0) {
             throw new FormatException(
                     source,
                     "ends at byte " + bytes.length + " before its parameter section at byte " + at,
                     "get a complete copy of the file");
         }
-        return guess(c);
+        return guess(c)
+                .orElseThrow(() -> new FormatException(
+                        source,
+                        "has no parameter section and a header whose numbers make no sense",
+                        "get a complete copy of the file"));
     }
 
-    /** The processor under which the header's data block and rate make sense. */
-    private static Processor guess(ByteCursor c) throws FormatException {
+    /** The processor under which the header's data block, frames and rate make sense. */
+    private static Optional<Processor> guess(ByteCursor c) throws FormatException {
         for (Processor p : Processor.values()) {
             C3dHeader h = C3dHeader.read(c.as(p));
-            if (h.rate() >= 1 && h.rate() < 1e5 && h.dataBlock() > 0 && h.dataBlock() < 1000) {
-                return p;
+            boolean isPlausible = h.rate() >= 1
+                    && h.rate() < 1e5
+                    && h.dataBlock() > 0
+                    && h.dataBlock() < 1000
+                    && h.lastFrame() >= h.firstFrame()
+                    && (h.dataBlock() - 1L) * BLOCK <= c.length();
+            if (isPlausible) {
+                return Optional.of(p);
             }
         }
-        return Processor.INTEL;
+        return Optional.empty();
     }
 
     private static boolean hasParameters(ByteCursor c, int block) {
@@ -216,10 +232,11 @@ final class C3dReader {
                         "ends at byte " + c.length() + " before its first frame at byte " + layout.start(),
                         "get a complete copy of the file");
             }
-            findings.add(Finding.warning(
-                    "file.truncated",
-                    "",
-                    "the file says " + count + " frames and ends after " + fits + " whole ones"));
+            String message = "the file says " + count + " frames and ends after " + fits + " whole ones";
+            findings.add(
+                    fits == 0
+                            ? Finding.error("file.truncated", "", message)
+                            : Finding.warning("file.truncated", "", message));
             count = fits;
         } else if (room - count * bytes >= BLOCK) {
             findings.add(Finding.note(

@@ -38,6 +38,9 @@ public final class AtomicOutput {
         if (folder == null) {
             throw new IOException(target + " is not a file name");
         }
+        if (!Files.isDirectory(folder)) {
+            throw new IOException("its folder does not exist");
+        }
         Path temporary = Files.createTempFile(folder, ".writing-", ".part");
         try {
             try (OutputStream out = Files.newOutputStream(temporary)) {
