@@ -33,6 +33,7 @@ import org.solewright.domain.motion.Recording;
  */
 final class GaitSubject {
 
+    private static final double SHORTEST_WALK = 0.3;
     private static final double LARGEST_TILT = Math.toRadians(20);
 
     private final GaitOptions options;
@@ -219,19 +220,38 @@ final class GaitSubject {
                         r.name(),
                         "the walking recording lacks every pelvic landmark (asis, psis, sacrum, trochanter_major)",
                         "map at least one: the walking direction and speed come from the pelvis"));
+        checkTravel(r, pelvis);
+        return new WalkingTrial(
+                trialName(r), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
+    }
+
+    /** A walk needs a pelvis that is seen and goes somewhere. */
+    private static void checkTravel(Recording recording, double[] pelvis) throws UseCaseException {
         int tracked = 0;
+        Vec3 first = Vec3.ZERO;
+        double farthest = 0;
         for (int i = 0; i < pelvis.length; i += 3) {
-            tracked += Double.isNaN(pelvis[i]) ? 0 : 1;
+            if (!Double.isNaN(pelvis[i])) {
+                Vec3 at = new Vec3(pelvis[i], pelvis[i + 1], pelvis[i + 2]);
+                first = tracked == 0 ? at : first;
+                farthest = Math.max(farthest, at.distance(first));
+                tracked++;
+            }
         }
         if (tracked < 2) {
             throw new UseCaseException(
                     UseCaseException.Kind.INPUT,
-                    r.name(),
-                    "the pelvic landmarks are seen together in " + tracked + " of " + r.frames() + " frames",
+                    recording.name(),
+                    "the pelvic landmarks are seen together in " + tracked + " of " + recording.frames() + " frames",
                     "map landmarks that are seen while walking");
         }
-        return new WalkingTrial(
-                trialName(r), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
+        if (farthest < SHORTEST_WALK) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT,
+                    recording.name(),
+                    String.format(Locale.ROOT, "the pelvis travels %.2f m in it: nobody walks", farthest),
+                    "give a walking recording over ground");
+        }
     }
 
     /** Up from the platforms' normals, else from the standing trial; they must agree within 20 degrees. */

@@ -1,0 +1,244 @@
+package org.solewright.app.pipeline;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.junit.jupiter.api.Assumptions.assumeTrue;
+
+import java.io.IOException;
+import java.net.URISyntaxException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.EnumSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.solewright.analysis.fitting.InertiaTable;
+import org.solewright.domain.cost.TransitionRow;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.foot.FootModel;
+import org.solewright.domain.foot.Population;
+import org.solewright.domain.foot.Rolling;
+import org.solewright.domain.gait.ContactRow;
+import org.solewright.domain.gait.Side;
+import org.solewright.domain.gait.Use;
+import org.solewright.formats.footmodel.FootModelFile;
+import org.solewright.formats.io.FormatException;
+
+/**
+ * The main job on a real recording: one person, barefoot, two platforms, no mass in the file. Bands: independent, from the
+ * calculation of design 03 section 9, with its column "accept".
+ */
+class RealRecordingTest {
+
+    @TempDir
+    private static Path folder;
+
+    private static Optional<Path> files;
+    private static FitReport fit;
+    private static AppraiseReport appraisal;
+    private static AppraiseUseCase.Result result;
+    private static FitUseCase.Result fitted;
+
+    private static Path recording(String name) {
+        return files.orElseThrow().resolve("s26-" + name + ".c3d");
+    }
+
+    private static GaitOptions options(List<Path> standing) throws URISyntaxException {
+        Path map = Path.of(RealRecordingTest.class
+                .getResource("/org/solewright/app/s26-landmarks.xml")
+                .toURI());
+        return new GaitOptions(
+                standing,
+                List.of(
+                        recording("walking-hybrid-1-1"),
+                        recording("walking-hybrid-1-2"),
+                        recording("walking-hybrid-1-3")),
+                map,
+                OptionalDouble.empty(),
+                OptionalDouble.empty(),
+                Population.UNKNOWN,
+                Optional.empty(),
+                Optional.empty(),
+                OptionalDouble.empty(),
+                false,
+                OptionalDouble.empty(),
+                GaitOptions.DEFAULT_MARKER_CUTOFF);
+    }
+
+    @BeforeAll
+    static void fitAndAppraise() throws URISyntaxException, UseCaseException, FormatException {
+        files = SharedFolder.find().map(s -> s.resolve("c3d").resolve("files")).filter(Files::isDirectory);
+        assumeTrue(files.isPresent(), "the shared recordings are not beside this checkout");
+        FitUseCase.Request request = new FitUseCase.Request(
+                options(List.of(recording("standing-hybrid-1"))),
+                EnumSet.allOf(Side.class),
+                true,
+                OptionalInt.empty(),
+                InertiaTable.DE_LEVA,
+                "s26",
+                "test");
+        fit = FitReport.write(request, folder);
+        fitted = FitUseCase.run(request);
+        AppraiseUseCase.Request cost = new AppraiseUseCase.Request(
+                options(List.of()),
+                List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
+                "test");
+        appraisal = AppraiseReport.write(cost, folder);
+        result = AppraiseUseCase.run(cost);
+    }
+
+    private static TransitionRow row(int walk) {
+        return result.cost().rows().stream()
+                .filter(r -> r.text("trial").orElse("").equals("s26-walking-hybrid-1-" + walk))
+                .findFirst()
+                .orElseThrow();
+    }
+
+    private static void each(String column, double low, double high) {
+        for (int walk = 1; walk <= 3; walk++) {
+            assertThat(row(walk).number(column).orElse(Double.NaN))
+                    .as(column + " of walk " + walk)
+                    .isBetween(low, high);
+        }
+    }
+
+    private static void around(String column, double tolerance, double first, double second, double third) {
+        double[] expected = {first, second, third};
+        for (int walk = 1; walk <= 3; walk++) {
+            assertThat(row(walk).number(column).orElse(Double.NaN))
+                    .as(column + " of walk " + walk)
+                    .isBetween(expected[walk - 1] - tolerance, expected[walk - 1] + tolerance);
+        }
+    }
+
+    @Test
+    void massStepAndSpeedAreInTheirBands() {
+        each("mass_kg", 81.5, 84.5);
+        around("step_length_m", 0.006, 0.793, 0.795, 0.782);
+        around("step_time_s", 0.006, 0.517, 0.518, 0.501);
+        around("speed_m_s", 0.02, 1.553, 1.550, 1.580);
+        each("speed_before_m_s", 1.65, 1.72);
+    }
+
+    @Test
+    void worksAreInTheirBands() {
+        each("push_off_J", 16.5, 24);
+        each("push_off_ds_J", 13.5, 17.5);
+        each("collision_J", -23, -16);
+        each("collision_ds_J", -20.5, -15.5);
+        each("rebound_J", 5, 11.5);
+        for (int walk = 1; walk <= 2; walk++) {
+            assertThat(row(walk).number("preload_J").orElse(Double.NaN)).isBetween(-15.5, -9.0);
+        }
+        assertThat(row(3).number("preload_J")).isEmpty();
+    }
+
+    @Test
+    void anglesAndCollisionMeasuresAreInTheirBands() {
+        each("transition_angle_deg", 19, 24);
+        each("transition_angle_ds_deg", 10.5, 14);
+        each("collision_angle_deg", 3.3, 3.9);
+        each("collision_fraction", 0.25, 0.30);
+        each("mechanical_cost_of_transport", 0.060, 0.069);
+        each("com_height_range_m", 0.041, 0.052);
+    }
+
+    @Test
+    void worksCarryTheirSpread() {
+        // independent: an upward doubt of 0.015 m/s under some 800 N over 0.1 s of double support alone is 1.2 J.
+        each("push_off_J_sd", 0.3, 4);
+        each("collision_J_sd", 0.3, 4);
+    }
+
+    @Test
+    void onlyTheTwoStancesOverAnEdgeAreMarked() {
+        Map<String, Boolean> whole = fitted.contacts().stream()
+                .collect(java.util.stream.Collectors.toMap(
+                        c -> c.trial().substring(c.trial().length() - 1)
+                                + c.side().word(), ContactRow::whole));
+        assertThat(whole)
+                .containsOnly(
+                        Map.entry("1right", true),
+                        Map.entry("1left", true),
+                        Map.entry("2right", false),
+                        Map.entry("2left", true),
+                        Map.entry("3right", true),
+                        Map.entry("3left", false));
+        assertThat(codes(fit.findings(), "loads.foot-over-edge")).hasSize(2);
+        ContactRow second = fitted.contacts().stream()
+                .filter(c -> c.trial().endsWith("2") && c.side() == Side.RIGHT)
+                .findFirst()
+                .orElseThrow();
+        assertThat(second.notUsedFor()).contains(Use.CONTACT_ANGLE, Use.ROLL_OVER, Use.COLLISION, Use.MASS);
+        assertThat(second.usedFor()).contains(Use.PUSH_OFF);
+        ContactRow third = fitted.contacts().stream()
+                .filter(c -> c.trial().endsWith("3") && c.side() == Side.LEFT)
+                .findFirst()
+                .orElseThrow();
+        assertThat(third.notUsedFor()).contains(Use.PRELOAD, Use.PUSH_OFF, Use.MASS);
+        assertThat(third.usedFor()).contains(Use.COLLISION);
+    }
+
+    private static List<Finding> codes(List<Finding> findings, String code) {
+        return findings.stream().filter(f -> f.code().equals(code)).toList();
+    }
+
+    @Test
+    void whatIsDoubtfulIsSaid() {
+        for (String code : List.of(
+                "platform.origin-sign",
+                "points.flag-65535",
+                "platform.height",
+                "mass.not-given",
+                "limb.length-differs",
+                "population.unknown")) {
+            assertThat(codes(fit.findings(), code)).as(code).isNotEmpty();
+        }
+        assertThat(codes(fit.findings(), "cluster.deformed"))
+                .extracting(Finding::where)
+                .containsExactly("right shank");
+        assertThat(codes(fit.findings(), "platform.height").get(0).message()).contains("-23 mm");
+        assertThat(codes(appraisal.findings(), "gait.unsteady"))
+                .extracting(Finding::where)
+                .anyMatch(w -> w.contains("1-3"));
+        assertThat(fit.failed()).isEmpty();
+    }
+
+    @Test
+    void arcsAreFiniteWithTheirSpread() throws IOException, FormatException {
+        for (Side side : Side.values()) {
+            FootModel model = FootModelFile.read(folder.resolve("foot-model-" + side.word() + ".xml"));
+            for (Rolling.Frame frame : Rolling.Frame.values()) {
+                Rolling.Arc arc = model.rolling().arc(frame).orElseThrow();
+                assertThat(arc.radius()).isFinite().isPositive();
+                assertThat(arc.radiusSd()).isPresent();
+                assertThat(arc.radiusSd().getAsDouble()).isFinite();
+            }
+            assertThat(model.cautions()).isNotEmpty();
+        }
+    }
+
+    @Test
+    void modelIsValidAgainstItsSchemaAndComesBackTheSame() throws IOException, FormatException {
+        // Reading validates against the schema.
+        FootModel model = FootModelFile.read(folder.resolve("foot-model-left.xml"));
+        assertThat(FootModelFile.bytes(model)).isEqualTo(Files.readAllBytes(folder.resolve("foot-model-left.xml")));
+    }
+
+    @Test
+    void comparedPosturesOfTheStepHaveTheRightOrder() {
+        for (int walk = 1; walk <= 3; walk++) {
+            TransitionRow row = row(walk);
+            double compass = row.number("compass_J").orElse(Double.NaN);
+            // independent: design 03 section 8 gives 42.3 J for l 0.931 m, D 0.793 m, v 1.675 m/s, m 83.2 kg.
+            assertThat(compass).isBetween(41.0, 44.0);
+            assertThat(row.number("plantigrade_1_J").orElse(Double.NaN)).isLessThan(compass);
+            assertThat(row.number("plantigrade_6_J").orElse(Double.NaN))
+                    .isLessThan(row.number("plantigrade_3_J").orElse(Double.NaN));
+        }
+    }
+}
