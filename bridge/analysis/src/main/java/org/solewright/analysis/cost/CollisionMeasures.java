@@ -42,8 +42,8 @@ public record CollisionMeasures(
     public static CollisionMeasures of(
             double[] force, double[] velocity, double timeStep, double mass, double gravity) {
         if (force.length != velocity.length || force.length % 3 != 0) {
-            throw new IllegalArgumentException("collision measures of " + force.length + " force and "
-                    + velocity.length + " velocity components, expected equal multiples of 3");
+            throw new IllegalArgumentException("collision measures of " + force.length + " force and " + velocity.length
+                    + " velocity components, expected equal multiples of 3");
         }
         int count = force.length / 3;
         double[] sums = new double[WAY + 1];
@@ -101,7 +101,6 @@ public record CollisionMeasures(
      */
     public static double turn(double forwardBefore, double upBefore, double forwardAfter, double upAfter) {
         return Math.atan2(
-                forwardBefore * upAfter - upBefore * forwardAfter,
-                forwardBefore * forwardAfter + upBefore * upAfter);
+                forwardBefore * upAfter - upBefore * forwardAfter, forwardBefore * forwardAfter + upBefore * upAfter);
     }
 }

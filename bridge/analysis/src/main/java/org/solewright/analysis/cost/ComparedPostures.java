@@ -42,8 +42,7 @@ public record ComparedPostures(
             "geometric thought experiment: muscle work to hold the heel up is not counted";
 
     private static final List<WorkForm> FORMS = List.of(WorkForm.PUSH_OFF, WorkForm.SIMULTANEOUS);
-    private static final FootCrossover NO_CROSSOVER =
-            new FootCrossover(OptionalDouble.empty(), OptionalDouble.empty());
+    private static final FootCrossover NO_CROSSOVER = new FootCrossover(OptionalDouble.empty(), OptionalDouble.empty());
 
     /** Copies the lists. */
     public ComparedPostures {
@@ -82,10 +81,12 @@ public record ComparedPostures(
     private static double factor(Stand stand, double stepLength, WorkForm form) throws LimitException {
         if (stand.posture().kind() == Posture.Kind.ROLLING_ARC) {
             double half = stand.arcRadius() > 0 ? stand.foot() / (2 * stand.arcRadius()) : 0;
-            return RollingFoot.shortArc(stepLength, stand.limb(), stand.arcRadius(), half).factor(form);
+            return RollingFoot.shortArc(stepLength, stand.limb(), stand.arcRadius(), half)
+                    .factor(form);
         }
         int segments = stand.posture().segments().orElse(0);
-        return VaultingStep.given(segments, stepLength, stand.limb(), stand.foot(), 0).factor(form);
+        return VaultingStep.given(segments, stepLength, stand.limb(), stand.foot(), 0)
+                .factor(form);
     }
 
     /**
@@ -102,7 +103,8 @@ public record ComparedPostures(
         for (Stand stand : stands(limb, step, findings)) {
             for (Comparison comparison : Comparison.values()) {
                 for (WorkForm form : FORMS) {
-                    PostureRow row = row(stand, comparison, form, limb.limbLength().value(), step, findings);
+                    PostureRow row =
+                            row(stand, comparison, form, limb.limbLength().value(), step, findings);
                     rows.add(row);
                     if (comparison == Comparison.MEASURED && form == WorkForm.SIMULTANEOUS) {
                         row.workPerStep().ifPresent(work -> wide.put(stand.posture(), work));
@@ -131,22 +133,28 @@ public record ComparedPostures(
         List<Stand> stands = new ArrayList<>();
         Quantity l = limb.limbLength();
         for (Posture posture : Posture.all()) {
-            Optional<Stand> stand = switch (posture.kind()) {
-                case COMPASS -> Optional.of(new Stand(posture, l.value(), 0, 0, l.basis()));
-                case PLANTIGRADE -> limb.footLength()
-                        .map(f -> new Stand(posture, l.value(), f.value(), 0, weaker(l.basis(), f.basis())));
-                case ROLLING_ARC -> arc(posture, limb, step, findings);
-                case DIGITIGRADE -> limb.toMetatarsalHeads().flatMap(r -> limb.headsToToeTip()
-                        .map(f -> new Stand(posture, r.value(), f.value(), 0, weaker(r.basis(), f.basis()))));
-                case UNGULIGRADE -> limb.toToeTip().map(r -> new Stand(posture, r.value(), 0, 0, r.basis()));
-            };
+            Optional<Stand> stand =
+                    switch (posture.kind()) {
+                        case COMPASS -> Optional.of(new Stand(posture, l.value(), 0, 0, l.basis()));
+                        case PLANTIGRADE ->
+                            limb.footLength()
+                                    .map(f ->
+                                            new Stand(posture, l.value(), f.value(), 0, weaker(l.basis(), f.basis())));
+                        case ROLLING_ARC -> arc(posture, limb, step, findings);
+                        case DIGITIGRADE ->
+                            limb.toMetatarsalHeads()
+                                    .flatMap(r -> limb.headsToToeTip()
+                                            .map(f -> new Stand(
+                                                    posture, r.value(), f.value(), 0, weaker(r.basis(), f.basis()))));
+                        case UNGULIGRADE -> limb.toToeTip().map(r -> new Stand(posture, r.value(), 0, 0, r.basis()));
+                    };
             stand.ifPresent(stands::add);
             if (stand.isEmpty() && posture.kind() != Posture.Kind.ROLLING_ARC && firstOfKind(posture)) {
                 findings.add(Finding.note(
                         "postures.length-unknown",
                         place(step),
-                        missing(posture.kind()) + " is not known: no " + posture.kind().name().toLowerCase(Locale.ROOT)
-                                + " posture"));
+                        missing(posture.kind()) + " is not known: no "
+                                + posture.kind().name().toLowerCase(Locale.ROOT) + " posture"));
             }
         }
         return stands;
@@ -166,8 +174,7 @@ public record ComparedPostures(
         };
     }
 
-    private static Optional<Stand> arc(
-            Posture posture, ComparedLimb limb, TakenStep step, List<Finding> findings) {
+    private static Optional<Stand> arc(Posture posture, ComparedLimb limb, TakenStep step, List<Finding> findings) {
         if (limb.arc().isEmpty()) {
             findings.add(Finding.note(
                     "postures.arc-unknown", place(step), "no arc in the limb frame is known: no rolling posture"));
@@ -186,7 +193,9 @@ public record ComparedPostures(
                             curvature, 1 / l)));
             return Optional.empty();
         }
-        Basis basis = weaker(limb.limbLength().basis(), weaker(arc.curvature().basis(), arc.length().basis()));
+        Basis basis = weaker(
+                limb.limbLength().basis(),
+                weaker(arc.curvature().basis(), arc.length().basis()));
         return Optional.of(new Stand(posture, l, arc.length().value(), 1 / curvature, basis));
     }
 
@@ -202,11 +211,12 @@ public record ComparedPostures(
             TakenStep step,
             List<Finding> findings) {
         double ratio = comparison == Comparison.SAME_FROUDE ? stand.limb() / limbLength : 1;
-        double share = switch (comparison) {
-            case MEASURED, SAME_FROUDE -> 1;
-            case STEP_09 -> 0.9;
-            case STEP_08 -> 0.8;
-        };
+        double share =
+                switch (comparison) {
+                    case MEASURED, SAME_FROUDE -> 1;
+                    case STEP_09 -> 0.9;
+                    case STEP_08 -> 0.8;
+                };
         double stepLength = step.stepLength() * ratio * share;
         double speed = step.speedBefore() * Math.sqrt(ratio);
         OptionalDouble work = OptionalDouble.empty();

@@ -23,8 +23,7 @@ public final class Crossover {
      * @return D/L; empty where the foot is always cheaper within reach
      * @throws LimitException SEGMENT_COUNT, or NO_SOLUTION without segments
      */
-    public static OptionalDouble equalVaults(WorkForm form, double segments, double seriesShare)
-            throws LimitException {
+    public static OptionalDouble equalVaults(WorkForm form, double segments, double seriesShare) throws LimitException {
         int n = VaultingStep.count(segments);
         if (n == 0) {
             throw new LimitException(Limit.NO_SOLUTION, "0 foot segments are the compass itself and never cross it");
@@ -33,11 +32,12 @@ public final class Crossover {
             return OptionalDouble.empty();
         }
         return switch (form) {
-            case SIMULTANEOUS, NO_PUSH_SMALL_ANGLE, PUSH_OFF_SMALL_ANGLE -> OptionalDouble.of(
-                    smallAngle(n) / seriesShare);
-            case PUSH_OFF -> seriesShare == 1
-                    ? OptionalDouble.of((n + 1) * (4 - 2 * Math.sqrt(3.0 / (n + 1))) / (4.0 * n + 1))
-                    : numerical(form, n, seriesShare);
+            case SIMULTANEOUS, NO_PUSH_SMALL_ANGLE, PUSH_OFF_SMALL_ANGLE ->
+                OptionalDouble.of(smallAngle(n) / seriesShare);
+            case PUSH_OFF ->
+                seriesShare == 1
+                        ? OptionalDouble.of((n + 1) * (4 - 2 * Math.sqrt(3.0 / (n + 1))) / (4.0 * n + 1))
+                        : numerical(form, n, seriesShare);
             case NO_PUSH -> numerical(form, n, seriesShare);
         };
     }

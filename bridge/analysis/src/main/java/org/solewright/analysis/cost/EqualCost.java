@@ -58,8 +58,8 @@ public final class EqualCost {
                 d -> OptimumFoot.of(form, segments, d, limbLength, seriesShare), form, segments, limbLength, factor);
     }
 
-    private static VaultingStep shortest(
-            Steps steps, WorkForm form, double segments, double limbLength, double factor) throws LimitException {
+    private static VaultingStep shortest(Steps steps, WorkForm form, double segments, double limbLength, double factor)
+            throws LimitException {
         VaultingStep.checkLimb(limbLength);
         VaultingStep.count(segments);
         if (!(factor > 0) || Double.isInfinite(factor)) {
@@ -78,8 +78,7 @@ public final class EqualCost {
             }
             if (found >= factor) {
                 double low = below;
-                double root = Root.inBracket(
-                        d -> d == 0 ? -factor : factorAt(steps, form, d) - factor, low, length);
+                double root = Root.inBracket(d -> d == 0 ? -factor : factorAt(steps, form, d) - factor, low, length);
                 return steps.at(root);
             }
             below = length;
@@ -150,7 +149,10 @@ public final class EqualCost {
      * @return foot length, m
      */
     public static double footOfCompassCost(int segments, double stepLength, double limbLength) {
-        return 2 * stepLength * limbLength * (limbLength - stepLength)
+        return 2
+                * stepLength
+                * limbLength
+                * (limbLength - stepLength)
                 / (limbLength * limbLength * (segments + 1) / segments - stepLength * stepLength);
     }
 }

@@ -27,8 +27,7 @@ public record FootCrossover(OptionalDouble low, OptionalDouble high) {
      * @param referenceRadius r, length of the limb without foot, m, above 0
      * @return the crossovers that both limbs reach
      */
-    public static FootCrossover simultaneous(
-            int segments, double footLength, double radius, double referenceRadius) {
+    public static FootCrossover simultaneous(int segments, double footLength, double radius, double referenceRadius) {
         double b = 1 - radius / referenceRadius * (radius / referenceRadius);
         double share = 1 + 1.0 / segments;
         double discriminant = 1 - b * share;

@@ -48,13 +48,7 @@ public final class Landscape {
      * @return rows by segments, rule, step and form; a finding says how many have no value and why
      */
     public static Found<List<LandscapeRow>> of(
-            double leg,
-            double foot,
-            double seriesShare,
-            double mass,
-            double gravity,
-            double speed,
-            double[] steps) {
+            double leg, double foot, double seriesShare, double mass, double gravity, double speed, double[] steps) {
         Landscape landscape = new Landscape(leg, foot, seriesShare, mass, gravity, speed);
         List<LandscapeRow> rows = new ArrayList<>();
         for (int segments = 0; segments <= Posture.MOST_SEGMENTS; segments++) {
@@ -66,20 +60,14 @@ public final class Landscape {
                 for (double step : steps) {
                     for (WorkForm form : WorkForm.values()) {
                         rows.add(landscape.row(
-                                segments,
-                                rule,
-                                step,
-                                form,
-                                crossovers.getOrDefault(form, OptionalDouble.empty())));
+                                segments, rule, step, form, crossovers.getOrDefault(form, OptionalDouble.empty())));
                     }
                 }
             }
         }
         List<Finding> findings = new ArrayList<>();
         landscape.refused.forEach((limit, count) -> findings.add(Finding.note(
-                "postures.out-of-reach",
-                "",
-                count + " of " + rows.size() + " rows have no work: " + limit)));
+                "postures.out-of-reach", "", count + " of " + rows.size() + " rows have no work: " + limit)));
         return new Found<>(rows, findings);
     }
 
@@ -88,11 +76,13 @@ public final class Landscape {
         OptionalDouble work = OptionalDouble.empty();
         OptionalDouble cost = OptionalDouble.empty();
         try {
-            VaultingStep step = switch (rule) {
-                case GIVEN -> VaultingStep.given(segments, stepLength, leg, segments == 0 ? 0 : foot, seriesShare);
-                case EQUAL -> VaultingStep.equalVaults(segments, stepLength, leg, seriesShare);
-                case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, leg, seriesShare);
-            };
+            VaultingStep step =
+                    switch (rule) {
+                        case GIVEN ->
+                            VaultingStep.given(segments, stepLength, leg, segments == 0 ? 0 : foot, seriesShare);
+                        case EQUAL -> VaultingStep.equalVaults(segments, stepLength, leg, seriesShare);
+                        case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, leg, seriesShare);
+                    };
             length = OptionalDouble.of(step.footLength());
             double joules = step.factor(form) * mass * speed * speed / 2;
             work = OptionalDouble.of(joules);
@@ -111,11 +101,12 @@ public final class Landscape {
             return OptionalDouble.empty();
         }
         double reach = TransitionWork.reach(form) * leg;
-        OptionalDouble found = switch (rule) {
-            case GIVEN -> given(segments, form);
-            case EQUAL -> equalVaults(segments, form);
-            case OPTIMUM -> scaled(Crossover.optimumFoot(seriesShare));
-        };
+        OptionalDouble found =
+                switch (rule) {
+                    case GIVEN -> given(segments, form);
+                    case EQUAL -> equalVaults(segments, form);
+                    case OPTIMUM -> scaled(Crossover.optimumFoot(seriesShare));
+                };
         return found.isPresent() && found.getAsDouble() < reach ? found : OptionalDouble.empty();
     }
 

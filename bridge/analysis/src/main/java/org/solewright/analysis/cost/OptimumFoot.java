@@ -65,8 +65,7 @@ public final class OptimumFoot {
     public static double smallAngle(int segments, double stepLength, double limbLength, double seriesShare) {
         double left = limbLength - seriesShare * stepLength;
         return left > 0
-                ? segments * stepLength * left
-                        / ((segments + 1) * limbLength - seriesShare * segments * stepLength)
+                ? segments * stepLength * left / ((segments + 1) * limbLength - seriesShare * segments * stepLength)
                 : 0;
     }
 

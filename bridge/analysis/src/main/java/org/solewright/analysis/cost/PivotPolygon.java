@@ -52,8 +52,7 @@ public final class PivotPolygon {
         if (!(foot < stepLength)) {
             throw new LimitException(
                     Limit.STEP_NOT_LONGER_THAN_FOOT,
-                    VaultingStep.text(
-                            "step length %s m, expected more than the foot length %s m", stepLength, foot));
+                    VaultingStep.text("step length %s m, expected more than the foot length %s m", stepLength, foot));
         }
         spacing[count - 1] = stepLength - foot;
         for (int i = 0; i < count; i++) {
@@ -134,10 +133,7 @@ public final class PivotPolygon {
         double s = spacing[transition];
         double a = radius[transition];
         double b = radius[transition + 1];
-        return 2
-                * Math.atan2(
-                        Math.sqrt((s - a + b) * (s + a - b)),
-                        Math.sqrt((a + b - s) * (a + b + s)));
+        return 2 * Math.atan2(Math.sqrt((s - a + b) * (s + a - b)), Math.sqrt((a + b - s) * (a + b + s)));
     }
 
     /**

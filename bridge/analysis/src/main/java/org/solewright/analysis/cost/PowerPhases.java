@@ -43,7 +43,9 @@ final class PowerPhases {
             for (int i = 0; i < runs.size(); i++) {
                 Run r = runs.get(i);
                 boolean isSmall = Math.abs(r.work()) < SMALL_WORK * total || r.duration() < shortest;
-                if (isSmall && (least < 0 || Math.abs(r.work()) < Math.abs(runs.get(least).work()))) {
+                if (isSmall
+                        && (least < 0
+                                || Math.abs(r.work()) < Math.abs(runs.get(least).work()))) {
                     least = i;
                 }
             }

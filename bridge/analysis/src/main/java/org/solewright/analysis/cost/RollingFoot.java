@@ -67,8 +67,8 @@ public record RollingFoot(
      * @return the foot at contact
      * @throws LimitException NONPOSITIVE_RADIUS, NONPOSITIVE_STEP, ARC_RADIUS, STEP_OUT_OF_REACH
      */
-    public static RollingFoot shortArc(
-            double stepLength, double limbLength, double arcRadius, double arcHalfAngle) throws LimitException {
+    public static RollingFoot shortArc(double stepLength, double limbLength, double arcRadius, double arcHalfAngle)
+            throws LimitException {
         check(stepLength, limbLength, arcRadius);
         if (!(arcHalfAngle >= 0)) {
             throw new LimitException(
@@ -103,8 +103,7 @@ public record RollingFoot(
         if (!(arcRadius >= 0 && arcRadius <= limbLength)) {
             throw new LimitException(
                     Limit.ARC_RADIUS,
-                    VaultingStep.text(
-                            "arc radius %s m, expected 0 m to the limb length %s m", arcRadius, limbLength));
+                    VaultingStep.text("arc radius %s m, expected 0 m to the limb length %s m", arcRadius, limbLength));
         }
     }
 
@@ -117,8 +116,7 @@ public record RollingFoot(
         if (arcRadius == 0) {
             return Math.asin(stepLength / (2 * limbLength));
         }
-        return Root.inBracket(
-                a -> 2 * arcRadius * a + 2 * arm * Math.sin(a) - stepLength, 0, Math.PI / 2);
+        return Root.inBracket(a -> 2 * arcRadius * a + 2 * arm * Math.sin(a) - stepLength, 0, Math.PI / 2);
     }
 
     private static double slope(double lean, double limbLength, double arcRadius) {
@@ -250,9 +248,6 @@ public record RollingFoot(
     public static double equivalentRatioSmallAngle(VaultingStep step) {
         double last = step.stepLength() - step.footLength();
         double inner = step.segments() > 0 ? step.footLength() * step.footLength() / step.segments() : 0;
-        return 1
-                - step.limbLength()
-                        / (step.stepLength() * step.radius())
-                        * Math.sqrt(inner + last * last);
+        return 1 - step.limbLength() / (step.stepLength() * step.radius()) * Math.sqrt(inner + last * last);
     }
 }

@@ -92,8 +92,10 @@ public record StepMechanics(
         double net = values.getOrDefault(Measure.COMBINED_POSITIVE, Double.NaN)
                 + values.getOrDefault(Measure.COMBINED_NEGATIVE, Double.NaN);
         double perMass = net / values.getOrDefault(Measure.MASS, Double.NaN);
-        double slowest = step.neighbourSpeeds().stream().mapToDouble(v -> v).min().orElse(Double.NaN);
-        double fastest = step.neighbourSpeeds().stream().mapToDouble(v -> v).max().orElse(Double.NaN);
+        double slowest =
+                step.neighbourSpeeds().stream().mapToDouble(v -> v).min().orElse(Double.NaN);
+        double fastest =
+                step.neighbourSpeeds().stream().mapToDouble(v -> v).max().orElse(Double.NaN);
         double change = fastest / slowest - 1;
         if (Math.abs(perMass) >= STEADY_WORK || change > STEADY_SPEED) {
             findings.add(Finding.warning(
@@ -150,7 +152,8 @@ public record StepMechanics(
             return;
         }
         double from = Math.max(loads.trailing().start(), loads.knownFrom());
-        List<PowerPhases.Run> runs = PowerPhases.runs(power, from, loads.trailing().end(), loads.shortestPhase());
+        List<PowerPhases.Run> runs =
+                PowerPhases.runs(power, from, loads.trailing().end(), loads.shortestPhase());
         int last = runs.size() - 1;
         while (last >= 0 && !runs.get(last).isPositive()) {
             last--;
@@ -188,7 +191,8 @@ public record StepMechanics(
                 continue;
             }
             int i = first + k;
-            if (i >= runs.size() || (i == runs.size() - 1 && to < loads.leading().end())) {
+            if (i >= runs.size()
+                    || (i == runs.size() - 1 && to < loads.leading().end())) {
                 findings.add(runsOut(where, uses[k].word()));
                 continue;
             }
@@ -206,7 +210,8 @@ public record StepMechanics(
     }
 
     private static void collision(StepLoads loads, CentreOfMassMotion motion, Map<Measure, Double> values) {
-        int intervals = (int) Math.round((motion.to() - motion.from()) * loads.totalForce().up().rate());
+        int intervals = (int) Math.round(
+                (motion.to() - motion.from()) * loads.totalForce().up().rate());
         Series[] force = loads.totalForce().components();
         double step = (motion.to() - motion.from()) / intervals;
         double[] f = new double[3 * (intervals + 1)];
@@ -230,9 +235,14 @@ public record StepMechanics(
     private static Map<Measure, Double> spread(
             StepLoads loads, CentreOfMassMotion motion, Map<Measure, Double> values) {
         Measure[] works = {
-            Measure.PUSH_OFF, Measure.COLLISION, Measure.REBOUND, Measure.PRELOAD,
-            Measure.PUSH_OFF_DOUBLE_SUPPORT, Measure.COLLISION_DOUBLE_SUPPORT,
-            Measure.COMBINED_POSITIVE, Measure.COMBINED_NEGATIVE
+            Measure.PUSH_OFF,
+            Measure.COLLISION,
+            Measure.REBOUND,
+            Measure.PRELOAD,
+            Measure.PUSH_OFF_DOUBLE_SUPPORT,
+            Measure.COLLISION_DOUBLE_SUPPORT,
+            Measure.COMBINED_POSITIVE,
+            Measure.COMBINED_NEGATIVE
         };
         double[] sum = new double[works.length];
         double[] sum2 = new double[works.length];
@@ -258,8 +268,7 @@ public record StepMechanics(
         for (int k = 0; k < works.length; k++) {
             if (values.containsKey(works[k]) && count[k] > DRAWS / 2) {
                 double mean = sum[k] / count[k];
-                deviations.put(
-                        works[k], Math.sqrt(Math.max(0, sum2[k] - count[k] * mean * mean) / (count[k] - 1)));
+                deviations.put(works[k], Math.sqrt(Math.max(0, sum2[k] - count[k] * mean * mean) / (count[k] - 1)));
             }
         }
         deviations.put(Measure.MASS, MASS_DOUBT * motion.mass());

@@ -19,8 +19,7 @@ public final class VaultingStep {
     private final double footLength;
     private final double seriesShare;
 
-    private VaultingStep(
-            int segments, double stepLength, double limbLength, double footLength, double seriesShare) {
+    private VaultingStep(int segments, double stepLength, double limbLength, double footLength, double seriesShare) {
         this.segments = segments;
         this.stepLength = stepLength;
         this.limbLength = limbLength;
@@ -47,19 +46,18 @@ public final class VaultingStep {
         if (!(radius > 0)) {
             throw new LimitException(
                     Limit.NONPOSITIVE_RADIUS,
-                    text("vault radius %s m = limb %s m - %s x foot %s m, expected more than 0 m", radius, limbLength,
-                            seriesShare, footLength));
+                    text(
+                            "vault radius %s m = limb %s m - %s x foot %s m, expected more than 0 m",
+                            radius, limbLength, seriesShare, footLength));
         }
         int count = count(segments);
         checkStep(stepLength);
         if (count == 0 && footLength != 0) {
             throw new LimitException(
-                    Limit.FOOT_WITHOUT_SEGMENTS,
-                    text("foot length %s m with 0 segments, expected 0 m", footLength));
+                    Limit.FOOT_WITHOUT_SEGMENTS, text("foot length %s m with 0 segments, expected 0 m", footLength));
         }
         if (footLength < 0) {
-            throw new LimitException(
-                    Limit.NEGATIVE_FOOT, text("foot length %s m, expected 0 m or more", footLength));
+            throw new LimitException(Limit.NEGATIVE_FOOT, text("foot length %s m, expected 0 m or more", footLength));
         }
         if (footLength >= stepLength) {
             throw new LimitException(
@@ -86,8 +84,8 @@ public final class VaultingStep {
      * @return the step
      * @throws LimitException as {@link #given}
      */
-    public static VaultingStep equalVaults(
-            double segments, double stepLength, double limbLength, double seriesShare) throws LimitException {
+    public static VaultingStep equalVaults(double segments, double stepLength, double limbLength, double seriesShare)
+            throws LimitException {
         checkLimb(limbLength);
         int count = count(segments);
         checkStep(stepLength);
@@ -215,7 +213,8 @@ public final class VaultingStep {
         if (form == WorkForm.NO_PUSH && widest >= TransitionWork.reach(form) * radius()) {
             throw new LimitException(
                     Limit.REVERSES_AT_TRANSITION,
-                    text("pivots %s m apart, expected less than sqrt 2 times the vault radius %s m without a push",
+                    text(
+                            "pivots %s m apart, expected less than sqrt 2 times the vault radius %s m without a push",
                             widest, radius()));
         }
         return unchecked(form, segments, stepLength, footLength, radius());

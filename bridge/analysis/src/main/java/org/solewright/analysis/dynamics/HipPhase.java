@@ -150,10 +150,9 @@ sealed interface HipPhase {
         }
 
         private static Quintic quintic(double duration, double[] start, double[] end, int axis) {
-            return new Quintic(
-                    duration,
-                    new double[] {start[axis], start[axis + VX], start[axis + AX]},
-                    new double[] {end[axis], end[axis + VX], end[axis + AX]});
+            return new Quintic(duration, new double[] {start[axis], start[axis + VX], start[axis + AX]}, new double[] {
+                end[axis], end[axis + VX], end[axis + AX]
+            });
         }
 
         @Override

@@ -68,8 +68,7 @@ final class LimbPose {
         double z = s[Z];
         double length = Math.hypot(x, z);
         double lengthRate = (x * s[VX] + z * s[VZ]) / length;
-        double lengthBend =
-                (s[VX] * s[VX] + s[VZ] * s[VZ] + x * s[AX] + z * s[AZ] - lengthRate * lengthRate) / length;
+        double lengthBend = (s[VX] * s[VX] + s[VZ] * s[VZ] + x * s[AX] + z * s[AZ] - lengthRate * lengthRate) / length;
         double angle = walk.pivotAngle(pivot);
         double px = walk.radius() * Math.sin(angle);
         double pz = -walk.radius() * Math.cos(angle);
@@ -77,8 +76,7 @@ final class LimbPose {
         double root = Math.sqrt(b * b + length * length - walk.radius() * walk.radius());
         extension[0] = root - b;
         extension[1] = length * lengthRate / root;
-        extension[2] =
-                (lengthRate * lengthRate + length * lengthBend - extension[1] * extension[1]) / root;
+        extension[2] = (lengthRate * lengthRate + length * lengthBend - extension[1] * extension[1]) / root;
         double vx = px + extension[0] * axisX;
         double vz = pz + extension[0] * axisZ;
         double cross = -axisX * vz + vx * axisZ;

@@ -42,14 +42,14 @@ public final class SyntheticWalk {
         double inner = p.innerSpacing();
         double last = p.stepLength() - p.footLength();
         if (!(radius > 0) || !(inner < 2 * radius) || !(last > 0) || !(last < 2 * radius)) {
-            throw new IllegalArgumentException("walk with vault radius " + radius + " m, pivots " + inner + " and " + last
-                    + " m apart, expected more than 0 m and less than two radii");
+            throw new IllegalArgumentException("walk with vault radius " + radius + " m, pivots " + inner + " and "
+                    + last + " m apart, expected more than 0 m and less than two radii");
         }
         this.innerLean = Math.asin(inner / (2 * radius));
         this.stepLean = p.stepLean();
         if (!(topRateSquared() > 0)) {
-            throw new IllegalArgumentException("walk with " + p.referenceSpeed() + " m/s at the step does not pass the top"
-                    + " of a vault of " + radius + " m");
+            throw new IllegalArgumentException("walk with " + p.referenceSpeed()
+                    + " m/s at the step does not pass the top" + " of a vault of " + radius + " m");
         }
         build(inner, last);
         this.starts = new double[phases.size() + 1];

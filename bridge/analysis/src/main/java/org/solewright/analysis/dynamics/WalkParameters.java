@@ -96,15 +96,13 @@ public record WalkParameters(
 
     private static void check(String name, double value, String unit) {
         if (!(value > 0) || Double.isInfinite(value)) {
-            throw new IllegalArgumentException(
-                    name + " " + value + " " + unit + ", expected more than 0 " + unit);
+            throw new IllegalArgumentException(name + " " + value + " " + unit + ", expected more than 0 " + unit);
         }
     }
 
     private static void checkShare(String name, double share) {
         if (!(share > 0 && share <= 1)) {
-            throw new IllegalArgumentException(
-                    name + " share " + share + ", expected more than 0 and no more than 1");
+            throw new IllegalArgumentException(name + " share " + share + ", expected more than 0 and no more than 1");
         }
     }
 }

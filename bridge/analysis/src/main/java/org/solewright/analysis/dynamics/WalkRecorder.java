@@ -116,10 +116,9 @@ public final class WalkRecorder {
             }
             tracks.add(PointTrack.of(point.label(), xyz));
         }
-        List<PlatformLoads> platforms = List.of(
-                platform(1, FIRST_ON_PLATFORM, frames), platform(2, FIRST_ON_PLATFORM + 1, frames));
-        return new Recording(
-                settings.name(), settings.pointRate(), 1, frames, tracks, platforms, List.of(), List.of());
+        List<PlatformLoads> platforms =
+                List.of(platform(1, FIRST_ON_PLATFORM, frames), platform(2, FIRST_ON_PLATFORM + 1, frames));
+        return new Recording(settings.name(), settings.pointRate(), 1, frames, tracks, platforms, List.of(), List.of());
     }
 
     /**

@@ -124,8 +124,8 @@ public final class AlgebraicFit {
         constraint.setEntry(0, last, -0.5);
         constraint.setEntry(last, 0, -0.5);
         RealMatrix product = root.multiply(constraint).multiply(root);
-        EigenDecomposition eigen = new EigenDecomposition(
-                product.add(product.transpose()).scalarMultiply(0.5));
+        EigenDecomposition eigen =
+                new EigenDecomposition(product.add(product.transpose()).scalarMultiply(0.5));
         int chosen = -1;
         for (int i = 0; i < columns; i++) {
             double value = eigen.getRealEigenvalue(i);
@@ -136,7 +136,8 @@ public final class AlgebraicFit {
         if (chosen < 0) {
             return Optional.empty();
         }
-        return c.sphere(power(singular, columns, -1).operate(eigen.getEigenvector(chosen).toArray()));
+        return c.sphere(power(singular, columns, -1)
+                .operate(eigen.getEigenvector(chosen).toArray()));
     }
 
     /**

@@ -143,8 +143,7 @@ public final class ArcFit {
                     }
 
                     @Override
-                    public void derivatives(
-                            double[] at, double[] gradient, double[] gaussNewton, double[] curvature) {
+                    public void derivatives(double[] at, double[] gradient, double[] gaussNewton, double[] curvature) {
                         ArcFit.this.derivatives(at, gradient, gaussNewton);
                     }
                 },

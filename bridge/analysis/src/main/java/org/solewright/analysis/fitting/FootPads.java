@@ -84,8 +84,8 @@ final class FootPads {
         pads.add(pad("metatarsal_5", front, onFloor(fifthPad.x(), fifthPad.z(), radius), frontOrigin));
         pads.add(pad("metatarsal_1", front, onFloor(firstPad.x(), firstPad.z(), radius), frontOrigin));
         Optional<Vec3> tip = limb.point(Landmark.HALLUX_TIP).or(() -> limb.point(Landmark.TOE_TIP));
-        tip.ifPresent(t -> pads.add(
-                pad("hallux", toes, onFloor(t.x() - markerRadius - radius, t.z(), radius), toesOrigin)));
+        tip.ifPresent(t ->
+                pads.add(pad("hallux", toes, onFloor(t.x() - markerRadius - radius, t.z(), radius), toesOrigin)));
         return List.copyOf(pads);
     }
 
@@ -96,7 +96,6 @@ final class FootPads {
     private Pad pad(String name, SegmentName segment, Vec3 centre_A, Vec3 origin_A) {
         double radius = centre_A.y() - floorHeight;
         double stiffness = heelStiffness * Math.sqrt(radius / (HEEL_RADIUS * footLength));
-        return new Pad(
-                name, segment, centre_A.minus(origin_A), radius, stiffness, DAMPING, FRICTION, Basis.ASSUMED);
+        return new Pad(name, segment, centre_A.minus(origin_A), radius, stiffness, DAMPING, FRICTION, Basis.ASSUMED);
     }
 }

@@ -109,7 +109,12 @@ record FootSplit(List<BodyMoments> parts, double smallestStretch, double largest
     }
 
     private static void add(
-            List<TetrahedralSolid.Section> sections, double x, double floorHeight, double z, double height, double width) {
+            List<TetrahedralSolid.Section> sections,
+            double x,
+            double floorHeight,
+            double z,
+            double height,
+            double width) {
         if (sections.isEmpty() || x > sections.get(sections.size() - 1).x() + APART) {
             sections.add(new TetrahedralSolid.Section(x, floorHeight + height, z, height, width));
         }

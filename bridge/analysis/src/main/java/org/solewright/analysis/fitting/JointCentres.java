@@ -51,8 +51,8 @@ record JointCentres(Located hip, Located knee, HipSource hipSource) {
         }
         Optional<Vec3> trochanter = limb.point(Landmark.TROCHANTER_MAJOR);
         if (trochanter.isPresent()) {
-            Located hip = new Located(
-                    trochanter.get(), Basis.ASSUMED, OptionalDouble.of(LimbGeometry.LEG_PLACEMENT_SD));
+            Located hip =
+                    new Located(trochanter.get(), Basis.ASSUMED, OptionalDouble.of(LimbGeometry.LEG_PLACEMENT_SD));
             return Optional.of(new JointCentres(hip, knee(limb, hip), HipSource.TROCHANTER));
         }
         if (!settings.isHuman()) {

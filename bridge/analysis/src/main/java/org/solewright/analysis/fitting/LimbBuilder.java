@@ -47,7 +47,8 @@ final class LimbBuilder {
         this.plan = plan;
         this.floorHeight = floorHeight;
         knee = centres.knee();
-        toeTip = limb.toeTip(settings.adultRegression(), floorHeight, settings.markerRadius().value());
+        toeTip = limb.toeTip(
+                settings.adultRegression(), floorHeight, settings.markerRadius().value());
         midtarsal = limb.midtarsal(settings.adultRegression());
         origins.put(SegmentName.SHANK, knee.position());
         for (SegmentName name : plan.foot()) {
@@ -82,7 +83,8 @@ final class LimbBuilder {
      */
     Optional<List<Segment>> segments() {
         List<Segment> segments = new ArrayList<>();
-        segments.add(segment(SegmentName.SHANK, Optional.empty(), shank(), knee.position().norm()));
+        segments.add(segment(
+                SegmentName.SHANK, Optional.empty(), shank(), knee.position().norm()));
         BodyMoments whole = foot();
         List<BodyMoments> parts = List.of(whole);
         if (plan.foot().size() > 1) {
@@ -122,7 +124,9 @@ final class LimbBuilder {
                 bodySd.isPresent() ? OptionalDouble.of(share * bodySd.getAsDouble()) : OptionalDouble.empty();
         Basis lengthBasis = name == SegmentName.SHANK
                 ? knee.basis()
-                : name == plan.toes() ? toeTip.basis() : name == SegmentName.HINDFOOT ? midtarsal.basis() : Basis.MEASURED;
+                : name == plan.toes()
+                        ? toeTip.basis()
+                        : name == SegmentName.HINDFOOT ? midtarsal.basis() : Basis.MEASURED;
         return new Segment(
                 name,
                 parent,
@@ -149,10 +153,11 @@ final class LimbBuilder {
         SegmentInertia table = SegmentInertia.foot(settings.inertia(), settings.sex());
         return switch (settings.inertia()) {
             case DE_LEVA -> along(table, limb.required(Landmark.CALCANEUS_POSTERIOR), toeTip.position());
-            case DEMPSTER -> along(
-                    table,
-                    limb.required(Landmark.MALLEOLUS_LATERAL),
-                    limb.point(Landmark.METATARSAL_2_HEAD).orElseGet(limb::heads));
+            case DEMPSTER ->
+                along(
+                        table,
+                        limb.required(Landmark.MALLEOLUS_LATERAL),
+                        limb.point(Landmark.METATARSAL_2_HEAD).orElseGet(limb::heads));
         };
     }
 
@@ -161,7 +166,8 @@ final class LimbBuilder {
         Vec3 line = to.minus(from);
         double mass = table.mass() * settings.mass().value();
         InertiaTensor own = table.tensor(mass, line.norm());
-        return new BodyMoments(mass, from.plus(line.times(table.centre())), own.rotated(Rotation.ofXandZ(line, Vec3.Z)));
+        return new BodyMoments(
+                mass, from.plus(line.times(table.centre())), own.rotated(Rotation.ofXandZ(line, Vec3.Z)));
     }
 
     private List<FootSplit.Plane> planes() {
@@ -241,9 +247,7 @@ final class LimbBuilder {
                     Optional.empty());
         }
         boolean right = limb.side() == Side.RIGHT;
-        Vec3 direction = right
-                ? SUBTALAR_RIGHT
-                : new Vec3(SUBTALAR_RIGHT.x(), SUBTALAR_RIGHT.y(), -SUBTALAR_RIGHT.z());
+        Vec3 direction = right ? SUBTALAR_RIGHT : new Vec3(SUBTALAR_RIGHT.x(), SUBTALAR_RIGHT.y(), -SUBTALAR_RIGHT.z());
         Joint.Axis subtalar =
                 new Joint.Axis("subtalar", direction, settings.adultRegression(), OptionalDouble.of(SUBTALAR_SD));
         return new Joint(
@@ -281,13 +285,12 @@ final class LimbBuilder {
             if (SegmentPlan.carries(landmark)) {
                 SegmentName carrier = plan.carrier(landmark);
                 limb.point(landmark)
-                        .ifPresent(p -> out.add(new LandmarkPosition(
-                                landmark.word(), carrier, p.minus(origin(carrier)))));
+                        .ifPresent(
+                                p -> out.add(new LandmarkPosition(landmark.word(), carrier, p.minus(origin(carrier)))));
                 List<Vec3> cluster = posture.cluster(landmark, limb.side());
                 for (int i = 0; i < cluster.size(); i++) {
                     Vec3 p = limb.ankleFrame().inversePosition(cluster.get(i));
-                    out.add(new LandmarkPosition(
-                            landmark.word() + "." + (i + 1), carrier, p.minus(origin(carrier))));
+                    out.add(new LandmarkPosition(landmark.word() + "." + (i + 1), carrier, p.minus(origin(carrier))));
                 }
             }
         }

@@ -24,8 +24,7 @@ public final class PathFit {
      * @return one weight per sample, N
      * @throws IllegalArgumentException where the counts differ or a step or speed is not above 0
      */
-    public static double[] dwellWeights(
-            double[] x, double[] y, double[] vertical, double timeStep, double dwellSpeed) {
+    public static double[] dwellWeights(double[] x, double[] y, double[] vertical, double timeStep, double dwellSpeed) {
         if (x.length != y.length || x.length != vertical.length || !(timeStep > 0) || !(dwellSpeed > 0)) {
             throw new IllegalArgumentException("path of " + x.length + " x, " + y.length + " y, " + vertical.length
                     + " forces, time step " + timeStep + " s, dwell speed " + dwellSpeed
@@ -94,8 +93,8 @@ public final class PathFit {
     public static FittedPath polyline(double[] x, double[] y, double[] weights, int segments) {
         check(x, y, weights);
         if (segments < 1 || x.length < segments + 1) {
-            throw new IllegalArgumentException("path of " + x.length + " samples in " + segments
-                    + " segments, expected 1 to " + (x.length - 1));
+            throw new IllegalArgumentException(
+                    "path of " + x.length + " samples in " + segments + " segments, expected 1 to " + (x.length - 1));
         }
         int n = x.length;
         double[] table = new double[n * n];

@@ -138,7 +138,8 @@ public record RigidFit(Pose pose, int points, double rms, double shapeChange) {
         RealMatrix u = svd.getU();
         RealMatrix vt = svd.getVT();
         double det = new LUDecomposition(u.multiply(vt)).getDeterminant() < 0 ? -1 : 1;
-        RealMatrix r = u.multiply(MatrixUtils.createRealDiagonalMatrix(new double[] {1, 1, det})).multiply(vt);
+        RealMatrix r = u.multiply(MatrixUtils.createRealDiagonalMatrix(new double[] {1, 1, det}))
+                .multiply(vt);
         return Optional.of(new Rotation(column(r, 0), column(r, 1), column(r, 2)));
     }
 
@@ -175,7 +176,8 @@ public record RigidFit(Pose pose, int points, double rms, double shapeChange) {
         for (int i = 0; i < used.length; i++) {
             for (int j = i + 1; j < used.length; j++) {
                 if (used[i] > 0 && used[j] > 0) {
-                    double change = point(b, i).distance(point(b, j)) - point(a, i).distance(point(a, j));
+                    double change =
+                            point(b, i).distance(point(b, j)) - point(a, i).distance(point(a, j));
                     sum += change * change;
                     pairs++;
                 }

@@ -69,8 +69,7 @@ public final class RollOver {
         Sample sample =
                 Sample.of(arcs.stream().mapToDouble(FittedArc::curvature).toArray());
         double curvature = sample.mean();
-        OptionalDouble sd =
-                arcs.size() == 1 ? blockSd(arcs.get(0), paths.get(0).rate()) : sample.sd();
+        OptionalDouble sd = arcs.size() == 1 ? blockSd(arcs.get(0), paths.get(0).rate()) : sample.sd();
         OptionalDouble radiusSd = sd.isPresent() && curvature != 0
                 ? OptionalDouble.of(sd.getAsDouble() / (curvature * curvature))
                 : OptionalDouble.empty();

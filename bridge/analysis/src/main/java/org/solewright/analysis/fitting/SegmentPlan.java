@@ -68,8 +68,7 @@ record SegmentPlan(List<SegmentName> foot) {
                     METATARSAL_2_HEAD,
                     METATARSAL_5_HEAD,
                     MIDFOOT_CLUSTER,
-                    FOREFOOT_CLUSTER ->
-                heads();
+                    FOREFOOT_CLUSTER -> heads();
             case HALLUX_TIP, TOE_TIP, TOES_CLUSTER -> toes();
             default -> SegmentName.SHANK;
         };

@@ -31,8 +31,7 @@ public final class SegmentTracking {
      */
     public static SegmentTracking of(List<Vec3> reference, List<double[]> tracks, int frames) {
         if (reference.size() != tracks.size()) {
-            throw new IllegalArgumentException(
-                    reference.size() + " reference points for " + tracks.size() + " tracks");
+            throw new IllegalArgumentException(reference.size() + " reference points for " + tracks.size() + " tracks");
         }
         double[] a = new double[3 * reference.size()];
         for (int k = 0; k < reference.size(); k++) {

@@ -18,8 +18,7 @@ public final class SphereFit {
     private final double[] cofactor;
     private final Outcome outcome;
 
-    private SphereFit(
-            FittedSphere sphere, double squares, int degreesOfFreedom, double[] cofactor, Outcome outcome) {
+    private SphereFit(FittedSphere sphere, double squares, int degreesOfFreedom, double[] cofactor, Outcome outcome) {
         this.sphere = sphere;
         this.squares = squares;
         this.degreesOfFreedom = degreesOfFreedom;
@@ -42,8 +41,9 @@ public final class SphereFit {
             loaded += w > 0 ? 1 : 0;
         }
         if (points.length != dimensions * weights.length || loaded < dimensions + 1) {
-            throw new IllegalArgumentException("sphere of " + dimensions + " dimensions through " + points.length
-                    + " coordinates, " + loaded + " weights above 0; expected at least " + (dimensions + 1) + " points");
+            throw new IllegalArgumentException(
+                    "sphere of " + dimensions + " dimensions through " + points.length + " coordinates, " + loaded
+                            + " weights above 0; expected at least " + (dimensions + 1) + " points");
         }
         int count = loaded;
         return AlgebraicFit.taubin(points, weights, dimensions).flatMap(start -> from(start, points, weights, count));

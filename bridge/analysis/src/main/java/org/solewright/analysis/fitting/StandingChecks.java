@@ -62,8 +62,7 @@ final class StandingChecks {
     }
 
     /** About missing landmarks of one side. */
-    static List<Finding> missing(
-            LimbGeometry limb, JointCentres centres, SegmentPlan plan, StandingSettings settings) {
+    static List<Finding> missing(LimbGeometry limb, JointCentres centres, SegmentPlan plan, StandingSettings settings) {
         List<Finding> findings = new ArrayList<>();
         String side = limb.side().word();
         if (limb.point(Landmark.FEMORAL_EPICONDYLE_MEDIAL).isEmpty()
@@ -78,14 +77,18 @@ final class StandingChecks {
             case PELVIS -> {
                 // the intended source
             }
-            case TROCHANTER -> findings.add(Finding.warning(
-                    "landmark.missing",
-                    side,
-                    side + " hip has no complete pelvis landmarks: the greater trochanter is taken as its centre"));
-            case PROPORTION -> findings.add(Finding.warning(
-                    "landmark.missing",
-                    side,
-                    side + " hip has neither pelvis landmarks nor trochanter: it is put above the ankle by proportion"));
+            case TROCHANTER ->
+                findings.add(Finding.warning(
+                        "landmark.missing",
+                        side,
+                        side + " hip has no complete pelvis landmarks: the greater trochanter is taken as its centre"));
+            case PROPORTION ->
+                findings.add(
+                        Finding.warning(
+                                "landmark.missing",
+                                side,
+                                side
+                                        + " hip has neither pelvis landmarks nor trochanter: it is put above the ankle by proportion"));
         }
         if (limb.toeLandmark().isEmpty() && settings.isHuman()) {
             findings.add(Finding.note(
@@ -110,8 +113,10 @@ final class StandingChecks {
         Vec3 lateral = limb.required(Landmark.MALLEOLUS_LATERAL);
         int outwards = limb.side() == Side.RIGHT ? 1 : -1;
         boolean inOrder = outwards * (lateral.z() - medial.z()) > 0;
-        Optional<Vec3> other = posture.position(Landmark.CALCANEUS_POSTERIOR, limb.side().opposite());
-        boolean ownSide = other.map(p -> outwards * limb.ankleFrame().inversePosition(p).z() < 0)
+        Optional<Vec3> other =
+                posture.position(Landmark.CALCANEUS_POSTERIOR, limb.side().opposite());
+        boolean ownSide = other.map(
+                        p -> outwards * limb.ankleFrame().inversePosition(p).z() < 0)
                 .orElse(true);
         if (inOrder && ownSide) {
             return Optional.empty();

@@ -43,7 +43,9 @@ public final class StandingModel {
         if (!missing.isEmpty()) {
             return new StandingOutcome.Refused(
                     "the standing trial has no "
-                            + String.join(", ", missing.stream().map(SidedLandmark::words).toList()),
+                            + String.join(
+                                    ", ",
+                                    missing.stream().map(SidedLandmark::words).toList()),
                     "record these landmarks in standing, or name their labels in the landmark map");
         }
         Optional<LimbGeometry> limb = LimbGeometry.of(posture, side);
@@ -64,7 +66,11 @@ public final class StandingModel {
     }
 
     private static StandingOutcome assemble(
-            StandingPosture posture, StandingSettings settings, LimbGeometry limb, Quantity floor, JointCentres centres) {
+            StandingPosture posture,
+            StandingSettings settings,
+            LimbGeometry limb,
+            Quantity floor,
+            JointCentres centres) {
         Side side = limb.side();
         double floorHeight = heightInAnkleFrame(posture, limb, floor);
         SegmentPlan plan = SegmentPlan.of(settings.segments().orElseGet(() -> SegmentPlan.most(limb)));
@@ -72,13 +78,15 @@ public final class StandingModel {
         Optional<List<Segment>> segments = builder.segments();
         if (segments.isEmpty()) {
             return new StandingOutcome.Refused(
-                    "the " + side.word() + " foot's landmarks do not leave room for " + plan.foot().size()
-                            + " segments",
+                    "the " + side.word() + " foot's landmarks do not leave room for "
+                            + plan.foot().size() + " segments",
                     "check the landmarks of toe, metatarsal heads and midfoot, or use --segments 1");
         }
         Optional<Quantity> footLength = footLength(limb, settings);
         Quantity limbLength = new Quantity(
-                centres.hip().position().y() - floorHeight, centres.hip().basis(), centres.hip().sd());
+                centres.hip().position().y() - floorHeight,
+                centres.hip().basis(),
+                centres.hip().sd());
         double scale = footLength.map(Quantity::value).orElse(limb.heelToFirstHead() / LimbGeometry.HEAD_SHARE);
         return new StandingOutcome.Built(new StandingLimb(
                 side,
@@ -150,8 +158,8 @@ public final class StandingModel {
         otherLimbLength(posture, settings, limb.side().opposite(), floor).ifPresent(other -> {
             boolean right = limb.side() == Side.RIGHT;
             double own = limbLength.value();
-            findings.addAll(StandingChecks.limbLengths(
-                    posture, right ? own : other, right ? other : own, floor.value()));
+            findings.addAll(
+                    StandingChecks.limbLengths(posture, right ? own : other, right ? other : own, floor.value()));
         });
         if (settings.isHuman()) {
             double ankleHeight = -heightInAnkleFrame(posture, limb, floor);
@@ -163,9 +171,7 @@ public final class StandingModel {
                             ankleHeight,
                             limbLength.value())));
         }
-        builder.split()
-                .flatMap(s -> StandingChecks.distorted(limb.side(), s))
-                .ifPresent(findings::add);
+        builder.split().flatMap(s -> StandingChecks.distorted(limb.side(), s)).ifPresent(findings::add);
         return findings;
     }
 

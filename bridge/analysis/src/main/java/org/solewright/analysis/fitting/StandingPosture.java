@@ -18,10 +18,7 @@ import org.solewright.domain.geometry.Vec3;
  * @param floor height of the floor along {@code up}, m; empty where no platform or option gives it
  */
 public record StandingPosture(
-        Map<SidedLandmark, Vec3> landmarks,
-        Map<SidedLandmark, List<Vec3>> clusters,
-        Vec3 up,
-        OptionalDouble floor) {
+        Map<SidedLandmark, Vec3> landmarks, Map<SidedLandmark, List<Vec3>> clusters, Vec3 up, OptionalDouble floor) {
 
     private static final double TOLERANCE = 1e-6;
 
@@ -70,6 +67,7 @@ public record StandingPosture(
      * @return position in L, m; empty where one of them was not recorded
      */
     Optional<Vec3> middle(Landmark a, Landmark b, Side side) {
-        return position(a, side).flatMap(p -> position(b, side).map(q -> p.plus(q).times(0.5)));
+        return position(a, side)
+                .flatMap(p -> position(b, side).map(q -> p.plus(q).times(0.5)));
     }
 }

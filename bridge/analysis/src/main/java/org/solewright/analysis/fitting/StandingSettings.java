@@ -44,8 +44,7 @@ public record StandingSettings(
             throw new IllegalArgumentException("marker radius " + markerRadius.value() + " m, expected 0 m or more");
         }
         if (segments.isPresent() && (segments.getAsInt() < 1 || segments.getAsInt() > MOST_SEGMENTS)) {
-            throw new IllegalArgumentException(
-                    segments.getAsInt() + " foot segments, expected 1 to " + MOST_SEGMENTS);
+            throw new IllegalArgumentException(segments.getAsInt() + " foot segments, expected 1 to " + MOST_SEGMENTS);
         }
     }
 

@@ -58,9 +58,7 @@ final class TetrahedralSolid {
         rim[0] = new double[] {s.x, s.y, s.z};
         for (int k = 0; k < SECTORS; k++) {
             rim[k + 1] = new double[] {
-                s.x,
-                s.y + sameArea * s.height * Math.cos(k * step),
-                s.z + sameArea * s.width * Math.sin(k * step)
+                s.x, s.y + sameArea * s.height * Math.cos(k * step), s.z + sameArea * s.width * Math.sin(k * step)
             };
         }
         return rim;
@@ -123,13 +121,7 @@ final class TetrahedralSolid {
         double[] c = inside[2];
         switch (in) {
             case 1 -> heap.tetrahedron(a, cut(a, outside[0]), cut(a, outside[1]), cut(a, outside[2]));
-            case 2 -> heap.prism(
-                    a,
-                    cut(a, outside[0]),
-                    cut(a, outside[1]),
-                    b,
-                    cut(b, outside[0]),
-                    cut(b, outside[1]));
+            case 2 -> heap.prism(a, cut(a, outside[0]), cut(a, outside[1]), b, cut(b, outside[0]), cut(b, outside[1]));
             case 3 -> heap.prism(a, b, c, cut(a, outside[0]), cut(b, outside[0]), cut(c, outside[0]));
             case 4 -> heap.tetrahedron(a, b, c, inside[3]);
             default -> {

@@ -25,7 +25,8 @@ final class ContactDetector {
      * @return N
      */
     static double threshold(PlatformLoads platform, double weight) {
-        double scaled = Double.isNaN(weight) ? FIRST_PASS_THRESHOLD : Math.min(FIRST_PASS_THRESHOLD, WEIGHT_SHARE * weight);
+        double scaled =
+                Double.isNaN(weight) ? FIRST_PASS_THRESHOLD : Math.min(FIRST_PASS_THRESHOLD, WEIGHT_SHARE * weight);
         return Math.max(scaled, NOISE_DEVIATIONS * noise(platform));
     }
 

@@ -71,7 +71,7 @@ public final class ContactReview {
                 "loads.foot-over-edge",
                 old.trial() + " platform " + old.platforms() + " " + old.side().word(),
                 why + "; not used for " + StanceFinder.words(excluded)));
-        return s.with(new Stance(
-                old.trial(), old.side(), old.platforms(), old.start(), old.end(), false, excluded, why));
+        return s.with(
+                new Stance(old.trial(), old.side(), old.platforms(), old.start(), old.end(), false, excluded, why));
     }
 }

@@ -25,8 +25,7 @@ final class ConvexOutline {
             int base = hull.size();
             for (int k = 0; k < sorted.size(); k++) {
                 Point p = sorted.get(side == 0 ? k : sorted.size() - 1 - k);
-                while (hull.size() >= base + 2
-                        && turn(hull.get(hull.size() - 2), hull.get(hull.size() - 1), p) <= 0) {
+                while (hull.size() >= base + 2 && turn(hull.get(hull.size() - 2), hull.get(hull.size() - 1), p) <= 0) {
                     hull.remove(hull.size() - 1);
                 }
                 hull.add(p);

@@ -51,9 +51,7 @@ public final class FootTracks {
      */
     FootTracks in(Rotation R_LW) {
         return new FootTracks(
-                turned(heel, R_LW),
-                heads.stream().map(h -> turned(h, R_LW)).toList(),
-                toe.map(t -> turned(t, R_LW)));
+                turned(heel, R_LW), heads.stream().map(h -> turned(h, R_LW)).toList(), toe.map(t -> turned(t, R_LW)));
     }
 
     static double[] turned(double[] p_L, Rotation R_LW) {
@@ -134,7 +132,8 @@ public final class FootTracks {
     }
 
     boolean isTracked(int frame) {
-        boolean tracked = !Double.isNaN(heel[3 * frame]) && toe.map(t -> !Double.isNaN(t[3 * frame])).orElse(true);
+        boolean tracked = !Double.isNaN(heel[3 * frame])
+                && toe.map(t -> !Double.isNaN(t[3 * frame])).orElse(true);
         for (double[] h : heads) {
             tracked &= !Double.isNaN(h[3 * frame]);
         }

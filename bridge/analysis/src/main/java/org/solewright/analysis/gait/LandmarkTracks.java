@@ -44,7 +44,8 @@ public final class LandmarkTracks {
      */
     public static LandmarkTracks of(Recording recording, LandmarkMap map, double cutoff, List<Finding> findings) {
         LandmarkTracks tracks = new LandmarkTracks(recording);
-        List<String> recorded = recording.points().stream().map(PointTrack::label).toList();
+        List<String> recorded =
+                recording.points().stream().map(PointTrack::label).toList();
         Optional<LowPass> filter = cutoff > 0 && recording.frames() > 1
                 ? Optional.of(LowPass.of(Math.min(cutoff, MOST_OF_RATE * recording.rate()), recording.rate()))
                 : Optional.empty();
@@ -100,7 +101,9 @@ public final class LandmarkTracks {
         int bridged = Gaps.bridge(xyz, 3, (int) Math.floor(LONGEST_GAP * recording.rate() + 1e-9));
         if (bridged > 0) {
             findings.add(Finding.note(
-                    "points.gap-bridged", recording.name() + " " + label, bridged + " samples were bridged by a spline"));
+                    "points.gap-bridged",
+                    recording.name() + " " + label,
+                    bridged + " samples were bridged by a spline"));
         }
         if (filter.isEmpty()) {
             return xyz;
@@ -181,7 +184,8 @@ public final class LandmarkTracks {
         for (Map.Entry<SidedLandmark, List<String>> e : labels.entrySet()) {
             int i = e.getValue().indexOf(label);
             if (i >= 0) {
-                return Optional.ofNullable(tracks.get(e.getKey())).map(t -> t.get(i).clone());
+                return Optional.ofNullable(tracks.get(e.getKey()))
+                        .map(t -> t.get(i).clone());
             }
         }
         return Optional.empty();
@@ -232,7 +236,9 @@ public final class LandmarkTracks {
                 parts.add(right.get());
             }
         }
-        track(Landmark.SACRUM, MIDLINE).or(() -> track(Landmark.SACRUM, Side.RIGHT)).ifPresent(parts::add);
+        track(Landmark.SACRUM, MIDLINE)
+                .or(() -> track(Landmark.SACRUM, Side.RIGHT))
+                .ifPresent(parts::add);
         if (parts.isEmpty()) {
             return Optional.empty();
         }
@@ -253,8 +259,7 @@ public final class LandmarkTracks {
      */
     public Optional<FootTracks> foot(Side side) {
         List<double[]> heads = new ArrayList<>();
-        for (Landmark l :
-                List.of(Landmark.METATARSAL_1_HEAD, Landmark.METATARSAL_2_HEAD, Landmark.METATARSAL_5_HEAD)) {
+        for (Landmark l : List.of(Landmark.METATARSAL_1_HEAD, Landmark.METATARSAL_2_HEAD, Landmark.METATARSAL_5_HEAD)) {
             track(l, side).ifPresent(heads::add);
         }
         Optional<double[]> toe = track(Landmark.TOE_TIP, side).or(() -> track(Landmark.HALLUX_TIP, side));

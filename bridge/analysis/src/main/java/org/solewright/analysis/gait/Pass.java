@@ -62,8 +62,7 @@ public final class Pass {
         stances.sort(Comparator.comparingDouble(s -> s.stance().start()));
         WalkingTrial.Track pelvis_W =
                 new WalkingTrial.Track(FootTracks.turned(trial.pelvis().samples(), R_LW));
-        return new Pass(
-                trial, R_LW, settings, pelvis_W, StanceFinder.joined(stances, findings), footfalls, findings);
+        return new Pass(trial, R_LW, settings, pelvis_W, StanceFinder.joined(stances, findings), footfalls, findings);
     }
 
     /**
@@ -196,7 +195,9 @@ public final class Pass {
             if (i + 1 < p.samples()) {
                 return Optional.of(new StanceLoad(
                         p.vertical(i) * (1 - f) + p.vertical(i + 1) * f,
-                        p.centreOfPressure(i).times(1 - f).plus(p.centreOfPressure(i + 1).times(f))));
+                        p.centreOfPressure(i)
+                                .times(1 - f)
+                                .plus(p.centreOfPressure(i + 1).times(f))));
             }
         }
         return Optional.empty();
@@ -220,7 +221,9 @@ public final class Pass {
         Side other = stance.side().opposite();
         double middle = stance.start() + 0.25 * stance.duration();
         for (PlatformStance s : stances) {
-            if (s.stance().side() == other && s.stance().start() > middle && s.stance().start() < stance.end() + 0.1) {
+            if (s.stance().side() == other
+                    && s.stance().start() > middle
+                    && s.stance().start() < stance.end() + 0.1) {
                 return Optional.of(s.stance().start());
             }
         }

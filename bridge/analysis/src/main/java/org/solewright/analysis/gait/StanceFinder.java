@@ -37,8 +37,8 @@ final class StanceFinder {
 
         Set<Use> excludes() {
             return switch (this) {
-                case REAR -> EnumSet.of(
-                        Use.CONTACT_ANGLE, Use.ROLL_OVER, Use.PIVOTS, Use.COLLISION, Use.REBOUND, Use.MASS);
+                case REAR ->
+                    EnumSet.of(Use.CONTACT_ANGLE, Use.ROLL_OVER, Use.PIVOTS, Use.COLLISION, Use.REBOUND, Use.MASS);
                 case FRONT -> EnumSet.of(Use.ROLL_OVER, Use.PIVOTS, Use.PRELOAD, Use.PUSH_OFF, Use.MASS);
                 case SIDE -> EnumSet.allOf(Use.class);
             };
@@ -69,8 +69,7 @@ final class StanceFinder {
             return found;
         }
         double threshold = ContactDetector.threshold(platform, settings.weight());
-        for (ContactDetector.Loaded loaded :
-                ContactDetector.detect(platform, threshold, settings.shortestContact())) {
+        for (ContactDetector.Loaded loaded : ContactDetector.detect(platform, threshold, settings.shortestContact())) {
             foot(platform, loaded)
                     .ifPresentOrElse(
                             side -> found.add(stance(platform, loaded, side)),
@@ -95,7 +94,9 @@ final class StanceFinder {
             int near = 0;
             int asked = 0;
             double sum = 0;
-            for (int i = firstSample(platform, loaded); i < platform.samples() && platform.time(i) <= loaded.end(); i++) {
+            for (int i = firstSample(platform, loaded);
+                    i < platform.samples() && platform.time(i) <= loaded.end();
+                    i++) {
                 int frame = trial.frame(platform.time(i));
                 if (!e.getValue().isTracked(frame)) {
                     continue;
@@ -132,7 +133,10 @@ final class StanceFinder {
         }
         String why = over.entrySet().stream()
                 .map(e -> String.format(
-                        Locale.ROOT, "foot over the %s border by %.0f mm", e.getKey().word(), 1000 * e.getValue()))
+                        Locale.ROOT,
+                        "foot over the %s border by %.0f mm",
+                        e.getKey().word(),
+                        1000 * e.getValue()))
                 .collect(Collectors.joining(", "));
         if (!over.isEmpty()) {
             findings.add(Finding.warning(
@@ -156,8 +160,7 @@ final class StanceFinder {
         double lowest = foot.isTracked(flat)
                 ? foot.lowest(flat) - R_LW.inverseVector(platform.centre()).y()
                 : Double.NaN;
-        return new PlatformStance(
-                stance, travel[0], travel[1], lowest, loaded.isStartSeen(), loaded.isEndSeen());
+        return new PlatformStance(stance, travel[0], travel[1], lowest, loaded.isStartSeen(), loaded.isEndSeen());
     }
 
     static String words(Set<Use> uses) {
@@ -218,7 +221,8 @@ final class StanceFinder {
         List<PlatformStance> out = new ArrayList<>();
         for (PlatformStance s : stances) {
             PlatformStance last = out.isEmpty() ? null : out.get(out.size() - 1);
-            if (last != null && last.stance().side() == s.stance().side()
+            if (last != null
+                    && last.stance().side() == s.stance().side()
                     && s.stance().start() < last.stance().end()) {
                 out.set(out.size() - 1, join(last, s, findings));
             } else {

@@ -13,7 +13,8 @@ import java.util.List;
  * @param neighbourSpeeds mean forward pelvis speed of the steps before, at and after this one, contact to contact, m/s;
  *     those in view
  */
-public record Step(int number, StepLoads loads, double length, double width, double time, List<Double> neighbourSpeeds) {
+public record Step(
+        int number, StepLoads loads, double length, double width, double time, List<Double> neighbourSpeeds) {
 
     /** Copies the list. */
     public Step {

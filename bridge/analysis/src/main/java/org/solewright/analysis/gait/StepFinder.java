@@ -79,7 +79,10 @@ public final class StepFinder {
         double knownTo = knownTo(middle);
         if (trailing.end() < leading.start()) {
             findings.add(Finding.warning(
-                    "gait.flight", where, String.format(Locale.ROOT,
+                    "gait.flight",
+                    where,
+                    String.format(
+                            Locale.ROOT,
                             "no double support: the feet are both off the ground for %.3f s",
                             leading.start() - trailing.end())));
         }
@@ -88,16 +91,23 @@ public final class StepFinder {
         double to = stride.map(w -> w[1]).orElse(middle + time / 2);
         if (from < knownFrom || to > knownTo) {
             findings.add(Finding.warning(
-                    "gait.window-not-measured", where, String.format(Locale.ROOT,
+                    "gait.window-not-measured",
+                    where,
+                    String.format(
+                            Locale.ROOT,
                             "the work window from %.3f to %.3f s reaches beyond the interval %.3f to %.3f s in which"
                                     + " platforms measured every load; the step is not computed",
-                            from, to, knownFrom, knownTo)));
+                            from,
+                            to,
+                            knownFrom,
+                            knownTo)));
             return Optional.empty();
         }
         Optional<Vec3> velocity = pass.pelvisVelocity(from, to);
         if (velocity.isEmpty()) {
             findings.add(Finding.warning(
-                    "gait.pelvis-lost", where,
+                    "gait.pelvis-lost",
+                    where,
                     "the pelvis is not tracked at the ends of the work window; the step is not computed"));
             return Optional.empty();
         }
@@ -160,7 +170,9 @@ public final class StepFinder {
         double s = (stance.start() - trial.startTime()) * trial.rate();
         int frame = (int) Math.max(0, Math.min(trial.frames() - 2, Math.floor(s)));
         FootTracks foot = trial.foot(stance.side());
-        Vec3 p = foot.heel(frame).times(1 - (s - frame)).plus(foot.heel(frame + 1).times(s - frame));
+        Vec3 p = foot.heel(frame)
+                .times(1 - (s - frame))
+                .plus(foot.heel(frame + 1).times(s - frame));
         return pass.R_LW().inverseVector(p);
     }
 
@@ -172,7 +184,8 @@ public final class StepFinder {
         }
         Stance next = stances.get(i + 2).stance();
         boolean alternate = next.side() == stances.get(i).stance().side()
-                && stances.get(i - 1).stance().side() == stances.get(i + 1).stance().side();
+                && stances.get(i - 1).stance().side()
+                        == stances.get(i + 1).stance().side();
         boolean whole = true;
         for (int k = i - 1; k <= i + 1; k++) {
             whole &= stances.get(k).stance().whole();

@@ -27,14 +27,18 @@ public record SubjectMass(Quantity mass, int windows, boolean isWhole) {
     public static Optional<SubjectMass> of(List<List<Step>> steps) {
         List<Step> all = steps.stream().flatMap(List::stream).toList();
         List<Step> whole = all.stream()
-                .filter(s -> s.loads().trailing().allows(Use.MASS) && s.loads().leading().allows(Use.MASS))
+                .filter(s -> s.loads().trailing().allows(Use.MASS)
+                        && s.loads().leading().allows(Use.MASS))
                 .toList();
         List<Step> used = whole.isEmpty() ? all : whole;
         if (used.isEmpty()) {
             return Optional.empty();
         }
         double[] masses = used.stream()
-                .mapToDouble(s -> s.loads().totalForce().up().mean(s.loads().windowFrom(), s.loads().windowTo())
+                .mapToDouble(s -> s.loads()
+                                .totalForce()
+                                .up()
+                                .mean(s.loads().windowFrom(), s.loads().windowTo())
                         / s.loads().gravity())
                 .toArray();
         Sample sample = Sample.of(masses);

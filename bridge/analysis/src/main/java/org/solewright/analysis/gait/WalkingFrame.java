@@ -75,8 +75,7 @@ final class WalkingFrame {
         return best;
     }
 
-    private static List<Integer> contactFrames(
-            WalkingTrial trial, Rotation R_LW, Side side, double shortestStride) {
+    private static List<Integer> contactFrames(WalkingTrial trial, Rotation R_LW, Side side, double shortestStride) {
         FootTracks foot = trial.foot(side);
         double[] ahead = new double[trial.frames()];
         for (int i = 0; i < ahead.length; i++) {
@@ -104,8 +103,11 @@ final class WalkingFrame {
             }
             bySide.put(
                     side,
-                    pair(side, trial, contactFrames(trial, R_LW, side, shortestStride), KinematicEvents.peaks(
-                            behind, apart)));
+                    pair(
+                            side,
+                            trial,
+                            contactFrames(trial, R_LW, side, shortestStride),
+                            KinematicEvents.peaks(behind, apart)));
         }
         List<Footfall> all = new ArrayList<>();
         bySide.values().forEach(all::addAll);

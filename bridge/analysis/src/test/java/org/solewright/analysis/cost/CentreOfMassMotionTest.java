@@ -25,14 +25,11 @@ class CentreOfMassMotionTest {
             forward[i] = MASS * 0.5 * Math.sin(OMEGA * t);
             up[i] = MASS * (G - HEIGHT * OMEGA * OMEGA * Math.cos(OMEGA * t));
         }
-        return new Series[] {
-            new Series(0, RATE, forward), new Series(0, RATE, up), new Series(0, RATE, new double[n])
-        };
+        return new Series[] {new Series(0, RATE, forward), new Series(0, RATE, up), new Series(0, RATE, new double[n])};
     }
 
     private static CentreOfMassMotion motion() {
-        return CentreOfMassMotion.over(
-                loads(), 0.1, 0.1 + PERIOD, new double[] {1.3, 0, 0.02}, new double[3], G);
+        return CentreOfMassMotion.over(loads(), 0.1, 0.1 + PERIOD, new double[] {1.3, 0, 0.02}, new double[3], G);
     }
 
     @Test

@@ -64,7 +64,8 @@ class ComparedPosturesTest {
 
     @Test
     void sameFroudeScalesStepAndSpeedWithTheLimb() {
-        PostureRow row = row(ComparedPostures.of(whole(), STEP), UNGULIGRADE, Comparison.SAME_FROUDE, WorkForm.PUSH_OFF);
+        PostureRow row =
+                row(ComparedPostures.of(whole(), STEP), UNGULIGRADE, Comparison.SAME_FROUDE, WorkForm.PUSH_OFF);
         // exact: D/r and v^2/r as for the measured limb
         assertThat(row.stepLength() / 1.144).isCloseTo(0.793 / 0.931, within(1e-14));
         assertThat(row.speed() * row.speed() / 1.144).isCloseTo(1.675 * 1.675 / 0.931, within(1e-13));
@@ -104,14 +105,21 @@ class ComparedPosturesTest {
     @Test
     void weakerBasisCounts() {
         ComparedPostures all = ComparedPostures.of(whole(), STEP);
-        assertThat(row(all, DIGITIGRADE, Comparison.MEASURED, WorkForm.PUSH_OFF).basis()).isEqualTo(Basis.ASSUMED);
-        assertThat(row(all, COMPASS, Comparison.MEASURED, WorkForm.PUSH_OFF).basis()).isEqualTo(Basis.MEASURED);
+        assertThat(row(all, DIGITIGRADE, Comparison.MEASURED, WorkForm.PUSH_OFF).basis())
+                .isEqualTo(Basis.ASSUMED);
+        assertThat(row(all, COMPASS, Comparison.MEASURED, WorkForm.PUSH_OFF).basis())
+                .isEqualTo(Basis.MEASURED);
     }
 
     @Test
     void whatIsUnknownIsLeftOutWithAFinding() {
         ComparedLimb bare = new ComparedLimb(
-                measured(0.931), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+                measured(0.931),
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty());
         ComparedPostures only = ComparedPostures.of(bare, STEP);
         assertThat(only.rows()).hasSize(8);
         assertThat(only.work(ROLLING)).isEmpty();

@@ -76,8 +76,8 @@ class InventedWalkTest {
     @Test
     void worksOfTheTransitionAreTheTruth() {
         StepMechanics m = StepMechanics.of(steps.get(0));
-        WalkTruth.Step step = (WalkTruth.Step)
-                truth.transitions().get(truth.transitions().size() - 1);
+        WalkTruth.Step step =
+                (WalkTruth.Step) truth.transitions().get(truth.transitions().size() - 1);
         assertThat(value(m, Measure.PUSH_OFF_DOUBLE_SUPPORT))
                 .isCloseTo(step.trailingPositive(), within(2e-3 * step.trailingPositive()));
         assertThat(value(m, Measure.COLLISION_DOUBLE_SUPPORT))
@@ -163,8 +163,8 @@ class InventedWalkTest {
             set(force, i, f.x(), f.y(), f.z());
             set(moment, i, m.x(), m.y(), m.z());
         }
-        List<Vec3> corners = List.of(
-                new Vec3(to, 0.4, 0), new Vec3(from, 0.4, 0), new Vec3(from, -0.4, 0), new Vec3(to, -0.4, 0));
+        List<Vec3> corners =
+                List.of(new Vec3(to, 0.4, 0), new Vec3(from, 0.4, 0), new Vec3(from, -0.4, 0), new Vec3(to, -0.4, 0));
         return new PlatformLoads(number, 2, corners, Vec3.Z, LOAD_RATE, 0, true, force, moment);
     }
 

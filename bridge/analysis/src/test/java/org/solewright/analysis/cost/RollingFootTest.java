@@ -39,7 +39,8 @@ class RollingFootTest {
     void arcLongEnoughIsAsIfEndless() throws LimitException {
         RollingFoot foot = RollingFoot.shortArc(0.7, 0.9, 0.27, 0.5);
         assertThat(foot.truncated()).isFalse();
-        assertThat(foot.contactAngle()).isEqualTo(RollingFoot.full(0.7, 0.9, 0.27).contactAngle());
+        assertThat(foot.contactAngle())
+                .isEqualTo(RollingFoot.full(0.7, 0.9, 0.27).contactAngle());
         assertThat(foot.arcLength()).isCloseTo(0.27, within(1e-15));
     }
 
@@ -77,8 +78,7 @@ class RollingFootTest {
         assertThat(limit(0, 0.9, 0.3)).isEqualTo(Limit.NONPOSITIVE_STEP);
         assertThat(limit(0.7, 0, 0)).isEqualTo(Limit.NONPOSITIVE_RADIUS);
         assertThat(limit(1.8, 0.9, 0)).isEqualTo(Limit.STEP_OUT_OF_REACH); // exact: D < pi R + 2 (L - R)
-        LimitException e =
-                catchThrowableOfType(LimitException.class, () -> RollingFoot.shortArc(2.2, 0.9, 0.3, 0.3));
+        LimitException e = catchThrowableOfType(LimitException.class, () -> RollingFoot.shortArc(2.2, 0.9, 0.3, 0.3));
         assertThat(e.limit()).isEqualTo(Limit.STEP_OUT_OF_REACH);
     }
 
@@ -93,7 +93,8 @@ class RollingFootTest {
         double factor = step.factor(WorkForm.PUSH_OFF);
         double ratio = RollingFoot.equivalentRatio(0.6, 0.9, factor);
         // independent: factor of the answer
-        assertThat(RollingFoot.full(0.6, 0.9, ratio * 0.9).factor(WorkForm.PUSH_OFF)).isCloseTo(factor, within(1e-14));
+        assertThat(RollingFoot.full(0.6, 0.9, ratio * 0.9).factor(WorkForm.PUSH_OFF))
+                .isCloseTo(factor, within(1e-14));
     }
 
     @Test
@@ -106,7 +107,8 @@ class RollingFootTest {
     @Test
     void compassIsEquivalentToNoArc() throws LimitException {
         VaultingStep step = VaultingStep.given(0, 0.6, 0.9, 0, 1);
-        assertThat(RollingFoot.equivalentRatio(0.6, 0.9, step.factor(WorkForm.PUSH_OFF))).isZero(); // exact
+        assertThat(RollingFoot.equivalentRatio(0.6, 0.9, step.factor(WorkForm.PUSH_OFF)))
+                .isZero(); // exact
         assertThat(RollingFoot.equivalentRatioSmallAngle(step)).isCloseTo(0, within(1e-15));
     }
 
@@ -128,8 +130,10 @@ class RollingFootTest {
 
     @Test
     void limitsOfThePolygon() {
-        assertThat(polygonLimit(new double[] {-0.1, -0.9, 0, -0.88, 0.1, -0.9}, 0.6)).isEqualTo(Limit.POLYGON_NOT_CONVEX);
-        assertThat(polygonLimit(new double[] {-0.1, -0.9, 0, -0.9, 0.1, -0.9}, 0.6)).isEqualTo(Limit.POLYGON_NOT_CONVEX);
+        assertThat(polygonLimit(new double[] {-0.1, -0.9, 0, -0.88, 0.1, -0.9}, 0.6))
+                .isEqualTo(Limit.POLYGON_NOT_CONVEX);
+        assertThat(polygonLimit(new double[] {-0.1, -0.9, 0, -0.9, 0.1, -0.9}, 0.6))
+                .isEqualTo(Limit.POLYGON_NOT_CONVEX);
         assertThat(polygonLimit(new double[] {-0.1, -0.9, 0.1, -0.9}, 0.2)).isEqualTo(Limit.STEP_NOT_LONGER_THAN_FOOT);
         assertThat(polygonLimit(new double[] {-0.1, -0.9, 0.1, -0.9}, 3)).isEqualTo(Limit.PIVOT_SPACING_OUT_OF_REACH);
         assertThat(polygonLimit(new double[] {-0.1, -0.9, 0.1, -0.9}, 0)).isEqualTo(Limit.NONPOSITIVE_STEP);

@@ -46,7 +46,8 @@ class VaultingStepTest {
         // exact: two transitions over f/2, one over D - f, radius L - f = 0.65
         double inner = 0.125 * 0.125 / (0.65 * 0.65);
         double last = 0.35 * 0.35 / (0.65 * 0.65);
-        assertThat(step.factor(WorkForm.PUSH_OFF)).isCloseTo(2 * inner / (4 - inner) + last / (4 - last), within(1e-15));
+        assertThat(step.factor(WorkForm.PUSH_OFF))
+                .isCloseTo(2 * inner / (4 - inner) + last / (4 - last), within(1e-15));
         assertThat(step.transitions()).isEqualTo(3);
         assertThat(step.angle(2)).isCloseTo(2 * Math.asin(0.35 / 1.3), within(1e-15));
         VaultingStep flat = VaultingStep.given(2, 0.6, 0.9, 0.25, 0);
@@ -68,8 +69,8 @@ class VaultingStepTest {
         "1, 0.85, 0.9, 0.8, PIVOT_SPACING_OUT_OF_REACH"
     })
     void limitsAreCheckedInTheirOrder(double segments, double step, double limb, double foot, Limit expected) {
-        LimitException e = catchThrowableOfType(
-                LimitException.class, () -> VaultingStep.given(segments, step, limb, foot, 1));
+        LimitException e =
+                catchThrowableOfType(LimitException.class, () -> VaultingStep.given(segments, step, limb, foot, 1));
         assertThat(e.limit()).isEqualTo(expected);
     }
 
@@ -139,7 +140,8 @@ class VaultingStepTest {
         "12, 0.7828707270, 0.8063266123, 0.7600621593"
     })
     void crossoversOfTheEqualVaultFoot(int n, double small, double push, double noPush) throws LimitException {
-        assertThat(Crossover.equalVaults(WorkForm.SIMULTANEOUS, n, 1).orElseThrow()).isCloseTo(small, within(5.1e-11));
+        assertThat(Crossover.equalVaults(WorkForm.SIMULTANEOUS, n, 1).orElseThrow())
+                .isCloseTo(small, within(5.1e-11));
         assertThat(Crossover.equalVaults(WorkForm.PUSH_OFF, n, 1).orElseThrow()).isCloseTo(push, within(5.1e-11));
         assertThat(Crossover.equalVaults(WorkForm.NO_PUSH, n, 1).orElseThrow()).isCloseTo(noPush, within(5.1e-11));
     }
@@ -186,7 +188,8 @@ class VaultingStepTest {
     void equalVaultStepSmallAngleInClosedForm() throws LimitException {
         double k = Math.sqrt(0.2);
         // exact: sqrt(k) L sqrt(N+1)/(1 + sqrt(k) N/sqrt(N+1))
-        assertThat(EqualCost.equalVaults(WorkForm.NO_PUSH_SMALL_ANGLE, 3, 0.9, 1, 0.2).stepLength())
+        assertThat(EqualCost.equalVaults(WorkForm.NO_PUSH_SMALL_ANGLE, 3, 0.9, 1, 0.2)
+                        .stepLength())
                 .isCloseTo(k * 0.9 * 2 / (1 + k * 3 / 2), within(1e-13));
     }
 
@@ -219,8 +222,7 @@ class VaultingStepTest {
         double compass = EqualCost.footOfCompassCost(1, 0.6, 0.9);
         assertThat(VaultingStep.given(1, 0.6, 0.9, compass, 1).factor(WorkForm.NO_PUSH_SMALL_ANGLE))
                 .isCloseTo(0.36 / 0.81, within(1e-14));
-        LimitException e =
-                catchThrowableOfType(LimitException.class, () -> EqualCost.foot(1, 0.6, 0.9, 0.1, false));
+        LimitException e = catchThrowableOfType(LimitException.class, () -> EqualCost.foot(1, 0.6, 0.9, 0.1, false));
         assertThat(e.limit()).isEqualTo(Limit.NO_SOLUTION);
     }
 }

@@ -9,8 +9,7 @@ import org.solewright.domain.cost.WalkTruth;
 
 class SyntheticWalkTest {
 
-    private static final WalkParameters ONE_SEGMENT =
-            new WalkParameters(70, 0.95, 1, 0.2, 0.65, 1.35, 0.35, 0.6, 9.81);
+    private static final WalkParameters ONE_SEGMENT = new WalkParameters(70, 0.95, 1, 0.2, 0.65, 1.35, 0.35, 0.6, 9.81);
     private static final WalkParameters THREE_SEGMENTS =
             new WalkParameters(70, 0.95, 3, 0.24, 0.6, 1.35, 0.4, 0.6, 9.81);
 
@@ -25,7 +24,8 @@ class SyntheticWalkTest {
             walk.hip(t - h, before);
             walk.hip(t, now);
             walk.hip(t + h, after);
-            // independent: central differences; h^2/6 of the third, h^2/12 of the fourth derivative (up to 1e4 m/s4 where
+            // independent: central differences; h^2/6 of the third, h^2/12 of the fourth derivative (up to 1e4 m/s4
+            // where
             // bridges begin and the third derivative jumps by some 300 m/s3, times h) and rounding 1e-16/h^2
             assertThat(now[2]).isCloseTo((after[0] - before[0]) / (2 * h), within(2e-5));
             assertThat(now[3]).isCloseTo((after[1] - before[1]) / (2 * h), within(2e-5));
@@ -86,8 +86,7 @@ class SyntheticWalkTest {
 
     @Test
     void shortBridgesTendToTheImpulsiveModels() {
-        WalkTruth truth =
-                new SyntheticWalk(new WalkParameters(70, 0.95, 1, 0.2, 0.65, 1.35, 1e-4, 1e-4, 9.81)).truth();
+        WalkTruth truth = new SyntheticWalk(new WalkParameters(70, 0.95, 1, 0.2, 0.65, 1.35, 1e-4, 1e-4, 9.81)).truth();
         WalkTruth.Inner inner = (WalkTruth.Inner) truth.transitions().get(0);
         WalkTruth.Step step = (WalkTruth.Step) truth.transitions().get(1);
         // independent: design 04 I7, limits of vanishing bridges; linear in the share 1e-4, factor of some units
@@ -108,7 +107,8 @@ class SyntheticWalkTest {
 
     @Test
     void smallInnerBridgeRunsTheCentreOfPressureBackAndForth() {
-        assertThat(new SyntheticWalk(THREE_SEGMENTS).truth().centreOfPressureMonotone()).isTrue();
+        assertThat(new SyntheticWalk(THREE_SEGMENTS).truth().centreOfPressureMonotone())
+                .isTrue();
         WalkTruth early = new SyntheticWalk(new WalkParameters(70, 0.95, 1, 0.2, 0.65, 1.35, 0.35, 0.1, 9.81)).truth();
         // independent: design 04 I3
         assertThat(early.centreOfPressureMonotone()).isFalse();

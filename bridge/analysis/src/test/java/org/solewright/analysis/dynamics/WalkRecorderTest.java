@@ -156,12 +156,16 @@ class WalkRecorderTest {
         Pose turned = new Pose(new Rotation(Vec3.Y, Vec3.Z, Vec3.X), new Vec3(3, 1, 2));
         Recording plain = recorder(IDENTITY).walking(List.of(HIP, ANKLE));
         Recording moved = recorder(turned).walking(List.of(HIP, ANKLE));
-        assertThat(moved.points().get(1).at(40).distance(turned.transformPosition(plain.points().get(1).at(40))))
+        assertThat(moved.points()
+                        .get(1)
+                        .at(40)
+                        .distance(turned.transformPosition(plain.points().get(1).at(40))))
                 .isLessThan(1e-12);
         PlatformLoads a = plain.platforms().get(0);
         PlatformLoads b = moved.platforms().get(0);
         int loaded = (int) Math.round(walk.contact(2) * 1000) + 200;
-        assertThat(b.force(loaded).distance(turned.transformVector(a.force(loaded)))).isLessThan(1e-9);
+        assertThat(b.force(loaded).distance(turned.transformVector(a.force(loaded))))
+                .isLessThan(1e-9);
         assertThat(b.centreOfPressure(loaded).distance(turned.transformPosition(a.centreOfPressure(loaded))))
                 .isLessThan(1e-12);
     }

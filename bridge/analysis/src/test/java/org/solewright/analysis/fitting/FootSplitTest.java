@@ -50,7 +50,8 @@ class FootSplitTest {
 
         InertiaTensor total = InertiaTensor.principal(0, 0, 0);
         for (Segment s : split.segments().subList(1, parts + 1)) {
-            total = total.plus(s.inertia().shifted(s.mass().value(), inFoot(split, s).minus(centre)));
+            total = total.plus(
+                    s.inertia().shifted(s.mass().value(), inFoot(split, s).minus(centre)));
         }
         InertiaTensor expected = foot.inertia();
         double scale = 1e-9 * expected.yy();
@@ -74,9 +75,9 @@ class FootSplitTest {
         Section rear = new Section(0, 0, 0, 0.03, 0.02);
         Section front = new Section(0.2, 0.01, 0.02, 0.01, 0.04);
         double volume = TetrahedralSolid.frusta(List.of(rear, front)).moments().mass();
-        // exact: half axes linear in x: pi h (a1 b1 + a2 b2 + (a1 b2 + a2 b1)/2)/3; the polygons have the ellipses' area
-        double expected =
-                Math.PI * 0.2 / 3 * (0.03 * 0.02 + 0.01 * 0.04 + (0.03 * 0.04 + 0.01 * 0.02) / 2);
+        // exact: half axes linear in x: pi h (a1 b1 + a2 b2 + (a1 b2 + a2 b1)/2)/3; the polygons have the ellipses'
+        // area
+        double expected = Math.PI * 0.2 / 3 * (0.03 * 0.02 + 0.01 * 0.04 + (0.03 * 0.04 + 0.01 * 0.02) / 2);
         assertThat(volume).isCloseTo(expected, share(expected, 1e-4));
     }
 
@@ -95,7 +96,9 @@ class FootSplitTest {
     @Test
     void bothSidesOfACutSumToTheWhole() {
         TetrahedralSolid solid = TetrahedralSolid.frusta(List.of(
-                new Section(0, 0, 0, 0.03, 0.02), new Section(0.1, 0.01, 0, 0.02, 0.03), new Section(0.2, 0, 0, 0.01, 0.01)));
+                new Section(0, 0, 0, 0.03, 0.02),
+                new Section(0.1, 0.01, 0, 0.02, 0.03),
+                new Section(0.2, 0, 0, 0.01, 0.01)));
         Vec3 normal = new Vec3(1, 0.3, -0.4);
         Vec3 point = new Vec3(0.08, 0, 0);
         double behind = solid.behind(point, normal).moments().mass();
@@ -124,7 +127,8 @@ class FootSplitTest {
                 assertThat(a.entry(i, j)).isCloseTo(a.entry(j, i), within(1e-14));
             }
         }
-        assertThat(SymmetricMap.between(p, new double[][] {{1, 0, 0}, {0, 1, 0}, {0, 0, 0}})).isEmpty();
+        assertThat(SymmetricMap.between(p, new double[][] {{1, 0, 0}, {0, 1, 0}, {0, 0, 0}}))
+                .isEmpty();
     }
 
     @Test
@@ -141,15 +145,13 @@ class FootSplitTest {
     @Test
     void tableOfDeLevaGivesTheWorkedExample() {
         // published: [de Leva 1996] male, 73.0 kg, foot 0.2581 m, shank 0.4340 m; worked in the handbook, 0.5 %
-        SegmentInertia foot = SegmentInertia.foot(InertiaTable.DE_LEVA, Optional.of(
-                Sex.MALE));
+        SegmentInertia foot = SegmentInertia.foot(InertiaTable.DE_LEVA, Optional.of(Sex.MALE));
         assertThat(foot.mass() * 73.0).isCloseTo(1.0001, within(5e-5));
         InertiaTensor t = foot.tensor(foot.mass() * 73.0, 0.2581);
         assertThat(t.yy()).isCloseTo(0.004400, share(0.0044, 0.005));
         assertThat(t.zz()).isCloseTo(0.003999, share(0.004, 0.005));
         assertThat(t.xx()).isCloseTo(0.001024, share(0.001, 0.005));
-        SegmentInertia shank = SegmentInertia.shank(InertiaTable.DE_LEVA, Optional.of(
-                Sex.FEMALE));
+        SegmentInertia shank = SegmentInertia.shank(InertiaTable.DE_LEVA, Optional.of(Sex.FEMALE));
         assertThat(shank.mass() * 61.9).isCloseTo(2.9774, within(5e-5));
         InertiaTensor u = shank.tensor(shank.mass() * 61.9, 0.4323);
         assertThat(u.yy()).isCloseTo(0.039667, share(0.04, 0.005));

@@ -51,9 +51,7 @@ class PathFitTest {
         for (int node = 1; node < 11; node++) {
             double sum = 0;
             for (int i = 0; i < 12; i++) {
-                sum += i <= node
-                        ? chord(x, y, 0, node, i)
-                        : chord(x, y, node, 11, i);
+                sum += i <= node ? chord(x, y, 0, node, i) : chord(x, y, node, 11, i);
             }
             best = Math.min(best, sum);
         }

@@ -46,7 +46,8 @@ class RigidFitTest {
         Random random = new Random(20261201);
         for (int trial = 0; trial < 200; trial++) {
             Pose truth = new Pose(
-                    Rotation.ofXandZ(vector(random), vector(random)), vector(random).times(3));
+                    Rotation.ofXandZ(vector(random), vector(random)),
+                    vector(random).times(3));
             List<Vec3> reference = new ArrayList<>();
             List<Vec3> present = new ArrayList<>();
             for (int i = 0; i < 3 + trial % 4; i++) {
@@ -64,7 +65,8 @@ class RigidFitTest {
     @Test
     void mirroredPointsDoNotGiveAMirror() {
         List<Vec3> body = List.of(new Vec3(0, 0, 0), new Vec3(1, 0, 0), new Vec3(0, 1, 0), new Vec3(0, 0, 1));
-        List<Vec3> mirrored = body.stream().map(p -> new Vec3(-p.x(), p.y(), p.z())).toList();
+        List<Vec3> mirrored =
+                body.stream().map(p -> new Vec3(-p.x(), p.y(), p.z())).toList();
         RigidFit fit = RigidFit.of(body, mirrored).orElseThrow();
         Rotation r = fit.pose().rotation();
         assertThat(r.x().cross(r.y()).dot(r.z())).isCloseTo(1, ROUNDING);
@@ -75,7 +77,8 @@ class RigidFitTest {
 
     @Test
     void planarClusterSeenMirroredIsStillARotation() {
-        List<Vec3> mirrored = SQUARE.stream().map(p -> new Vec3(-p.x(), p.y(), p.z())).toList();
+        List<Vec3> mirrored =
+                SQUARE.stream().map(p -> new Vec3(-p.x(), p.y(), p.z())).toList();
         RigidFit fit = RigidFit.of(SQUARE, mirrored).orElseThrow();
         // exact: in the plane the reflection x -> -x is the half turn about y
         assertThat(fit.rms()).isCloseTo(0, ROUNDING);
@@ -89,14 +92,16 @@ class RigidFitTest {
         RigidFit fit = RigidFit.of(SQUARE, gappy).orElseThrow();
         assertThat(fit.points()).isEqualTo(3);
         assertSame(fit.pose().position(), new Vec3(0, 0, 2), ROUNDING);
-        assertThat(RigidFit.of(SQUARE, List.of(moved.get(0), LOST, LOST, moved.get(3)))).isEmpty();
+        assertThat(RigidFit.of(SQUARE, List.of(moved.get(0), LOST, LOST, moved.get(3))))
+                .isEmpty();
     }
 
     @Test
     void pointsOnOneLineDoNotGiveAPose() {
         List<Vec3> line = List.of(new Vec3(0, 0, 0), new Vec3(1, 1, 0), new Vec3(2, 2, 0), new Vec3(5, 5, 0));
         assertThat(RigidFit.of(line, line)).isEmpty();
-        assertThat(RigidFit.of(List.of(Vec3.X, Vec3.X, Vec3.X), List.of(Vec3.X, Vec3.X, Vec3.X))).isEmpty();
+        assertThat(RigidFit.of(List.of(Vec3.X, Vec3.X, Vec3.X), List.of(Vec3.X, Vec3.X, Vec3.X)))
+                .isEmpty();
     }
 
     @Test

@@ -29,9 +29,7 @@ class SphereFitTest {
     @Test
     void kasaSolvesItsNormalEquations() {
         FittedSphere kasa = AlgebraicFit.kasa(GGS, 2).orElseThrow();
-        double t = kasa.radius() * kasa.radius()
-                - kasa.centre(0) * kasa.centre(0)
-                - kasa.centre(1) * kasa.centre(1);
+        double t = kasa.radius() * kasa.radius() - kasa.centre(0) * kasa.centre(0) - kasa.centre(1) * kasa.centre(1);
         double sum = 0;
         double sumX = 0;
         double sumY = 0;
@@ -90,7 +88,8 @@ class SphereFitTest {
             kasa += AlgebraicFit.kasa(points, 2).orElseThrow().radius() / repeats;
             taubin += AlgebraicFit.taubin(points, 2).orElseThrow().radius() / repeats;
             pratt += AlgebraicFit.pratt(points, 2).orElseThrow().radius() / repeats;
-            geometric += SphereFit.fit(points, ones(60), 2).orElseThrow().sphere().radius() / repeats;
+            geometric +=
+                    SphereFit.fit(points, ones(60), 2).orElseThrow().sphere().radius() / repeats;
         }
         // design 04 H3: means 0.208 (Kasa) and 0.301 (the others), sd 0.028; 4 standard errors of 300 repeats
         assertThat(kasa).isCloseTo(0.208, within(0.007));

@@ -77,7 +77,8 @@ class StandingModelTest {
                 .orElseThrow()
                 .position();
         assertAt(cluster, 0.02, 0.25 - 0.49, 0.05);
-        assertThat(model.landmarks()).noneMatch(l -> l.name().equals("asis") || l.name().startsWith("trochanter"));
+        assertThat(model.landmarks())
+                .noneMatch(l -> l.name().equals("asis") || l.name().startsWith("trochanter"));
     }
 
     @Test
@@ -146,19 +147,23 @@ class StandingModelTest {
         subject.putBoth(Landmark.METATARSAL_2_HEAD, 0.14, 0.02, 0.08);
         subject.sex = Optional.empty();
         Segment foot = subject.limb(Side.RIGHT).segments().get(1);
-        // published: Dempster after [Winter 2009] table 4.1: 0.0145, 0.50, 0.475; exact: malleolus (-0.005,-0.005,0.045),
+        // published: Dempster after [Winter 2009] table 4.1: 0.0145, 0.50, 0.475; exact: malleolus
+        // (-0.005,-0.005,0.045),
         // head (0.14,-0.055,-0.02) in the foot's frame
         assertThat(foot.mass().value()).isCloseTo(0.0145 * 80, ROUNDING);
         assertThat(foot.mass().basis()).isEqualTo(Basis.REGRESSION);
         assertThat(foot.inertiaBasis()).isEqualTo(Basis.ASSUMED);
         assertAt(foot.centreOfMass().position(), 0.0675, -0.03, 0.0125);
         double length2 = 0.145 * 0.145 + 0.05 * 0.05 + 0.065 * 0.065;
-        // exact: the trace does not depend on the axes; radii keep the proportions of the mean of [de Leva 1996]'s sexes
+        // exact: the trace does not depend on the axes; radii keep the proportions of the mean of [de Leva 1996]'s
+        // sexes
         double k = 0.475 / ((0.245 + 0.279) / 2);
-        double trace = 0.0145 * 80 * length2 * (0.475 * 0.475
-                + Math.pow(k * (0.257 + 0.299) / 2, 2)
-                + Math.pow(k * (0.124 + 0.139) / 2, 2));
-        assertThat(foot.inertia().xx() + foot.inertia().yy() + foot.inertia().zz()).isCloseTo(trace, within(1e-12));
+        double trace = 0.0145
+                * 80
+                * length2
+                * (0.475 * 0.475 + Math.pow(k * (0.257 + 0.299) / 2, 2) + Math.pow(k * (0.124 + 0.139) / 2, 2));
+        assertThat(foot.inertia().xx() + foot.inertia().yy() + foot.inertia().zz())
+                .isCloseTo(trace, within(1e-12));
     }
 
     @Test
@@ -245,7 +250,8 @@ class StandingModelTest {
     @Test
     void padsTouchTheFloorInStanding() {
         StandingLimb limb = subject.limb(Side.RIGHT);
-        assertThat(limb.pads().stream().map(Pad::name)).containsExactly("heel", "metatarsal_5", "metatarsal_1", "hallux");
+        assertThat(limb.pads().stream().map(Pad::name))
+                .containsExactly("heel", "metatarsal_5", "metatarsal_1", "hallux");
         for (Pad pad : limb.pads()) {
             Pose frame = limb.poses().get(pad.segment());
             assertThat(frame.transformPosition(pad.centre()).z()).isCloseTo(pad.radius(), ROUNDING);
@@ -286,9 +292,11 @@ class StandingModelTest {
         Finding finding = subject.limb(Side.LEFT).findings().get(0);
         assertThat(finding.code()).isEqualTo("limb.length-differs");
         assertThat(finding.message())
-                .isEqualTo("trochanter height is 0.850 m on the right and 0.900 m on the left, more than 2 % apart; limb"
-                        + " lengths by the pelvis agree, so the right trochanter's marker is low");
-        assertThat(subject.limb(Side.RIGHT).findings()).isEqualTo(subject.limb(Side.LEFT).findings());
+                .isEqualTo(
+                        "trochanter height is 0.850 m on the right and 0.900 m on the left, more than 2 % apart; limb"
+                                + " lengths by the pelvis agree, so the right trochanter's marker is low");
+        assertThat(subject.limb(Side.RIGHT).findings())
+                .isEqualTo(subject.limb(Side.LEFT).findings());
     }
 
     @Test

@@ -61,8 +61,7 @@ class LowPassTest {
     void cutoffBeyondHalfTheRateIsRefusedWithTheNumbers() {
         assertThatThrownBy(() -> LowPass.of(60, 100))
                 .isInstanceOf(IllegalArgumentException.class)
-                .hasMessage(
-                        "cut-off 60.0 Hz, expected more than 0 Hz and less than half the rate 100.0 Hz");
+                .hasMessage("cut-off 60.0 Hz, expected more than 0 Hz and less than half the rate 100.0 Hz");
     }
 
     /** Amplitude of the response in the middle of a long sine, by projection on sine and cosine over whole periods. */

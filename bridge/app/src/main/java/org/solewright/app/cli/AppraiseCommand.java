@@ -31,7 +31,8 @@ final class AppraiseCommand implements Callable<Integer> {
     @Option(
             names = "--model",
             paramLabel = "M.xml",
-            description = "Foot model; one per side; may be left out where only the work on the centre of mass is asked.")
+            description =
+                    "Foot model; one per side; may be left out where only the work on the centre of mass is asked.")
     private List<Path> models = new ArrayList<>();
 
     @Mixin

@@ -127,7 +127,7 @@ final class FitCommand implements Callable<Integer> {
 
     private InertiaTable table() throws UseCaseException {
         return InertiaTable.ofWord(inertia)
-                .orElseThrow(() -> GaitArguments.usage(
-                        "--inertia", "'" + inertia + "' is unknown", "use deleva or dempster"));
+                .orElseThrow(() ->
+                        GaitArguments.usage("--inertia", "'" + inertia + "' is unknown", "use deleva or dempster"));
     }
 }

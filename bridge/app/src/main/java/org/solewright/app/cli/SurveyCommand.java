@@ -54,8 +54,10 @@ final class SurveyCommand implements Callable<Integer> {
                 for (Finding f : survey.findings()) {
                     if (f.severity() == Severity.ERROR) {
                         failed++;
-                        spec.commandLine().getErr().println("solewright: " + file + ": " + f.message()
-                                + ": get a complete copy of the file");
+                        spec.commandLine()
+                                .getErr()
+                                .println("solewright: " + file + ": " + f.message()
+                                        + ": get a complete copy of the file");
                         break;
                     }
                 }

@@ -112,9 +112,7 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
             return;
         }
         String sdColumn = column + "_sd";
-        OptionalDouble sd = TransitionColumns.ALL.contains(sdColumn)
-                ? row.number(sdColumn)
-                : OptionalDouble.empty();
+        OptionalDouble sd = TransitionColumns.ALL.contains(sdColumn) ? row.number(sdColumn) : OptionalDouble.empty();
         lines.add(String.format(Locale.ROOT, "  %-22s %9." + digits + "f", words, value.getAsDouble())
                 + (sd.isPresent() ? String.format(Locale.ROOT, " +- %." + digits + "f", sd.getAsDouble()) : "")
                 + (unit.isEmpty() ? "" : " " + unit));

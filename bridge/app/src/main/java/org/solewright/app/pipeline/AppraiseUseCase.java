@@ -184,9 +184,7 @@ public final class AppraiseUseCase {
         }
         if (models.isEmpty()) {
             findings.add(Finding.note(
-                    "model.none",
-                    "",
-                    "no model was given: limb, foot and posture columns are empty; give --model"));
+                    "model.none", "", "no model was given: limb, foot and posture columns are empty; give --model"));
         }
     }
 
@@ -300,12 +298,7 @@ public final class AppraiseUseCase {
     }
 
     private void rollingRadius(
-            TransitionRow.Builder row,
-            ModelLimb limb,
-            Pass pass,
-            LandmarkTracks tracks,
-            Step step,
-            Set<String> codes) {
+            TransitionRow.Builder row, ModelLimb limb, Pass pass, LandmarkTracks tracks, Step step, Set<String> codes) {
         Stance trailing = step.loads().trailing();
         String where = pass.trial().name() + " step " + step.number();
         Optional<SegmentTracking> shank = limb.shank(tracks);
@@ -327,14 +320,15 @@ public final class AppraiseUseCase {
                         trailing,
                         f -> limb.ankle(s, f),
                         f -> limb.knee(s, f),
-                        RollOverShapes.leastLoad(
-                                weight, limb.model().subject().population() != Population.OTHER))
+                        RollOverShapes.leastLoad(weight, limb.model().subject().population() != Population.OTHER))
                 .filter(RollOver::isLongEnough);
         if (path.isEmpty()) {
             addFinding(
                     codes,
                     Finding.note(
-                            "rolling.stance-unused", where, "the roll-over of the trailing stance has too few samples"));
+                            "rolling.stance-unused",
+                            where,
+                            "the roll-over of the trailing stance has too few samples"));
             return;
         }
         FittedArc arc = RollOver.arc(path.get());

@@ -32,7 +32,8 @@ final class ContactOverrides {
             List<Stance> judged = new ArrayList<>();
             List<Finding> more = new ArrayList<>();
             for (Stance stance : pass.stances()) {
-                Optional<ContactRow> row = rows.stream().filter(r -> isOf(r, stance)).findFirst();
+                Optional<ContactRow> row =
+                        rows.stream().filter(r -> isOf(r, stance)).findFirst();
                 row.ifPresent(unused::remove);
                 judged.add(row.map(r -> judge(r, stance, more)).orElse(stance));
             }
@@ -104,8 +105,7 @@ final class ContactOverrides {
         List<ContactRow> rows = new ArrayList<>();
         for (Pass pass : passes) {
             for (Stance s : pass.stances()) {
-                List<Use> used =
-                        Arrays.stream(Use.values()).filter(s::allows).toList();
+                List<Use> used = Arrays.stream(Use.values()).filter(s::allows).toList();
                 rows.add(new ContactRow(
                         s.trial(),
                         s.side(),

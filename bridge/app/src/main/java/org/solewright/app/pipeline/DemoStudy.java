@@ -93,8 +93,7 @@ final class DemoStudy {
     }
 
     /** The walks, slower first. */
-    static final List<Walk> WALKS =
-            List.of(new Walk("walking-1", 0.58, 1.08), new Walk("walking-2", 0.62, 1.14));
+    static final List<Walk> WALKS = List.of(new Walk("walking-1", 0.58, 1.08), new Walk("walking-2", 0.62, 1.14));
 
     private DemoStudy() {}
 
@@ -109,8 +108,7 @@ final class DemoStudy {
         OutputFolder.of(folder, List.of());
         try {
             Path standing = folder.resolve("standing.c3d");
-            C3dWriter.write(
-                    standing, WALKS.get(0).recorder().standing("standing.c3d", STANDING_FRAMES, points(true)));
+            C3dWriter.write(standing, WALKS.get(0).recorder().standing("standing.c3d", STANDING_FRAMES, points(true)));
             List<Path> walking = new ArrayList<>();
             for (Walk walk : WALKS) {
                 Path file = folder.resolve(walk.name() + ".c3d");
@@ -178,8 +176,7 @@ final class DemoStudy {
         return points;
     }
 
-    private static void cluster(
-            List<BodyPoint> points, double[][] places, Side side, String name, Carrier carrier) {
+    private static void cluster(List<BodyPoint> points, double[][] places, Side side, String name, Carrier carrier) {
         double out = side == Side.LEFT ? 1 : -1;
         for (int k = 0; k < places.length; k++) {
             points.add(new BodyPoint(

@@ -102,7 +102,8 @@ public final class DemoUseCase {
 
     private Result run() throws UseCaseException, FormatException {
         DemoStudy.Files files = DemoStudy.write(folder);
-        lines.add("An invented subject, " + DemoStudy.SUBJECT + ", whose every number is known; no person was recorded.");
+        lines.add(
+                "An invented subject, " + DemoStudy.SUBJECT + ", whose every number is known; no person was recorded.");
         lines.add("1. wrote " + files.standing() + ", " + files.walking().get(0) + ", "
                 + files.walking().get(1) + " and " + files.landmarks());
         // The recordings have no noise: a marker filter would only blunt what is to be compared.
@@ -164,7 +165,8 @@ public final class DemoUseCase {
 
     private void survey(DemoStudy.Files files) throws UseCaseException, FormatException {
         lines.add("2. survey");
-        for (Path file : List.of(files.standing(), files.walking().get(0), files.walking().get(1))) {
+        for (Path file : List.of(
+                files.standing(), files.walking().get(0), files.walking().get(1))) {
             lines.add("   " + Survey.of(file, false).oneLine());
         }
     }
@@ -190,8 +192,9 @@ public final class DemoUseCase {
     }
 
     private void compareFit(FitUseCase.Result fitted) {
-        fitted.subject().mass().ifPresent(m ->
-                add("mass", "kg", m.value(), DemoStudy.MASS, MASS_SHARE * DemoStudy.MASS));
+        fitted.subject()
+                .mass()
+                .ifPresent(m -> add("mass", "kg", m.value(), DemoStudy.MASS, MASS_SHARE * DemoStudy.MASS));
         WalkTruth truth = DemoStudy.WALKS.get(0).synthetic().truth();
         fitted.rollOvers().forEach((side, rollOver) -> {
             List<WalkingRollOver.LimbPivots> pivots = rollOver.limbPivots();
@@ -270,8 +273,7 @@ public final class DemoUseCase {
         }
     }
 
-    private void compare(
-            StepMechanics m, Measure measure, String what, String unit, double truth, double tolerance) {
+    private void compare(StepMechanics m, Measure measure, String what, String unit, double truth, double tolerance) {
         Double found = m.values().get(measure);
         add(what, unit, found == null ? Double.NaN : found, truth, tolerance);
     }

@@ -40,8 +40,7 @@ final class FitAnswers {
         int loaded = (int) Arrays.stream(weights).filter(w -> w > 0).count();
         if (loaded < dimensions + 1) {
             throw new LimitException(
-                    Limit.TOO_FEW_POINTS,
-                    loaded + " points that carry weight, expected at least " + (dimensions + 1));
+                    Limit.TOO_FEW_POINTS, loaded + " points that carry weight, expected at least " + (dimensions + 1));
         }
         ObjectNode out = object();
         putSphere(out, "unitNorm", AlgebraicFit.unitNorm(points, dimensions));
@@ -64,7 +63,8 @@ final class FitAnswers {
         if (weights.length != count) {
             throw new CallerError(
                     CallerError.Code.WRONG_TYPE,
-                    "input 'weights' has " + weights.length + " numbers, expected one for each of " + count + " points");
+                    "input 'weights' has " + weights.length + " numbers, expected one for each of " + count
+                            + " points");
         }
         for (double w : weights) {
             if (w < 0) {

@@ -49,21 +49,23 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         Map<String, byte[]> files = new LinkedHashMap<>();
         result.models().forEach((side, m) -> files.put("foot-model-" + side.word() + ".xml", FootModelFile.bytes(m)));
         files.put("fit-contacts.csv", ContactsTable.bytes(result.contacts()));
-        files.put("fit-curves.csv", CurvesTable.bytes(LoadCurves.of(result.subject().passes())));
-        List<Path> written =
-                OutputFolder.of(out, request.gait().inputs()).write(files);
+        files.put(
+                "fit-curves.csv",
+                CurvesTable.bytes(LoadCurves.of(result.subject().passes())));
+        List<Path> written = OutputFolder.of(out, request.gait().inputs()).write(files);
         List<String> lines = new ArrayList<>();
         result.models().values().forEach(m -> describe(lines, m));
         lines.add("contacts:");
-        result.contacts().forEach(c -> lines.add(String.format(
-                Locale.ROOT,
-                "  %s %s platform %s  %.3f to %.3f s  %s",
-                c.trial(),
-                c.side().word(),
-                c.platforms().toString().replaceAll("[\\[\\]]", ""),
-                c.start(),
-                c.end(),
-                c.whole() ? "whole" : "not whole: " + c.why())));
+        result.contacts()
+                .forEach(c -> lines.add(String.format(
+                        Locale.ROOT,
+                        "  %s %s platform %s  %.3f to %.3f s  %s",
+                        c.trial(),
+                        c.side().word(),
+                        c.platforms().toString().replaceAll("[\\[\\]]", ""),
+                        c.start(),
+                        c.end(),
+                        c.whole() ? "whole" : "not whole: " + c.why())));
         written.forEach(f -> lines.add("wrote " + f));
         lines.addAll(Cautions.LINES);
         return new FitReport(lines, result.findings(), result.failed());
@@ -74,9 +76,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         lines.add("  body mass              " + text(model.subject().mass(), "kg", 1));
         lines.add("  limb length            " + text(model.subject().limbLength(), "m", 3));
         model.subject().footLength().ifPresent(q -> lines.add("  foot length            " + text(q, "m", 3)));
-        model.subject()
-                .effectiveFootLength()
-                .ifPresent(q -> lines.add("  effective foot length  " + text(q, "m", 3)));
+        model.subject().effectiveFootLength().ifPresent(q -> lines.add("  effective foot length  " + text(q, "m", 3)));
         model.segments()
                 .forEach(s -> lines.add(String.format(
                         Locale.ROOT,
@@ -92,7 +92,8 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
                     arc.frame().word(),
                     arc.radius(),
                     arc.radiusSd().isPresent()
-                            ? String.format(Locale.ROOT, " +- %.3f", arc.radiusSd().getAsDouble())
+                            ? String.format(
+                                    Locale.ROOT, " +- %.3f", arc.radiusSd().getAsDouble())
                             : "",
                     arc.arcLength(),
                     1000 * arc.rms(),

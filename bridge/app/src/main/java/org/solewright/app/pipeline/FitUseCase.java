@@ -162,7 +162,8 @@ public final class FitUseCase {
         }
         List<Finding> shared = List.copyOf(findings);
         for (Finding f : shared) {
-            boolean isStanding = f.severity() == Severity.ERROR && !failedTrials(subject).contains(f.where());
+            boolean isStanding =
+                    f.severity() == Severity.ERROR && !failedTrials(subject).contains(f.where());
             if (isStanding) {
                 throw new UseCaseException(
                         UseCaseException.Kind.INPUT,
@@ -226,7 +227,10 @@ public final class FitUseCase {
         }
         Optional<Vec3> platforms = sum.norm() > 0.5 ? Optional.of(sum.unit()) : stood.platformUp();
         // The standing trial's floor is level in its own laboratory axes: small tilts of platform corners are not up.
-        return platforms.map(p -> stood.up().filter(s -> s.dot(p) > Math.cos(Math.toRadians(2))).orElse(p))
+        return platforms
+                .map(p -> stood.up()
+                        .filter(s -> s.dot(p) > Math.cos(Math.toRadians(2)))
+                        .orElse(p))
                 .or(stood::up)
                 .orElseThrow(() -> new UseCaseException(
                         UseCaseException.Kind.INPUT,
@@ -287,7 +291,8 @@ public final class FitUseCase {
         return sides.stream()
                 .map(s -> StandingModel.build(posture, settings(mass), s))
                 .filter(StandingOutcome.Built.class::isInstance)
-                .mapToDouble(o -> ((StandingOutcome.Built) o).limb().limbLength().value())
+                .mapToDouble(
+                        o -> ((StandingOutcome.Built) o).limb().limbLength().value())
                 .average();
     }
 
@@ -304,11 +309,9 @@ public final class FitUseCase {
         return ((StandingOutcome.Built) outcome).limb();
     }
 
-    private WalkingRollOver rollOver(
-            StandingLimb limb, GaitSubject subject, StandingTrial stood, Quantity mass) {
+    private WalkingRollOver rollOver(StandingLimb limb, GaitSubject subject, StandingTrial stood, Quantity mass) {
         boolean isHuman = request.gait().population() != Population.OTHER;
-        WalkingRollOver rollOver =
-                new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
+        WalkingRollOver rollOver = new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
         Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>(subject.tracksByTrial());
         Map<String, List<RigidFit>> fits = new LinkedHashMap<>();
         List<Double> ankleGaps = new ArrayList<>();
@@ -443,10 +446,7 @@ public final class FitUseCase {
     }
 
     private FootModel model(
-            StandingLimb limb,
-            Rolling rolling,
-            Optional<Quantity> effectiveFootLength,
-            Set<SegmentName> observed) {
+            StandingLimb limb, Rolling rolling, Optional<Quantity> effectiveFootLength, Set<SegmentName> observed) {
         FootModel standing = limb.model(request.version(), sources, Cautions.LINES);
         return new FootModel(
                 standing.side(),

@@ -222,7 +222,13 @@ final class GaitSubject {
                         "map at least one: the walking direction and speed come from the pelvis"));
         checkTravel(r, pelvis);
         return new WalkingTrial(
-                trialName(r), r.rate(), r.time(0), up(r, standingUp), new WalkingTrial.Track(pelvis), feet, r.platforms());
+                trialName(r),
+                r.rate(),
+                r.time(0),
+                up(r, standingUp),
+                new WalkingTrial.Track(pelvis),
+                feet,
+                r.platforms());
     }
 
     /** A walk needs a pelvis that is seen and goes somewhere. */

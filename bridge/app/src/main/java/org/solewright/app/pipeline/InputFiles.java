@@ -32,8 +32,7 @@ final class InputFiles {
         T read(Path file) throws IOException, FormatException;
     }
 
-    static List<Recording> recordings(
-            List<Path> files, String role, List<SourceFile> sources, List<Finding> findings)
+    static List<Recording> recordings(List<Path> files, String role, List<SourceFile> sources, List<Finding> findings)
             throws UseCaseException, FormatException {
         List<Recording> recordings = new ArrayList<>();
         for (Path file : files) {
@@ -72,8 +71,7 @@ final class InputFiles {
 
     static <T> T read(Path file, Reader<T> reader) throws UseCaseException, FormatException {
         if (Files.isDirectory(file)) {
-            throw new UseCaseException(
-                    UseCaseException.Kind.INPUT, file.toString(), "is a folder", "give a file");
+            throw new UseCaseException(UseCaseException.Kind.INPUT, file.toString(), "is a folder", "give a file");
         }
         try {
             return reader.read(file);

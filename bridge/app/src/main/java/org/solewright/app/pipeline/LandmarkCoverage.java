@@ -75,8 +75,7 @@ final class LandmarkCoverage {
     static void requireStanding(LandmarkMap map, StandingTrial standing, Side side) throws UseCaseException {
         for (Landmark landmark : NEEDED_STANDING) {
             if (standing.landmark(landmark, side).isEmpty()) {
-                throw missing(
-                        map, standing.tracks().get(0).recording(), side, landmark, "standing recording");
+                throw missing(map, standing.tracks().get(0).recording(), side, landmark, "standing recording");
             }
         }
     }
@@ -92,7 +91,8 @@ final class LandmarkCoverage {
 
     private static UseCaseException missing(
             LandmarkMap map, Recording recording, Side side, Landmark landmark, String what) {
-        List<String> recorded = recording.points().stream().map(PointTrack::label).toList();
+        List<String> recorded =
+                recording.points().stream().map(PointTrack::label).toList();
         Optional<LabelPattern> named = map.patterns(landmark, side).stream().findFirst();
         String found = named.map(p -> recorded.stream().anyMatch(p::matches)
                         ? "label '" + p.text() + "' is never seen in it"
@@ -108,10 +108,13 @@ final class LandmarkCoverage {
     private static String suggestion(String text, Iterable<String> recorded) {
         List<String> words = new ArrayList<>();
         recorded.forEach(words::add);
-        return Spelling.nearest(text, words).map(w -> "; did you mean '" + w + "'?").orElse("");
+        return Spelling.nearest(text, words)
+                .map(w -> "; did you mean '" + w + "'?")
+                .orElse("");
     }
 
     private static String name(LandmarkMap.Entry entry) {
-        return entry.side().map(s -> s.word() + " ").orElse("") + entry.landmark().word();
+        return entry.side().map(s -> s.word() + " ").orElse("")
+                + entry.landmark().word();
     }
 }

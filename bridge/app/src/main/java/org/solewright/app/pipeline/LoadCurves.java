@@ -22,8 +22,9 @@ final class LoadCurves {
                 number++;
                 for (int i = 0; i < POINTS; i++) {
                     double time = stance.start() + i * stance.duration() / (POINTS - 1);
-                    double value =
-                            pass.load(stance, time).map(Pass.StanceLoad::vertical).orElse(Double.NaN);
+                    double value = pass.load(stance, time)
+                            .map(Pass.StanceLoad::vertical)
+                            .orElse(Double.NaN);
                     rows.add(new CurveRow(
                             stance.trial(),
                             Integer.toString(number),

@@ -97,7 +97,8 @@ final class ModelLimb {
     }
 
     private boolean hasToe() {
-        return landmark(Landmark.TOE_TIP).isPresent() || landmark(Landmark.HALLUX_TIP).isPresent();
+        return landmark(Landmark.TOE_TIP).isPresent()
+                || landmark(Landmark.HALLUX_TIP).isPresent();
     }
 
     private Optional<Vec3> heads() {
@@ -112,8 +113,9 @@ final class ModelLimb {
             return toe;
         }
         Optional<Vec3> heel = landmark(Landmark.CALCANEUS_POSTERIOR);
-        return model.subject().footLength().flatMap(length -> heel.flatMap(h ->
-                heads.map(m -> new Vec3(h.x() + length.value(), m.y(), m.z()))));
+        return model.subject()
+                .footLength()
+                .flatMap(length -> heel.flatMap(h -> heads.map(m -> new Vec3(h.x() + length.value(), m.y(), m.z()))));
     }
 
     /** Hip to a place of the foot with the heel raised: hip straight above the ankle, the foot turned down. */

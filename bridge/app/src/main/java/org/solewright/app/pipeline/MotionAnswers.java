@@ -50,8 +50,8 @@ final class MotionAnswers {
                             + " samples, expected equal counts");
         }
         tooFew(force.length / 3);
-        CollisionMeasures measures = CollisionMeasures.of(
-                force, velocity, in.positive("timeStep"), in.positive("mass"), in.gravity());
+        CollisionMeasures measures =
+                CollisionMeasures.of(force, velocity, in.positive("timeStep"), in.positive("mass"), in.gravity());
         ObjectNode out = object();
         put(out, "collisionAngle", measures.collisionAngle());
         put(out, "forceAngle", measures.forceAngle());
@@ -80,11 +80,7 @@ final class MotionAnswers {
 
     private static ObjectNode synthetic(QuestionInputs in) throws CallerError, LimitException {
         VaultingStep step = VaultingStep.given(
-                in.number("segments"),
-                in.number("stepLength"),
-                in.number("limbLength"),
-                in.number("footLength", 0),
-                1);
+                in.number("segments"), in.number("stepLength"), in.number("limbLength"), in.number("footLength", 0), 1);
         WalkParameters walk = new WalkParameters(
                 in.positive("mass"),
                 step.limbLength(),

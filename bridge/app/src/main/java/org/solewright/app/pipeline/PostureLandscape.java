@@ -111,7 +111,9 @@ public final class PostureLandscape {
                     "the foot is taken out of the limb length (share 1); --series-share 0 for a foot that lies flat"));
         }
         findings.add(Finding.note(
-                "postures.index-later", "", "the index_ columns are empty: this version does not compute the cost index"));
+                "postures.index-later",
+                "",
+                "the index_ columns are empty: this version does not compute the cost index"));
         Found<List<LandscapeRow>> found = Landscape.of(
                 limb.leg(),
                 limb.foot(),
@@ -177,7 +179,9 @@ public final class PostureLandscape {
     }
 
     private static double[] steps(Request request, double leg) throws UseCaseException {
-        boolean range = request.from().isPresent() || request.to().isPresent() || request.by().isPresent();
+        boolean range = request.from().isPresent()
+                || request.to().isPresent()
+                || request.by().isPresent();
         if (!request.steps().isEmpty()) {
             if (range) {
                 throw usage("--step", "given beside --from, --to or --by, expected one or the other");
@@ -209,13 +213,11 @@ public final class PostureLandscape {
 
     private static void check(String option, double value, String unit) throws UseCaseException {
         if (!(value > 0 && value <= MOST)) {
-            throw usage(
-                    option, value + " " + unit + ", expected more than 0 " + unit + " and no more than " + MOST);
+            throw usage(option, value + " " + unit + ", expected more than 0 " + unit + " and no more than " + MOST);
         }
     }
 
     private static UseCaseException usage(String option, String message) {
-        return new UseCaseException(
-                UseCaseException.Kind.USAGE, option, message, "see 'solewright postures --help'");
+        return new UseCaseException(UseCaseException.Kind.USAGE, option, message, "see 'solewright postures --help'");
     }
 }

@@ -26,7 +26,8 @@ final class PowerCurves {
     private static void add(List<CurveRow> rows, Step step, Stance stance, String curve, Series power) {
         for (int i = 0; i < POINTS; i++) {
             double time = stance.start() + i * stance.duration() / (POINTS - 1);
-            boolean isKnown = time >= step.loads().knownFrom() && time <= step.loads().knownTo();
+            boolean isKnown =
+                    time >= step.loads().knownFrom() && time <= step.loads().knownTo();
             double value = power.at(Math.min(time, power.end()));
             rows.add(new CurveRow(
                     stance.trial(),

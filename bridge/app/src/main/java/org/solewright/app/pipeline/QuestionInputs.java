@@ -164,8 +164,7 @@ final class QuestionInputs {
             JsonNode entry = list(list.get(row), where);
             if (entry.size() != columns) {
                 throw new CallerError(
-                        CallerError.Code.WRONG_TYPE,
-                        where + " has " + entry.size() + " numbers, expected " + columns);
+                        CallerError.Code.WRONG_TYPE, where + " has " + entry.size() + " numbers, expected " + columns);
             }
             for (int column = 0; column < columns; column++) {
                 out[at++] = number(entry.get(column), where);

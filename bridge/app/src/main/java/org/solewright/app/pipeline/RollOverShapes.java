@@ -59,7 +59,11 @@ final class RollOverShapes {
             Optional<Vec3> a = ankle.at(frame);
             Optional<Vec3> u = upper.at(frame);
             if (load.isPresent() && a.isPresent() && u.isPresent() && load.get().vertical() > leastLoad) {
-                collector.add(load.get().centreOfPressure(), a.get(), u.get(), load.get().vertical());
+                collector.add(
+                        load.get().centreOfPressure(),
+                        a.get(),
+                        u.get(),
+                        load.get().vertical());
             }
         }
         return Optional.of(collector.path());

@@ -37,8 +37,7 @@ final class RollingAnswers {
     }
 
     private static ObjectNode arc(QuestionInputs in) throws CallerError, LimitException {
-        RollingFoot foot =
-                RollingFoot.full(in.number("stepLength"), in.number("limbLength"), in.number("arcRadius"));
+        RollingFoot foot = RollingFoot.full(in.number("stepLength"), in.number("limbLength"), in.number("arcRadius"));
         ObjectNode out = object();
         whole(out, foot);
         return out;
@@ -62,10 +61,7 @@ final class RollingAnswers {
 
     private static ObjectNode shortArc(QuestionInputs in) throws CallerError, LimitException {
         RollingFoot foot = RollingFoot.shortArc(
-                in.number("stepLength"),
-                in.number("limbLength"),
-                in.number("arcRadius"),
-                in.number("arcHalfAngle"));
+                in.number("stepLength"), in.number("limbLength"), in.number("arcRadius"), in.number("arcHalfAngle"));
         ObjectNode out = object();
         if (!foot.truncated()) {
             whole(out, foot);
@@ -116,10 +112,7 @@ final class RollingAnswers {
         double factor = step.factor(WorkForm.PUSH_OFF);
         ObjectNode out = object();
         put(out, "stepFactor", factor);
-        putOrCode(
-                out,
-                "rollingRatio",
-                () -> RollingFoot.equivalentRatio(step.stepLength(), step.limbLength(), factor));
+        putOrCode(out, "rollingRatio", () -> RollingFoot.equivalentRatio(step.stepLength(), step.limbLength(), factor));
         put(out, "rollingRatioSmallAngle", RollingFoot.equivalentRatioSmallAngle(step));
         return out;
     }

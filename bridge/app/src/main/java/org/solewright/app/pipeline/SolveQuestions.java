@@ -11,7 +11,6 @@ import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -189,7 +188,8 @@ public final class SolveQuestions {
             refuse(answer, e.limit().name(), String.valueOf(e.getMessage()));
         } catch (IllegalArgumentException e) {
             refuse(answer, CallerError.Code.WRONG_TYPE.name(), String.valueOf(e.getMessage()));
-            refused.add("question " + name(question, number) + ": " + CallerError.Code.WRONG_TYPE + ": " + e.getMessage());
+            refused.add(
+                    "question " + name(question, number) + ": " + CallerError.Code.WRONG_TYPE + ": " + e.getMessage());
         }
         if (!ignored.isEmpty()) {
             ArrayNode names = answer.putArray("ignored");
@@ -248,10 +248,8 @@ public final class SolveQuestions {
         JsonNode inputs = question.get("inputs");
         if (inputs != null && !inputs.isNull() && !inputs.isObject()) {
             throw new CallerError(
-                    CallerError.Code.WRONG_TYPE,
-                    "'inputs' is " + QuestionInputs.kind(inputs) + ", expected an object");
+                    CallerError.Code.WRONG_TYPE, "'inputs' is " + QuestionInputs.kind(inputs) + ", expected an object");
         }
-        return new QuestionInputs(
-                inputs == null || inputs.isNull() ? JsonNodeFactory.instance.objectNode() : inputs);
+        return new QuestionInputs(inputs == null || inputs.isNull() ? JsonNodeFactory.instance.objectNode() : inputs);
     }
 }

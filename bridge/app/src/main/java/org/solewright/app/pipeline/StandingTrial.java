@@ -31,9 +31,8 @@ final class StandingTrial {
 
     /** Mean position of a landmark over all standing recordings that have it. */
     Optional<Vec3> landmark(Landmark landmark, Side side) {
-        return pooled(tracks.stream()
-                .flatMap(t -> t.mean(landmark, side).stream())
-                .toList());
+        return pooled(
+                tracks.stream().flatMap(t -> t.mean(landmark, side).stream()).toList());
     }
 
     /** Mean position of a label over all standing recordings that have it. */
@@ -110,8 +109,9 @@ final class StandingTrial {
             for (Side side : Side.values()) {
                 SidedLandmark key = new SidedLandmark(landmark, side);
                 if (landmark.isCluster()) {
-                    List<Vec3> points =
-                            labels(landmark, side).stream().flatMap(l -> label(l).stream()).toList();
+                    List<Vec3> points = labels(landmark, side).stream()
+                            .flatMap(l -> label(l).stream())
+                            .toList();
                     if (!points.isEmpty()) {
                         clusters.put(key, points);
                     }

@@ -118,8 +118,8 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
                 + ", lengths in " + (file.unit().isEmpty() ? "an unknown unit" : file.unit()));
         points(lines);
         if (file.analog().channels() > 0) {
-            lines.add("  " + file.analog().channels() + " analog channels at " + number(file.analog().rate()) + " Hz: "
-                    + listed(file.analogLabels()));
+            lines.add("  " + file.analog().channels() + " analog channels at "
+                    + number(file.analog().rate()) + " Hz: " + listed(file.analogLabels()));
         }
         for (C3dPlatform p : file.platforms()) {
             lines.add(platform(p));
@@ -135,8 +135,8 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
         }
         lines.add("  " + (findings().isEmpty() ? "no findings" : "findings:"));
         for (Finding f : findings()) {
-            lines.add("    " + f.severity().word() + " " + f.code() + (f.where().isEmpty() ? "" : " (" + f.where() + ")")
-                    + ": " + f.message());
+            lines.add("    " + f.severity().word() + " " + f.code()
+                    + (f.where().isEmpty() ? "" : " (" + f.where() + ")") + ": " + f.message());
         }
         return lines;
     }

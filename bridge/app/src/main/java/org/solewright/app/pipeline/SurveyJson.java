@@ -44,7 +44,10 @@ public final class SurveyJson {
         platforms(root.putArray("platforms"), survey);
         ArrayNode events = root.putArray("events");
         for (RecordedEvent e : survey.file().events()) {
-            events.addObject().put("label", e.label()).put("context", e.context()).put("time_s", e.time());
+            events.addObject()
+                    .put("label", e.label())
+                    .put("context", e.context())
+                    .put("time_s", e.time());
         }
         findings(root.putArray("findings"), survey.findings());
         return text(root);

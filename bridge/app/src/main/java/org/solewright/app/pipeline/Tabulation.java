@@ -205,7 +205,8 @@ public final class Tabulation {
         }
         for (RecordedEvent e : file.events()) {
             out.write(Double.toString(e.time()));
-            out.write("," + quoted(e.context()) + "," + quoted(e.label()) + "," + e.source().word());
+            out.write("," + quoted(e.context()) + "," + quoted(e.label()) + ","
+                    + e.source().word());
             end(out);
         }
     }

@@ -23,8 +23,7 @@ import org.solewright.domain.cost.WorkForm;
 /** The questions {@code transition.*}. */
 final class TransitionAnswers {
 
-    private static final List<WorkForm> EXACT =
-            List.of(WorkForm.NO_PUSH, WorkForm.PUSH_OFF, WorkForm.SIMULTANEOUS);
+    private static final List<WorkForm> EXACT = List.of(WorkForm.NO_PUSH, WorkForm.PUSH_OFF, WorkForm.SIMULTANEOUS);
 
     private TransitionAnswers() {}
 
@@ -94,11 +93,12 @@ final class TransitionAnswers {
         }
         List<Costed> steps = new ArrayList<>();
         for (WorkForm form : in.workForms()) {
-            VaultingStep step = switch (rule) {
-                case GIVEN -> VaultingStep.given(segments, stepLength, limbLength, foot, share);
-                case EQUAL -> VaultingStep.equalVaults(segments, stepLength, limbLength, share);
-                case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, limbLength, share);
-            };
+            VaultingStep step =
+                    switch (rule) {
+                        case GIVEN -> VaultingStep.given(segments, stepLength, limbLength, foot, share);
+                        case EQUAL -> VaultingStep.equalVaults(segments, stepLength, limbLength, share);
+                        case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, limbLength, share);
+                    };
             steps.add(new Costed(form, step, step.factor(form)));
         }
         double speed = in.number("speed");
@@ -158,13 +158,12 @@ final class TransitionAnswers {
     }
 
     /** Each of the two steps has its code in its place where it alone has no value. */
-    private static ObjectNode equalCost(
-            WorkForm form, double segments, double limbLength, double share, double factor) throws LimitException {
+    private static ObjectNode equalCost(WorkForm form, double segments, double limbLength, double share, double factor)
+            throws LimitException {
         ObjectNode out = object();
         Optional<LimitException> failed = Optional.empty();
         try {
-            describe(
-                    out.putObject("equal"), EqualCost.equalVaults(form, segments, limbLength, share, factor));
+            describe(out.putObject("equal"), EqualCost.equalVaults(form, segments, limbLength, share, factor));
         } catch (LimitException e) {
             failed = Optional.of(e);
             out.put("equal", e.limit().name());
@@ -226,7 +225,8 @@ final class TransitionAnswers {
         putOrCode(
                 out,
                 "equalStepFactor",
-                () -> VaultingStep.equalVaults(segments, stepLength, limbLength, share).factor(form));
+                () -> VaultingStep.equalVaults(segments, stepLength, limbLength, share)
+                        .factor(form));
         Answerer.put(
                 out,
                 "optimumFootLengthSmallAngle",
@@ -237,10 +237,7 @@ final class TransitionAnswers {
                 () -> OptimumFoot.of(WorkForm.NO_PUSH_SMALL_ANGLE, segments, stepLength, limbLength, share)
                         .factor(WorkForm.NO_PUSH_SMALL_ANGLE));
         try {
-            putOrNull(
-                    out,
-                    "crossoverSmallAngle",
-                    Crossover.equalVaults(WorkForm.NO_PUSH_SMALL_ANGLE, segments, share));
+            putOrNull(out, "crossoverSmallAngle", Crossover.equalVaults(WorkForm.NO_PUSH_SMALL_ANGLE, segments, share));
         } catch (LimitException e) {
             out.put("crossoverSmallAngle", e.limit().name());
         }

@@ -25,7 +25,8 @@ final class TransitionSummary {
         List<TransitionRow> out = new ArrayList<>();
         Map<String, List<TransitionRow>> byTrial = new LinkedHashMap<>();
         for (TransitionRow r : rows) {
-            byTrial.computeIfAbsent(r.text("trial").orElse(""), k -> new ArrayList<>()).add(r);
+            byTrial.computeIfAbsent(r.text("trial").orElse(""), k -> new ArrayList<>())
+                    .add(r);
         }
         byTrial.forEach((trial, of) -> {
             out.addAll(of);

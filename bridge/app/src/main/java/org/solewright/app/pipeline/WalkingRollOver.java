@@ -54,8 +54,8 @@ final class WalkingRollOver {
             if (stance.side() != limb.side() || !stance.allows(Use.ROLL_OVER)) {
                 continue;
             }
-            Optional<RollOverPath> shank = RollOverShapes.of(
-                    pass, stance, f -> motion.ankle(limb, f), f -> motion.knee(limb, f), leastLoad);
+            Optional<RollOverPath> shank =
+                    RollOverShapes.of(pass, stance, f -> motion.ankle(limb, f), f -> motion.knee(limb, f), leastLoad);
             if (shank.isEmpty() || !RollOver.isLongEnough(shank.get())) {
                 findings.add(Finding.warning(
                         "rolling.stance-unused",
@@ -166,7 +166,10 @@ final class WalkingRollOver {
             for (int i = 0; i < OUTLINE_POINTS; i++) {
                 double at = i * (s.foot().size() - 1.0) / (OUTLINE_POINTS - 1);
                 int k = Math.min((int) at, s.foot().size() - 2);
-                Vec3 p = s.foot().get(k).times(1 - (at - k)).plus(s.foot().get(k + 1).times(at - k));
+                Vec3 p = s.foot()
+                        .get(k)
+                        .times(1 - (at - k))
+                        .plus(s.foot().get(k + 1).times(at - k));
                 x[i] += p.x();
                 y[i] += p.y();
             }
@@ -184,8 +187,8 @@ final class WalkingRollOver {
     /** Pivots of the stances whose limb path dwells; empty where any of them rolls on. */
     List<LimbPivots> limbPivots() {
         double scale = Math.sqrt(limb.limbLength().value() / REFERENCE_LIMB);
-        double dwellSpeed =
-                DWELL_SPEED * Math.sqrt(GaitSettings.STANDARD_GRAVITY * limb.limbLength().value());
+        double dwellSpeed = DWELL_SPEED
+                * Math.sqrt(GaitSettings.STANDARD_GRAVITY * limb.limbLength().value());
         List<LimbPivots> found = new ArrayList<>();
         for (Shapes s : shapes) {
             if (s.limb().isEmpty() || !s.stance().allows(Use.PIVOTS)) {
@@ -196,8 +199,7 @@ final class WalkingRollOver {
             if (dwells.size() < 2) {
                 return List.of();
             }
-            double[] weights =
-                    PathFit.dwellWeights(path.x(), path.y(), path.load(), 1 / path.rate(), dwellSpeed);
+            double[] weights = PathFit.dwellWeights(path.x(), path.y(), path.load(), 1 / path.rate(), dwellSpeed);
             FittedPath pivots = PathFit.pivots(path.x(), path.y(), weights, dwells.size());
             if (!areApart(pivots, path, dwells)) {
                 return List.of();
@@ -253,7 +255,8 @@ final class WalkingRollOver {
                 for (int i = first; i <= last; i++) {
                     mean = mean.plus(p.shapes().foot().get(i).times(1.0 / (last - first + 1)));
                 }
-                double percent = 100 / p.shapes().shank().rate() / p.shapes().stance().duration();
+                double percent =
+                        100 / p.shapes().shank().rate() / p.shapes().stance().duration();
                 along += (mean.x() - heel.x()) / found.size();
                 height += mean.y() / found.size();
                 from += first * percent / found.size();
@@ -268,8 +271,8 @@ final class WalkingRollOver {
         return limb.landmarks().stream()
                 .filter(l -> l.name().equals("calcaneus_posterior"))
                 .findFirst()
-                .flatMap(l -> Optional.ofNullable(limb.poses().get(l.segment()))
-                        .map(x -> x.transformPosition(l.position())))
+                .flatMap(l ->
+                        Optional.ofNullable(limb.poses().get(l.segment())).map(x -> x.transformPosition(l.position())))
                 .orElse(Vec3.ZERO);
     }
 

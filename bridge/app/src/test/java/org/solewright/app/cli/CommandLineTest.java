@@ -57,7 +57,12 @@ class CommandLineTest {
 
     private Called fit(String... more) {
         List<String> args = new java.util.ArrayList<>(List.of(
-                "fit", "--standing", at("standing.c3d"), "--walking", at("walking-1.c3d"), "--landmarks",
+                "fit",
+                "--standing",
+                at("standing.c3d"),
+                "--walking",
+                at("walking-1.c3d"),
+                "--landmarks",
                 at("landmarks.xml")));
         args.addAll(Arrays.asList(more));
         return call(args.toArray(String[]::new));
@@ -67,7 +72,9 @@ class CommandLineTest {
     void demoAgreesWithItsTruth() {
         // exact: the demo compares 27 numbers with the truth of their construction, at the tolerances of design 04 I6.
         assertThat(demonstrated.code()).as(demonstrated.err()).isZero();
-        assertThat(demonstrated.out()).contains("27 of 27 numbers agree with the truth").doesNotContain("OUT");
+        assertThat(demonstrated.out())
+                .contains("27 of 27 numbers agree with the truth")
+                .doesNotContain("OUT");
     }
 
     @Test
@@ -155,7 +162,9 @@ class CommandLineTest {
     @Test
     void postureCostTableHasTheFixedHead() throws IOException {
         String head = Files.readAllLines(demo.resolve("posture-cost.csv")).get(0);
-        assertThat(head).startsWith("trial,step,side,trailing_side,window,step_length_m,").contains(",push_off_J_sd,");
+        assertThat(head)
+                .startsWith("trial,step,side,trailing_side,window,step_length_m,")
+                .contains(",push_off_J_sd,");
         assertThat(Files.readString(demo.resolve("posture-cost.csv"))).contains("walking-1,1,left,right,step,");
     }
 
@@ -188,7 +197,9 @@ class CommandLineTest {
                     out.toString());
             assertThat(c.code()).as(bad + c.err()).isEqualTo(3);
             assertThat(c.errors()).as(bad).hasSize(1);
-            assertThat(c.err()).startsWith("solewright: ").contains(Path.of(bad).getFileName().toString());
+            assertThat(c.err())
+                    .startsWith("solewright: ")
+                    .contains(Path.of(bad).getFileName().toString());
             assertThat(out).doesNotExist();
         }
     }
@@ -197,7 +208,13 @@ class CommandLineTest {
     void unknownLandmarkIsRefusedWithTheWordThatWasMeant() throws IOException {
         Path map = changedMap("calcaneus_posterior", "calcaneus_posterio");
         Called c = call(
-                "fit", "--standing", at("standing.c3d"), "--walking", at("walking-1.c3d"), "--landmarks", map.toString());
+                "fit",
+                "--standing",
+                at("standing.c3d"),
+                "--walking",
+                at("walking-1.c3d"),
+                "--landmarks",
+                map.toString());
         assertThat(c.code()).isEqualTo(3);
         assertThat(c.errors()).hasSize(1);
         assertThat(c.err()).contains("calcaneus_posterio").contains("did you mean 'calcaneus_posterior'?");
@@ -207,10 +224,19 @@ class CommandLineTest {
     void labelOfARequiredLandmarkThatNoFileHasIsRefusedWithASuggestion() throws IOException {
         Path map = changedMap(">RHEE<", ">RHEEL<");
         Called c = call(
-                "fit", "--standing", at("standing.c3d"), "--walking", at("walking-1.c3d"), "--landmarks", map.toString());
+                "fit",
+                "--standing",
+                at("standing.c3d"),
+                "--walking",
+                at("walking-1.c3d"),
+                "--landmarks",
+                map.toString());
         assertThat(c.code()).isEqualTo(3);
         assertThat(c.errors()).hasSize(1);
-        assertThat(c.err()).contains("right calcaneus_posterior").contains("'RHEEL'").contains("did you mean 'RHEE'?");
+        assertThat(c.err())
+                .contains("right calcaneus_posterior")
+                .contains("'RHEEL'")
+                .contains("did you mean 'RHEE'?");
     }
 
     @Test
@@ -271,14 +297,7 @@ class CommandLineTest {
         C3dWriter.write(
                 file,
                 new Recording(
-                        "missed.c3d",
-                        walk.rate(),
-                        1,
-                        walk.frames(),
-                        walk.points(),
-                        unloaded,
-                        List.of(),
-                        List.of()));
+                        "missed.c3d", walk.rate(), 1, walk.frames(), walk.points(), unloaded, List.of(), List.of()));
         for (String command : List.of("fit", "appraise")) {
             List<String> args = new java.util.ArrayList<>(
                     List.of(command, "--walking", file.toString(), "--landmarks", at("landmarks.xml"), "--mass", "70"));
@@ -315,7 +334,13 @@ class CommandLineTest {
         Called c = fit("--out", file.resolve("below").toString());
         assertThat(c.code()).isEqualTo(4);
         assertThat(c.errors()).hasSize(1);
-        assertThat(call("tabulate", at("standing.c3d"), "--what", "points", "--out", file.resolve("x.csv").toString())
+        assertThat(call(
+                                "tabulate",
+                                at("standing.c3d"),
+                                "--what",
+                                "points",
+                                "--out",
+                                file.resolve("x.csv").toString())
                         .code())
                 .isEqualTo(4);
     }
@@ -326,7 +351,8 @@ class CommandLineTest {
         Files.createDirectories(contacts.getParent());
         Files.copy(demo.resolve("fit-contacts.csv"), contacts);
         byte[] before = Files.readAllBytes(contacts);
-        Called c = fit("--contacts", contacts.toString(), "--out", contacts.getParent().toString());
+        Called c = fit(
+                "--contacts", contacts.toString(), "--out", contacts.getParent().toString());
         assertThat(c.code()).isEqualTo(4);
         assertThat(c.err()).contains("is an input of this call");
         assertThat(Files.readAllBytes(contacts)).isEqualTo(before);

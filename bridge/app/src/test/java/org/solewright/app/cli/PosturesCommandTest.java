@@ -41,17 +41,20 @@ class PosturesCommandTest {
 
     @Test
     void oneStepHasARowPerSegmentsRuleAndForm() {
-        assertThat(run("--leg 0.9 --foot 0.2 --mass 70 --speed 1.25 --step 0.6")).isZero();
+        assertThat(run("--leg 0.9 --foot 0.2 --mass 70 --speed 1.25 --step 0.6"))
+                .isZero();
         List<String> lines = out.toString().lines().toList();
         assertThat(lines.get(0)).isEqualTo(HEADER);
         assertThat(lines).hasSize(1 + 7 * 3 * 5);
-        // independent: design's worked answer for N = 1, f = 0.2, D = 0.6, L = 0.9, v = 1.25, m = 70: 6.000434027777778 J
+        // independent: design's worked answer for N = 1, f = 0.2, D = 0.6, L = 0.9, v = 1.25, m = 70: 6.000434027777778
+        // J
         List<String> given = row("1,given,0.9,0.2,0.6,1.25,pushOff,");
         assertThat(Double.parseDouble(given.get(7))).isCloseTo(6.000434027777778, within(1e-12));
         // independent: N = 1, small angle and simultaneous, a = (0.7/0.9)^2: (f/(1-a))(1 + sqrt(1 - 2(1-a)))
         double b = 1 - 0.49 / 0.81;
         double crossover = 0.2 / b * (1 + Math.sqrt(1 - 2 * b));
-        assertThat(Double.parseDouble(row("1,given,0.9,0.2,0.6,1.25,simultaneous,").get(13)))
+        assertThat(Double.parseDouble(
+                        row("1,given,0.9,0.2,0.6,1.25,simultaneous,").get(13)))
                 .isCloseTo(crossover, within(1e-12));
         // design 04 A7: push crossover of one equal-vault segment 0.6202041029 L
         assertThat(Double.parseDouble(row("1,equal,0.9,0.3,0.6,1.25,pushOff,").get(13)))
@@ -66,7 +69,8 @@ class PosturesCommandTest {
         assertThat(run("--leg 0.9 --foot 0.2 --mass 70 --speed 1.25")).isZero();
         assertThat(out.toString().lines()).hasSize(1 + 7 * 3 * 5 * 17);
         out.getBuffer().setLength(0);
-        assertThat(run("--leg 0.9 --foot 0.7 --mass 70 --speed 1.25 --from 0.6 --to 0.8 --by 0.1")).isZero();
+        assertThat(run("--leg 0.9 --foot 0.7 --mass 70 --speed 1.25 --from 0.6 --to 0.8 --by 0.1"))
+                .isZero();
         assertThat(out.toString().lines()).hasSize(1 + 7 * 3 * 5 * 3);
         assertThat(row("1,given,0.9,0.7,0.6,1.25,pushOff").get(7)).isEmpty();
         assertThat(err.toString()).contains("STEP_NOT_LONGER_THAN_FOOT");
@@ -75,7 +79,8 @@ class PosturesCommandTest {
     @Test
     void tableGoesToAFile() throws IOException {
         Path file = folder.resolve("landscape.csv");
-        assertThat(run("--leg 0.9 --foot 0.2 --mass 70 --speed 1.25 --step 0.6 --out " + file)).isZero();
+        assertThat(run("--leg 0.9 --foot 0.2 --mass 70 --speed 1.25 --step 0.6 --out " + file))
+                .isZero();
         assertThat(Files.readString(file)).startsWith(HEADER + "\n");
         assertThat(out.toString()).isEmpty();
     }

@@ -60,8 +60,7 @@ class SolveCommandTest {
         double work = (inner / (4 - inner) + last / (4 - last)) * 70 * 1.25 * 1.25 / 2;
         JsonNode push = a.get("outputs").get("pushOff");
         assertThat(push.get("workPerStep").asDouble()).isCloseTo(work, within(1e-13));
-        assertThat(push.get("costOfTransport").asDouble())
-                .isCloseTo(work / (70 * 9.80665 * 0.6), within(1e-15));
+        assertThat(push.get("costOfTransport").asDouble()).isCloseTo(work / (70 * 9.80665 * 0.6), within(1e-15));
     }
 
     @Test
@@ -77,7 +76,8 @@ class SolveCommandTest {
 
     @Test
     void geometryIsTestedBeforeMissingSpeed() throws IOException {
-        assertThat(solve(String.format(STEP, GEOMETRY + ", \"footLength\": 0.7"))).isZero();
+        assertThat(solve(String.format(STEP, GEOMETRY + ", \"footLength\": 0.7")))
+                .isZero();
         assertThat(answer(0).get("outputs").get("error").asText()).isEqualTo("STEP_NOT_LONGER_THAN_FOOT");
         assertThat(answer(0).get("outputs").get("message").asText()).contains("0.6", "0.7");
         assertThat(err.toString()).isEmpty();
@@ -147,8 +147,15 @@ class SolveCommandTest {
         StringBuilder records = new StringBuilder("[");
         for (String a : numbers) {
             for (String b : numbers) {
-                for (String question : new String[] {"transition.step", "rolling.arc", "rolling.short-arc",
-                    "rolling.equivalent-arc", "transition.equal-cost", "transition.series-share", "trial.synthetic"}) {
+                for (String question : new String[] {
+                    "transition.step",
+                    "rolling.arc",
+                    "rolling.short-arc",
+                    "rolling.equivalent-arc",
+                    "transition.equal-cost",
+                    "transition.series-share",
+                    "trial.synthetic"
+                }) {
                     records.append(records.length() > 1 ? "," : "")
                             .append(String.format(
                                     "{\"question\": \"%s\", \"inputs\": {\"segments\": 2, \"stepLength\": %s,"
@@ -167,19 +174,21 @@ class SolveCommandTest {
 
     @Test
     void degeneratePointsHaveACodeInTheirPlace() throws IOException {
-        solve("[{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[0, 0], [1, 1]]}},"
-                + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[0, 0], [1, 1], [2, 2], [3, 3]]}},"
-                + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 1], [1, 1], [1, 1]]}},"
-                + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 0], [0, 1], [-1, 0]]}},"
-                + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 0], [0, 1], [-1]]}},"
-                + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1e59, 0], [0, 1e59], [-1e59, 1], [3, 4]]}}]");
+        solve(
+                "[{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[0, 0], [1, 1]]}},"
+                        + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[0, 0], [1, 1], [2, 2], [3, 3]]}},"
+                        + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 1], [1, 1], [1, 1]]}},"
+                        + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 0], [0, 1], [-1, 0]]}},"
+                        + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1, 0], [0, 1], [-1]]}},"
+                        + "{\"question\": \"fit.circle\", \"inputs\": {\"points\": [[1e59, 0], [0, 1e59], [-1e59, 1], [3, 4]]}}]");
         assertThat(answer(0).get("outputs").get("error").asText()).isEqualTo("TOO_FEW_POINTS");
         assertThat(answer(1).get("outputs").get("geometric").asText()).isEqualTo("NO_SOLUTION");
         assertThat(answer(2).get("outputs").get("kasa").asText()).isEqualTo("NO_SOLUTION");
         // exact: unit circle; three points leave nothing to judge the scatter by
         assertThat(answer(3).get("outputs").get("geometric").get("radius").asDouble())
                 .isCloseTo(1, within(1e-12));
-        assertThat(answer(3).get("outputs").get("geometric").get("sigma").asText()).isEqualTo("TOO_FEW_POINTS");
+        assertThat(answer(3).get("outputs").get("geometric").get("sigma").asText())
+                .isEqualTo("TOO_FEW_POINTS");
         assertThat(answer(4).get("outputs").get("error").asText()).isEqualTo("WRONG_TYPE");
         assertThat(out.toString()).doesNotContain("\"NaN\"").doesNotContain("\"Infinity\"");
     }
@@ -219,7 +228,8 @@ class SolveCommandTest {
         assertThat(solve("[]", "--out", target.toString())).isZero();
         assertThat(Files.readString(target, StandardCharsets.UTF_8)).isEqualTo("[]\n");
         assertThat(out.toString()).isEmpty();
-        assertThat(solve("[]", "--out", folder.resolve("no/such/answers.json").toString())).isEqualTo(4);
+        assertThat(solve("[]", "--out", folder.resolve("no/such/answers.json").toString()))
+                .isEqualTo(4);
         assertThat(err.toString().lines()).hasSize(1);
         try (var files = Files.list(folder)) {
             assertThat(files).hasSize(2);

@@ -159,7 +159,8 @@ class RealRecordingTest {
         Map<String, Boolean> whole = fitted.contacts().stream()
                 .collect(java.util.stream.Collectors.toMap(
                         c -> c.trial().substring(c.trial().length() - 1)
-                                + c.side().word(), ContactRow::whole));
+                                + c.side().word(),
+                        ContactRow::whole));
         assertThat(whole)
                 .containsOnly(
                         Map.entry("1right", true),

@@ -73,8 +73,8 @@ class WorkedAnswersTest {
     void theWholeFileIsAnsweredInItsOrder() throws IOException, FormatException {
         Optional<JsonNode> checks = checks();
         assumeTrue(checks.isPresent(), "solver-checks.json is not beside the checkout: worked answers not compared");
-        SolveQuestions.Answers answers = new SolveQuestions()
-                .answer("checks", checks.get().toString().getBytes(StandardCharsets.UTF_8));
+        SolveQuestions.Answers answers =
+                new SolveQuestions().answer("checks", checks.get().toString().getBytes(StandardCharsets.UTF_8));
         JsonNode list = new JsonMapper().readTree(answers.json());
         assertThat(list).hasSameSizeAs(checks.get().get("records"));
         for (int i = 0; i < list.size(); i++) {
@@ -94,17 +94,24 @@ class WorkedAnswersTest {
         assertThat(answer.get("id")).isEqualTo(record.get("id"));
         assertThat(answer.get("question")).isEqualTo(record.get("question"));
         assertThat(answer.has("ignored")).isFalse();
-        compare("outputs", record.get("outputs"), answer.get("outputs"), record.get("tol").doubleValue());
+        compare(
+                "outputs",
+                record.get("outputs"),
+                answer.get("outputs"),
+                record.get("tol").doubleValue());
     }
 
     private static void compare(String where, JsonNode expected, JsonNode found, double tolerance) {
         assertThat(found).as(where).isNotNull();
         if (expected.isObject()) {
-            Iterator<Map.Entry<String, JsonNode>> fields =
-                    expected.properties().iterator();
+            Iterator<Map.Entry<String, JsonNode>> fields = expected.properties().iterator();
             while (fields.hasNext()) {
                 Map.Entry<String, JsonNode> e = fields.next();
-                compare(where + "." + e.getKey(), e.getValue(), found.get(e.getKey()), tolerance(e.getKey(), tolerance));
+                compare(
+                        where + "." + e.getKey(),
+                        e.getValue(),
+                        found.get(e.getKey()),
+                        tolerance(e.getKey(), tolerance));
             }
         } else if (expected.isArray()) {
             assertThat(found).as(where).hasSameSizeAs(expected);

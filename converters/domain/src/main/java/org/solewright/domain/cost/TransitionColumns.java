@@ -54,8 +54,7 @@ public final class TransitionColumns {
     private static final List<String> MEASURED_DISTAL =
             List.of("ankle_foot_work_pos_J", "ankle_foot_work_neg_J", "foot_work_pos_J", "foot_work_neg_J");
 
-    private static final List<String> AUDIT =
-            List.of("audit_force_residual_bw", "audit_energy_residual", "findings");
+    private static final List<String> AUDIT = List.of("audit_force_residual_bw", "audit_energy_residual", "findings");
 
     private static final List<String> DIMENSIONLESS =
             List.of("speed_nd", "step_length_nd", "push_off_nd", "collision_nd");
@@ -96,9 +95,7 @@ public final class TransitionColumns {
         if (TEXT.contains(column)) {
             return "";
         }
-        String name = column.endsWith(SD_SUFFIX)
-                ? column.substring(0, column.length() - SD_SUFFIX.length())
-                : column;
+        String name = column.endsWith(SD_SUFFIX) ? column.substring(0, column.length() - SD_SUFFIX.length()) : column;
         if (name.endsWith("_m_s")) {
             return "m/s";
         }

@@ -68,8 +68,8 @@ public record TransitionRow(Map<String, Cell> cells) {
             }
         }
         if (ordered.size() != cells.size()) {
-            throw new IllegalArgumentException("row with columns " + cells.keySet() + ", expected only those of the"
-                    + " posture-cost table");
+            throw new IllegalArgumentException(
+                    "row with columns " + cells.keySet() + ", expected only those of the" + " posture-cost table");
         }
         cells = Collections.unmodifiableMap(ordered);
     }
@@ -187,8 +187,8 @@ public record TransitionRow(Map<String, Cell> cells) {
 
         private static void check(String column, boolean words) {
             if (!TransitionColumns.ALL.contains(column) || TransitionColumns.TEXT.contains(column) != words) {
-                throw new IllegalArgumentException("'" + column + "' is not a column of " + (words ? "words" : "numbers")
-                        + " of the posture-cost table");
+                throw new IllegalArgumentException("'" + column + "' is not a column of "
+                        + (words ? "words" : "numbers") + " of the posture-cost table");
             }
         }
     }

@@ -59,8 +59,7 @@ public record WalkTruth(
      * @param duration s
      * @param impulsive what the impulsive models say
      */
-    public record Inner(double positive, double negative, double duration, Impulsive impulsive)
-            implements Transition {}
+    public record Inner(double positive, double negative, double duration, Impulsive impulsive) implements Transition {}
 
     /**
      * From the last pivot of one foot to the first of the next, both limbs loaded.

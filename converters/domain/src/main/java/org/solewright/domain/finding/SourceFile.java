@@ -17,8 +17,7 @@ public record SourceFile(String role, String path, String sha256) {
             throw new IllegalArgumentException("source file without role or name: role '" + role + "'");
         }
         if (sha256.length() != DIGITS || !sha256.chars().allMatch(SourceFile::isHexadecimal)) {
-            throw new IllegalArgumentException(
-                    "SHA-256 '" + sha256 + "', expected 64 lower-case hexadecimal digits");
+            throw new IllegalArgumentException("SHA-256 '" + sha256 + "', expected 64 lower-case hexadecimal digits");
         }
     }
 

@@ -49,7 +49,9 @@ public record FootModel(
             throw new IllegalArgumentException("a segment occurs twice in " + names);
         }
         for (Segment s : segments) {
-            s.parent().ifPresent(p -> checkSegment(names, p, "parent of " + s.name().word()));
+            s.parent()
+                    .ifPresent(
+                            p -> checkSegment(names, p, "parent of " + s.name().word()));
         }
         for (Joint j : joints) {
             checkSegment(names, j.proximal(), "joint " + j.name());

@@ -69,8 +69,7 @@ public record Joint(
         /** Checks that the direction has unit length. */
         public Axis {
             if (!(Math.abs(direction.norm() - 1) < TOLERANCE)) {
-                throw new IllegalArgumentException(
-                        "axis " + name + " has length " + direction.norm() + ", expected 1");
+                throw new IllegalArgumentException("axis " + name + " has length " + direction.norm() + ", expected 1");
             }
         }
     }

@@ -30,8 +30,7 @@ public record Segment(
     /** Checks that the mass is more than 0. */
     public Segment {
         if (!(mass.value() > 0)) {
-            throw new IllegalArgumentException(
-                    name.word() + " mass " + mass.value() + " kg, expected more than 0 kg");
+            throw new IllegalArgumentException(name.word() + " mass " + mass.value() + " kg, expected more than 0 kg");
         }
     }
 }

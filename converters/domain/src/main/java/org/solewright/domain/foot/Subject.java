@@ -37,8 +37,7 @@ public record Subject(
 
     private static void checkPositive(String name, Quantity q, String unit) {
         if (!(q.value() > 0)) {
-            throw new IllegalArgumentException(
-                    name + " " + q.value() + " " + unit + ", expected more than 0 " + unit);
+            throw new IllegalArgumentException(name + " " + q.value() + " " + unit + ", expected more than 0 " + unit);
         }
     }
 }

@@ -70,8 +70,7 @@ class FootValuesTest {
         assertRefused(
                 () -> model(List.of(foot), List.of()), "parent of foot names segment shank, which the model has not");
         assertRefused(
-                () -> model(
-                        List.of(shank), List.of(new LandmarkPosition("toe_tip", SegmentName.TOES, Vec3.ZERO))),
+                () -> model(List.of(shank), List.of(new LandmarkPosition("toe_tip", SegmentName.TOES, Vec3.ZERO))),
                 "landmark toe_tip names segment toes, which the model has not");
         assertRefused(() -> model(List.of(shank, shank), List.of()), "a segment occurs twice in [SHANK, SHANK]");
     }
@@ -81,8 +80,7 @@ class FootValuesTest {
         assertRefused(
                 () -> segment(SegmentName.FOOT, Optional.empty(), -0.2), "foot mass -0.2 kg, expected more than 0 kg");
         assertRefused(() -> subject(0), "body mass 0.0 kg, expected more than 0 kg");
-        assertRefused(
-                () -> Quantity.of(Double.NaN, Basis.MEASURED), "quantity NaN, expected a finite number");
+        assertRefused(() -> Quantity.of(Double.NaN, Basis.MEASURED), "quantity NaN, expected a finite number");
         assertRefused(() -> Quantity.of(1, Basis.MEASURED, -1), "standard deviation -1.0, expected 0 or more");
     }
 
@@ -104,8 +102,7 @@ class FootValuesTest {
                 () -> new Joint.Axis("a", new Vec3(0, 0, 2), Basis.MEASURED, OptionalDouble.empty()),
                 "axis a has length 2.0, expected 1");
         assertRefused(() -> new Joint.Range(1, 0, Basis.MEASURED), "joint range from 1.0 to 0.0 rad");
-        assertRefused(
-                () -> new Joint.Lock(0, 101, Basis.MEASURED), "lock over 101.0 % of stance, expected 0 to 100 %");
+        assertRefused(() -> new Joint.Lock(0, 101, Basis.MEASURED), "lock over 101.0 % of stance, expected 0 to 100 %");
     }
 
     @Test

@@ -40,8 +40,7 @@ class InertiaTensorTest {
         Vec3 p = new Vec3(0.3, -0.1, 0.2);
         Vec3 q = new Vec3(-0.2, 0.4, 0.1);
         InertiaTensor body = ofPoint(2, p).plus(ofPoint(1, q));
-        assertSame(
-                body.rotated(r), ofPoint(2, r.transformVector(p)).plus(ofPoint(1, r.transformVector(q))));
+        assertSame(body.rotated(r), ofPoint(2, r.transformVector(p)).plus(ofPoint(1, r.transformVector(q))));
     }
 
     @Test

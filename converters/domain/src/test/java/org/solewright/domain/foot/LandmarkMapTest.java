@@ -19,7 +19,9 @@ class LandmarkMapTest {
 
     private static LandmarkMap.Entry entry(Landmark landmark, Optional<Side> side, String... patterns) {
         return new LandmarkMap.Entry(
-                landmark, side, List.of(patterns).stream().map(LabelPattern::new).toList());
+                landmark,
+                side,
+                List.of(patterns).stream().map(LabelPattern::new).toList());
     }
 
     @Test
@@ -44,7 +46,8 @@ class LandmarkMapTest {
 
     @Test
     void manyStarsDoNotHang() {
-        assertThat(new LabelPattern("*a".repeat(30) + "b").matches("a".repeat(5000))).isFalse();
+        assertThat(new LabelPattern("*a".repeat(30) + "b").matches("a".repeat(5000)))
+                .isFalse();
     }
 
     @Test

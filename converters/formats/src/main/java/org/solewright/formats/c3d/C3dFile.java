@@ -87,7 +87,9 @@ public record C3dFile(
         long size = Files.size(file);
         if (size > Integer.MAX_VALUE - 8) {
             throw new FormatException(
-                    file.toString(), "has " + size + " bytes, more than the 2 GB that can be read", "split the recording");
+                    file.toString(),
+                    "has " + size + " bytes, more than the 2 GB that can be read",
+                    "split the recording");
         }
         return new C3dReader(file.toString(), name, Files.readAllBytes(file), withData).read();
     }

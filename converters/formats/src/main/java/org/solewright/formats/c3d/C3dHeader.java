@@ -39,16 +39,7 @@ record C3dHeader(
 
     static C3dHeader read(ByteCursor c) throws FormatException {
         return new C3dHeader(
-                c.u8(0),
-                c.u16(2),
-                c.u16(4),
-                c.u16(6),
-                c.u16(8),
-                c.f32(12),
-                c.u16(16),
-                c.u16(18),
-                c.f32(20),
-                events(c));
+                c.u8(0), c.u16(2), c.u16(4), c.u16(6), c.u16(8), c.f32(12), c.u16(16), c.u16(18), c.f32(20), events(c));
     }
 
     private static List<RecordedEvent> events(ByteCursor c) throws FormatException {

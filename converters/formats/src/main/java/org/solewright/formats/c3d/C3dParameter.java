@@ -18,8 +18,7 @@ public final class C3dParameter {
     private final double[] numbers;
     private final List<String> texts;
 
-    C3dParameter(
-            String group, String name, int width, List<Integer> dimensions, double[] numbers, List<String> texts) {
+    C3dParameter(String group, String name, int width, List<Integer> dimensions, double[] numbers, List<String> texts) {
         this.group = group;
         this.name = name;
         this.width = width;

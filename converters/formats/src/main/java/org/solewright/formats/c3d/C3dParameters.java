@@ -180,7 +180,9 @@ public final class C3dParameters {
 
         private static Finding cut(String name, int at) {
             return Finding.warning(
-                    "parameters.cut", "", "the value of " + name + " at byte " + at + " runs past its link; it is cut there");
+                    "parameters.cut",
+                    "",
+                    "the value of " + name + " at byte " + at + " runs past its link; it is cut there");
         }
 
         private C3dParameter value(String group, Raw raw) throws FormatException {

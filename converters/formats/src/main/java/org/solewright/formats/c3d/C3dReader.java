@@ -49,7 +49,8 @@ final class C3dReader {
         if (bytes.length < 2 || (bytes[1] & 0xff) != KEY) {
             throw new FormatException(
                     source,
-                    "is not a C3D file: byte 1 is " + (bytes.length < 2 ? "missing" : hex(bytes[1])) + ", expected 0x50",
+                    "is not a C3D file: byte 1 is " + (bytes.length < 2 ? "missing" : hex(bytes[1]))
+                            + ", expected 0x50",
                     "give a C3D file");
         }
         if (bytes.length < BLOCK) {
@@ -77,23 +78,21 @@ final class C3dReader {
                     "processor.unknown",
                     "",
                     "the processor byte is " + key + ", expected 84, 85 or 86; it is told from the header's numbers"));
-            return guess(c)
-                    .orElseThrow(() -> new FormatException(
-                            source,
-                            "is not a C3D file: the processor byte at offset " + (at + 3) + " is " + key
-                                    + ", expected 84, 85 or 86, and the header's numbers make no sense",
-                            "give a C3D file"));
+            return guess(c).orElseThrow(() -> new FormatException(
+                    source,
+                    "is not a C3D file: the processor byte at offset " + (at + 3) + " is " + key
+                            + ", expected 84, 85 or 86, and the header's numbers make no sense",
+                    "give a C3D file"));
         } else if (block > 0) {
             throw new FormatException(
                     source,
                     "ends at byte " + bytes.length + " before its parameter section at byte " + at,
                     "get a complete copy of the file");
         }
-        return guess(c)
-                .orElseThrow(() -> new FormatException(
-                        source,
-                        "has no parameter section and a header whose numbers make no sense",
-                        "get a complete copy of the file"));
+        return guess(c).orElseThrow(() -> new FormatException(
+                source,
+                "has no parameter section and a header whose numbers make no sense",
+                "get a complete copy of the file"));
     }
 
     /** The processor under which the header's data block, frames and rate make sense. */
@@ -198,8 +197,8 @@ final class C3dReader {
             findings.add(Finding.warning(
                     "analog.count",
                     "",
-                    "the header says " + words + " analog words per frame, the parameters " + channels
-                            + " channels of " + perFrame + " samples"));
+                    "the header says " + words + " analog words per frame, the parameters " + channels + " channels of "
+                            + perFrame + " samples"));
             if (misfit(c, other, frames) < misfit(c, layout, frames)) {
                 layout = other;
             }
@@ -352,7 +351,8 @@ final class C3dReader {
         int perPlatform = channels.filter(c -> !c.dimensions().isEmpty())
                 .map(c -> c.dimensions().get(0))
                 .orElse(0);
-        int count = (int) Math.min(Double.isNaN(used) ? 0 : used, types.map(C3dParameter::count).orElse(0));
+        int count = (int) Math.min(
+                Double.isNaN(used) ? 0 : used, types.map(C3dParameter::count).orElse(0));
         Map<String, C3dParameter> found = new HashMap<>();
         p.find(group, "CORNERS").ifPresent(v -> found.put("CORNERS", v));
         p.find(group, "ORIGIN").ifPresent(v -> found.put("ORIGIN", v));

@@ -27,7 +27,8 @@ final class C3dRecording {
                                     ? ", which makes the platforms 0.05 to 3 m wide"
                                     : "")));
         }
-        boolean isKnown = stated.isPresent() || LengthUnit.fitting(file.platforms()).isPresent();
+        boolean isKnown =
+                stated.isPresent() || LengthUnit.fitting(file.platforms()).isPresent();
         List<PlatformLoads> platforms = new PlatformReader(file, metres, isKnown, findings).loads();
         return new Recording(
                 file.name(),

@@ -58,7 +58,9 @@ public final class C3dWriter {
     }
 
     private static int perFrame(Recording r) {
-        if (r.frames() > MOST_FRAMES || r.points().size() > MOST || 6 * r.platforms().size() > MOST) {
+        if (r.frames() > MOST_FRAMES
+                || r.points().size() > MOST
+                || 6 * r.platforms().size() > MOST) {
             throw new IllegalArgumentException("recording of " + r.frames() + " frames, "
                     + r.points().size() + " points and " + r.platforms().size()
                     + " platforms, expected at most 65535, 255 and 42");
@@ -107,8 +109,7 @@ public final class C3dWriter {
 
     private ParameterWriter parameters(int dataBlock) {
         ParameterWriter p = new ParameterWriter();
-        List<String> labels =
-                recording.points().stream().map(PointTrack::label).toList();
+        List<String> labels = recording.points().stream().map(PointTrack::label).toList();
         p.group("POINT", "Points in space");
         p.integers("USED", "Points per frame", new int[] {labels.size()});
         p.reals("SCALE", "Negative: samples are reals", new double[] {-1});
@@ -192,7 +193,10 @@ public final class C3dWriter {
         p.group("EVENT", "Events");
         p.integers("USED", "Number of events", new int[] {events.size()});
         p.texts("CONTEXTS", "Sides", events.stream().map(RecordedEvent::context).toList());
-        p.texts("LABELS", "What happened", events.stream().map(RecordedEvent::label).toList());
+        p.texts(
+                "LABELS",
+                "What happened",
+                events.stream().map(RecordedEvent::label).toList());
         p.reals("TIMES", "Minutes and seconds", times, 2, events.size());
     }
 

@@ -75,9 +75,7 @@ final class FrameCount {
         }
         if (said.stream().distinct().count() > 1) {
             findings.add(Finding.note(
-                    "frames.disagree",
-                    "",
-                    "the file states frame counts of " + said + " and has room for " + fits));
+                    "frames.disagree", "", "the file states frame counts of " + said + " and has room for " + fits));
         }
         return best >= 0 ? best : said.get(0);
     }

@@ -41,8 +41,7 @@ final class LengthUnit {
     /** The one of mm, cm and m that makes all platform sides 0.05 to 3 m long. */
     static Optional<Double> fitting(List<C3dPlatform> platforms) {
         for (double factor : new double[] {1e-3, 1e-2, 1}) {
-            if (!platforms.isEmpty()
-                    && platforms.stream().allMatch(p -> hasPlausibleSides(p.corners(), factor))) {
+            if (!platforms.isEmpty() && platforms.stream().allMatch(p -> hasPlausibleSides(p.corners(), factor))) {
                 return Optional.of(factor);
             }
         }

@@ -15,7 +15,8 @@ record PlatformAxes(Vec3 x, Vec3 y, Vec3 z) {
     /** Axes of four corners; IllegalArgumentException where they span no plane. */
     static PlatformAxes of(List<Vec3> c) {
         Vec3 x = c.get(0).plus(c.get(3)).minus(c.get(1)).minus(c.get(2)).unit();
-        Vec3 z = x.cross(c.get(0).plus(c.get(1)).minus(c.get(2)).minus(c.get(3))).unit();
+        Vec3 z =
+                x.cross(c.get(0).plus(c.get(1)).minus(c.get(2)).minus(c.get(3))).unit();
         return new PlatformAxes(x, z.cross(x), z);
     }
 

@@ -79,8 +79,10 @@ final class PlatformReader {
         if (p.channels().size() < channels
                 || p.channels().subList(0, channels).stream()
                         .anyMatch(c -> c < 1 || c > file.analog().channels())) {
-            return refuse(where, "names channels " + p.channels() + ", expected " + channels + " between 1 and "
-                    + file.analog().channels());
+            return refuse(
+                    where,
+                    "names channels " + p.channels() + ", expected " + channels + " between 1 and "
+                            + file.analog().channels());
         }
         if (!p.corners().stream().allMatch(Vec3::isFinite)) {
             return refuse(where, "has corners that are not finite");

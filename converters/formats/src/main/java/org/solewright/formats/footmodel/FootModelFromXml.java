@@ -115,7 +115,9 @@ final class FootModelFromXml {
                         new Quantity(s.getMass(), basis(s.getMassBasis()), XmlWords.optional(s.getMassSd())),
                         optional("stature", s.getStature(), s.getStatureBasis(), s.getStatureSd()),
                         new Quantity(
-                                s.getLimbLength(), basis(s.getLimbLengthBasis()), XmlWords.optional(s.getLimbLengthSd())),
+                                s.getLimbLength(),
+                                basis(s.getLimbLengthBasis()),
+                                XmlWords.optional(s.getLimbLengthSd())),
                         optional("footLength", s.getFootLength(), s.getFootLengthBasis(), s.getFootLengthSd()),
                         optional(
                                 "effectiveFootLength",
@@ -166,10 +168,7 @@ final class FootModelFromXml {
 
     private static Joint.Axis axis(XmlAxis a) {
         return new Joint.Axis(
-                a.getName(),
-                new Vec3(a.getX(), a.getY(), a.getZ()),
-                basis(a.getBasis()),
-                XmlWords.optional(a.getSd()));
+                a.getName(), new Vec3(a.getX(), a.getY(), a.getZ()), basis(a.getBasis()), XmlWords.optional(a.getSd()));
     }
 
     private static Rolling rolling(XmlRolling r) {
@@ -228,8 +227,7 @@ final class FootModelFromXml {
     }
 
     private static Located place(XmlPlace p) {
-        return new Located(
-                new Vec3(p.getX(), p.getY(), p.getZ()), basis(p.getBasis()), XmlWords.optional(p.getSd()));
+        return new Located(new Vec3(p.getX(), p.getY(), p.getZ()), basis(p.getBasis()), XmlWords.optional(p.getSd()));
     }
 
     private static Basis basis(String word) {

@@ -71,8 +71,10 @@ public final class LandmarkMapFile {
                     side(xml.getSide()),
                     xml.getLabel().stream().map(LabelPattern::new).toList());
             if (entries.stream().anyMatch(e -> overlap(e, entry))) {
-                throw parsed.wrong(xml, "landmark '" + xml.getName() + "' of side '" + xml.getSide()
-                        + "' for the second time, expected each once with all its labels");
+                throw parsed.wrong(
+                        xml,
+                        "landmark '" + xml.getName() + "' of side '" + xml.getSide()
+                                + "' for the second time, expected each once with all its labels");
             }
             entries.add(entry);
         }

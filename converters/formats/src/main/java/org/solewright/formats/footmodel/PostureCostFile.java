@@ -46,11 +46,7 @@ public final class PostureCostFile {
     /** Holds what is slow to make until a summary is first written. */
     private static final class Holder {
         static final XmlBinding<XmlPostureCost> BINDING = new XmlBinding<>(
-                XmlPostureCost.class,
-                "postureCost",
-                "urn:solewright:posture-cost:1",
-                "posture-cost-1.xsd",
-                List.of());
+                XmlPostureCost.class, "postureCost", "urn:solewright:posture-cost:1", "posture-cost-1.xsd", List.of());
     }
 
     /**

@@ -31,7 +31,8 @@ final class SchemaMessage {
             case "cvc-complex-type.2.4.b" -> "element '" + first + "' is not complete, expected " + second;
             case "cvc-complex-type.2.4.d", "cvc-complex-type.2.4.e", "cvc-complex-type.2.4.f" ->
                 "element '" + first + "', expected no more here";
-            case "cvc-complex-type.3.2.2" -> "attribute '" + first + "' of element '" + second + "', expected none such";
+            case "cvc-complex-type.3.2.2" ->
+                "attribute '" + first + "' of element '" + second + "', expected none such";
             case "cvc-complex-type.4" -> "element '" + second + "' without attribute '" + first + "'";
             case "cvc-complex-type.2.1", "cvc-complex-type.2.3" -> "text in element '" + first + "', expected none";
             case "cvc-datatype-valid.1.2.1" -> "'" + first + "', expected a value of type " + second;

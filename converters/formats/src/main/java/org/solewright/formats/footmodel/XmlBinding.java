@@ -100,7 +100,9 @@ final class XmlBinding<T> {
     Parsed<T> parse(String source, byte[] bytes) throws FormatException {
         if (bytes.length == 0) {
             throw new FormatException(
-                    source, "the file is empty, expected XML with root element '" + rootName + "'", "give another file");
+                    source,
+                    "the file is empty, expected XML with root element '" + rootName + "'",
+                    "give another file");
         }
         if (bytes.length > LARGEST_BYTES) {
             throw new FormatException(
@@ -121,7 +123,10 @@ final class XmlBinding<T> {
             throw refused(source, guard, e);
         } catch (SAXException | JAXBException | IOException e) {
             throw new FormatException(
-                    source, "line " + guard.line() + ": " + SchemaMessage.english(String.valueOf(e.getMessage())), CORRECT, e);
+                    source,
+                    "line " + guard.line() + ": " + SchemaMessage.english(String.valueOf(e.getMessage())),
+                    CORRECT,
+                    e);
         }
     }
 

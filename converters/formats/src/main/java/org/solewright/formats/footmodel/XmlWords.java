@@ -48,10 +48,6 @@ final class XmlWords {
     }
 
     private static boolean isLegal(int c) {
-        return c == '\t'
-                || c == '\n'
-                || (c >= 0x20 && c <= 0xD7FF)
-                || (c >= 0xE000 && c <= 0xFFFD)
-                || c >= 0x10000;
+        return c == '\t' || c == '\n' || (c >= 0x20 && c <= 0xD7FF) || (c >= 0xE000 && c <= 0xFFFD) || c >= 0x10000;
     }
 }

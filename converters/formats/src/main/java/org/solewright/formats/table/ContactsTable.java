@@ -21,8 +21,8 @@ import org.solewright.formats.io.Spelling;
  */
 public final class ContactsTable {
 
-    private static final List<String> COLUMNS = List.of(
-            "trial", "side", "platform", "start_s", "end_s", "whole", "used_for", "not_used_for", "why");
+    private static final List<String> COLUMNS =
+            List.of("trial", "side", "platform", "start_s", "end_s", "whole", "used_for", "not_used_for", "why");
     private static final List<String> REQUIRED = List.of("trial", "side", "start_s", "end_s", "whole");
     private static final List<String> SIDES =
             Arrays.stream(Side.values()).map(Side::word).toList();
@@ -136,7 +136,8 @@ public final class ContactsTable {
         for (String word : parts(line.text("platform"), "\\+")) {
             if (!word.matches("[1-9][0-9]{0,3}")) {
                 throw line.wrong(
-                        "platform '" + line.text("platform") + "', expected a number from 1, or several with a + between",
+                        "platform '" + line.text("platform")
+                                + "', expected a number from 1, or several with a + between",
                         "correct the cell or leave it empty");
             }
             platforms.add(Integer.valueOf(word));

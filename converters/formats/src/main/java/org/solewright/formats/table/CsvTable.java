@@ -100,10 +100,10 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
         List<String> columns = List.of();
         List<Line> lines = new ArrayList<>();
         try (CsvReader<CsvRecord> reader = CsvReader.builder()
-                        .skipEmptyLines(true)
-                        .missingFieldStrategy(FieldMismatchStrategy.IGNORE)
-                        .extraFieldStrategy(FieldMismatchStrategy.IGNORE)
-                        .ofCsvRecord(text)) {
+                .skipEmptyLines(true)
+                .missingFieldStrategy(FieldMismatchStrategy.IGNORE)
+                .extraFieldStrategy(FieldMismatchStrategy.IGNORE)
+                .ofCsvRecord(text)) {
             for (CsvRecord r : reader) {
                 if (columns.isEmpty()) {
                     columns = r.getFields().stream().map(String::strip).toList();

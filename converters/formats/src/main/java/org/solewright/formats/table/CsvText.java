@@ -15,8 +15,7 @@ final class CsvText {
 
     static byte[] bytes(List<String> header, Iterable<List<String>> rows) {
         ByteArrayOutputStream out = new ByteArrayOutputStream();
-        try (CsvWriter csv =
-                CsvWriter.builder().lineDelimiter(LineDelimiter.LF).build(out, StandardCharsets.UTF_8)) {
+        try (CsvWriter csv = CsvWriter.builder().lineDelimiter(LineDelimiter.LF).build(out, StandardCharsets.UTF_8)) {
             csv.writeRecord(header);
             for (List<String> row : rows) {
                 csv.writeRecord(row);

@@ -35,14 +35,13 @@ class C3dTruthTest {
 
     static Stream<Named<Case>> recordings() {
         List<Named<Case>> cases = new ArrayList<>();
-        Recordings.shared().ifPresentOrElse(
-                folder -> Recordings.lines(folder.resolve("truth.jsonl"))
-                        .forEach(t -> add(cases, folder.resolve("files"), t)),
-                () -> cases.add(Named.of("recordings absent", new Case(Path.of(""), NullNode.getInstance()))));
+        Recordings.shared()
+                .ifPresentOrElse(
+                        folder -> Recordings.lines(folder.resolve("truth.jsonl"))
+                                .forEach(t -> add(cases, folder.resolve("files"), t)),
+                        () -> cases.add(Named.of("recordings absent", new Case(Path.of(""), NullNode.getInstance()))));
         Path own = Recordings.own("synthetic-truth.jsonl");
-        Recordings.lines(own).stream()
-                .filter(t -> !t.has("expect"))
-                .forEach(t -> add(cases, own.getParent(), t));
+        Recordings.lines(own).stream().filter(t -> !t.has("expect")).forEach(t -> add(cases, own.getParent(), t));
         return cases.stream();
     }
 
@@ -69,7 +68,8 @@ class C3dTruthTest {
         }
         sums(file, t);
         pointProbes(file, t);
-        // One truth stops reading parameters at a group whose description length is missing (a link of 2 bytes, which the
+        // One truth stops reading parameters at a group whose description length is missing (a link of 2 bytes, which
+        // the
         // format's readers must accept); labels, scales and events come after it.
         if (!t.get("reader_notes").toString().contains("goes backwards")) {
             labels(file, t);
@@ -125,13 +125,13 @@ class C3dTruthTest {
             if (isValid) {
                 for (int k = 0; k < 3; k++) {
                     double v = p.get(4 + k).asDouble();
-                    assertThat(file.points().coordinate(frame, point, k))
-                            .isCloseTo(v, within(FLOAT * Math.abs(v)));
+                    assertThat(file.points().coordinate(frame, point, k)).isCloseTo(v, within(FLOAT * Math.abs(v)));
                 }
                 double residual = p.get(7).asDouble();
                 assertThat(file.points().residual(frame, point))
                         .isCloseTo(residual, within(FLOAT * Math.abs(residual) + 1e-12));
-                assertThat(file.points().cameras(frame, point)).isEqualTo(p.get(8).asInt());
+                assertThat(file.points().cameras(frame, point))
+                        .isEqualTo(p.get(8).asInt());
             }
         }
     }
@@ -180,15 +180,19 @@ class C3dTruthTest {
 
     static Stream<Named<Case>> platforms() {
         List<Named<Case>> cases = new ArrayList<>();
-        Recordings.shared().ifPresentOrElse(
-                folder -> Recordings.lines(folder.resolve("platforms.jsonl")).stream()
-                        .filter(t -> t.path("trust").asBoolean() && t.get("type").asInt() <= 4)
-                        .forEach(t -> cases.add(Named.of(
-                                t.get("file").asText() + " platform " + t.get("plate").asInt(),
-                                new Case(folder.resolve("files").resolve(t.get("file").asText()), t)))),
-                () -> cases.add(Named.of(
-                        "recordings absent",
-                        new Case(Path.of(""), NullNode.getInstance()))));
+        Recordings.shared()
+                .ifPresentOrElse(
+                        folder -> Recordings.lines(folder.resolve("platforms.jsonl")).stream()
+                                .filter(t -> t.path("trust").asBoolean()
+                                        && t.get("type").asInt() <= 4)
+                                .forEach(t -> cases.add(Named.of(
+                                        t.get("file").asText() + " platform "
+                                                + t.get("plate").asInt(),
+                                        new Case(
+                                                folder.resolve("files")
+                                                        .resolve(t.get("file").asText()),
+                                                t)))),
+                        () -> cases.add(Named.of("recordings absent", new Case(Path.of(""), NullNode.getInstance()))));
         return cases.stream();
     }
 

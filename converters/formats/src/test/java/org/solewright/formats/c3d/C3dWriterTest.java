@@ -39,8 +39,8 @@ class C3dWriterTest {
             moment[3 * i + 2] = 0.1;
         }
         // A platform turned by 90 degrees in the laboratory: its x is along the laboratory's y.
-        List<Vec3> corners = List.of(
-                new Vec3(0.5, 0.9, 0), new Vec3(0.5, 0.3, 0), new Vec3(0.1, 0.3, 0), new Vec3(0.1, 0.9, 0));
+        List<Vec3> corners =
+                List.of(new Vec3(0.5, 0.9, 0), new Vec3(0.5, 0.3, 0), new Vec3(0.1, 0.3, 0), new Vec3(0.1, 0.9, 0));
         PlatformLoads loads = new PlatformLoads(1, 2, corners, Vec3.Z, 500, 0, true, force, moment);
         return new Recording(
                 "w.c3d",

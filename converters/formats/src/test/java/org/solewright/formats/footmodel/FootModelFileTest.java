@@ -56,7 +56,10 @@ class FootModelFileTest {
         Path file = folder.resolve("model.xml");
         FootModelFile.write(file, InventedModel.full());
         assertThat(Files.readAllBytes(file)).isEqualTo(FootModelFile.bytes(InventedModel.full()));
-        assertThat(text()).doesNotContain("\r").startsWith("<?xml version=\"1.0\" encoding=\"UTF-8\"").endsWith("\n");
+        assertThat(text())
+                .doesNotContain("\r")
+                .startsWith("<?xml version=\"1.0\" encoding=\"UTF-8\"")
+                .endsWith("\n");
         assertThat(Files.list(folder)).containsExactly(file);
     }
 
@@ -65,7 +68,8 @@ class FootModelFileTest {
         Validator validator = Validator.forLanguage(Languages.W3C_XML_SCHEMA_NS_URI);
         validator.setSchemaSource(new StreamSource(
                 FootModelFile.class.getResource("foot-model-1.xsd").toString()));
-        ValidationResult result = validator.validateInstance(Input.fromString(text()).build());
+        ValidationResult result =
+                validator.validateInstance(Input.fromString(text()).build());
         assertThat(result.getProblems()).isEmpty();
         assertThat(result.isValid()).isTrue();
     }
@@ -119,11 +123,12 @@ class FootModelFileTest {
 
     @Test
     void numbersOutsideTheirRangeAreRefused() throws Exception {
-        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"-0.9\"")).getMessage()).contains("-0.9");
-        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"0,9\""))
-                        .getMessage())
+        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"-0.9\"")).getMessage())
+                .contains("-0.9");
+        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"0,9\"")).getMessage())
                 .endsWith("'0,9', expected a value of type double");
-        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"NaN\"")).getMessage()).contains("NaN");
+        assertThat(refusal(text().replace("value=\"0.9\"", "value=\"NaN\"")).getMessage())
+                .contains("NaN");
     }
 
     @Test

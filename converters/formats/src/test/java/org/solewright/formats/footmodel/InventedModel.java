@@ -77,7 +77,8 @@ final class InventedModel {
                         List.of(new Rolling.OutlinePoint(-0.05, -0.08), new Rolling.OutlinePoint(0.12, -0.081)),
                         List.of(new Rolling.Pivot(0.02, 0, 0, 21.5), new Rolling.Pivot(0.17, 0.001, 60, 100)),
                         Optional.of(new Rolling.Cap(0.4, new Vec3(0, 0.1, 0.2), 0.01))),
-                List.of(new Pad("heel", SegmentName.FOOT, new Vec3(-0.04, -0.05, 0), 0.026, 1e6 / 3, 1, 0.8, Basis.ASSUMED)),
+                List.of(new Pad(
+                        "heel", SegmentName.FOOT, new Vec3(-0.04, -0.05, 0), 0.026, 1e6 / 3, 1, 0.8, Basis.ASSUMED)),
                 List.of(Finding.warning("cluster.deformed", "right shank", "7 mm <rms> & more, \"so\"\u00fc")),
                 Cautions.LINES);
     }

@@ -21,8 +21,7 @@ import org.solewright.formats.io.FormatException;
 
 class LandmarkMapFileTest {
 
-    private static final String GOOD =
-            """
+    private static final String GOOD = """
             <?xml version="1.0" encoding="UTF-8"?>
             <landmarkMap xmlns="urn:solewright:landmarks:1" name="invented">
               <landmark name="calcaneus_posterior" side="right">
@@ -150,7 +149,8 @@ class LandmarkMapFileTest {
 
     @Test
     void truncatedFileNamesTheLine() throws Exception {
-        assertThat(refusal(GOOD.substring(0, GOOD.indexOf("</landmark>"))).getMessage()).startsWith("line ");
+        assertThat(refusal(GOOD.substring(0, GOOD.indexOf("</landmark>"))).getMessage())
+                .startsWith("line ");
     }
 
     @Test
@@ -198,8 +198,8 @@ class LandmarkMapFileTest {
         LandmarkMap example = LandmarkMapFile.read(
                 top.resolve("templates/src/main/resources/org/solewright/templates/landmark-map.xml"));
         assertThat(example.names(Landmark.NAVICULAR_TUBEROSITY, Side.LEFT)).isTrue();
-        LandmarkMap recording = LandmarkMapFile.read(
-                top.resolve("bridge/app/src/test/resources/org/solewright/app/s26-landmarks.xml"));
+        LandmarkMap recording =
+                LandmarkMapFile.read(top.resolve("bridge/app/src/test/resources/org/solewright/app/s26-landmarks.xml"));
         assertThat(recording.labels(
                         Landmark.SHANK_CLUSTER, Side.LEFT, List.of("R_SHANK_1", "L_SHANK_1", "L_SHANK_2", "L_HEEL")))
                 .containsExactly("L_SHANK_1", "L_SHANK_2");

@@ -63,10 +63,13 @@ class PostureCostFileTest {
         assertThat(at("/p:postureCost/@version", xml)).isEqualTo("0.1.0");
         assertThat(at("/p:postureCost/p:sources/p:file/@sha256", xml)).isEqualTo(InventedModel.DIGEST);
         assertThat(at("/p:postureCost/p:settings/p:setting/@value", xml)).isEqualTo("20.0 N");
-        assertThat(at("/p:postureCost/p:columns/p:column[@name='speed_m_s']/@unit", xml)).isEqualTo("m/s");
-        assertThat(at("/p:postureCost/p:rows/p:row[1]/p:cell[@column='push_off_J']", xml)).isEqualTo("22.1");
+        assertThat(at("/p:postureCost/p:columns/p:column[@name='speed_m_s']/@unit", xml))
+                .isEqualTo("m/s");
+        assertThat(at("/p:postureCost/p:rows/p:row[1]/p:cell[@column='push_off_J']", xml))
+                .isEqualTo("22.1");
         assertThat(at("count(/p:postureCost/p:rows/p:row[1]/p:cell)", xml)).isEqualTo("4");
-        assertThat(at("/p:postureCost/p:rows/p:row[2]/p:cell[@column='n']", xml)).isEqualTo("1");
+        assertThat(at("/p:postureCost/p:rows/p:row[2]/p:cell[@column='n']", xml))
+                .isEqualTo("1");
         assertThat(at("count(/p:postureCost/p:frames/p:frame)", xml)).isEqualTo("3");
         assertThat(at("/p:postureCost/p:findings/p:finding", xml)).isEqualTo("no double support");
     }
@@ -77,8 +80,10 @@ class PostureCostFileTest {
         validator.setSchemaSource(new StreamSource(
                 PostureCostFile.class.getResource("posture-cost-1.xsd").toString()));
         String xml = new String(PostureCostFile.bytes(cost()), StandardCharsets.UTF_8);
-        assertThat(validator.validateInstance(Input.fromString(xml).build()).getProblems()).isEmpty();
+        assertThat(validator.validateInstance(Input.fromString(xml).build()).getProblems())
+                .isEmpty();
         String stray = xml.replace("column=\"push_off_J\"", "column=\"push_off\"");
-        assertThat(validator.validateInstance(Input.fromString(stray).build()).isValid()).isFalse();
+        assertThat(validator.validateInstance(Input.fromString(stray).build()).isValid())
+                .isFalse();
     }
 }

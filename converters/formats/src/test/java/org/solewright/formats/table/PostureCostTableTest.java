@@ -38,9 +38,8 @@ class PostureCostTableTest {
     void headerIsTheFixedOrderThenDeviationsThenDimensionlessThenSummary() {
         String header = new String(PostureCostTable.bytes(List.of()), StandardCharsets.UTF_8);
         assertThat(header).startsWith(FIXED).endsWith(",speed_nd,step_length_nd,push_off_nd,collision_nd,of,n\n");
-        List<String> between = Arrays.asList(header.substring(
-                        FIXED.length(), header.indexOf(",speed_nd"))
-                .split(","));
+        List<String> between = Arrays.asList(
+                header.substring(FIXED.length(), header.indexOf(",speed_nd")).split(","));
         assertThat(between).allMatch(name -> name.endsWith("_sd")).contains("push_off_J_sd", "speed_m_s_sd");
         assertThat(header.strip().split(",")).doesNotHaveDuplicates();
     }
