@@ -58,114 +58,138 @@ class ArchitectureTest {
     @TestFactory
     Stream<DynamicTest> promises() {
         return Stream.of(
-                rule("the domain rests on the JDK alone", classes()
-                        .that()
-                        .resideInAPackage(ROOT + "domain..")
-                        .should()
-                        .onlyDependOnClassesThat()
-                        .resideInAnyPackage("java..", "org.jspecify..", ROOT + "domain..")),
-                rule("formats know the domain, no mathematics and no use cases", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "formats..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(packages("analysis", "app"))),
-                rule("mathematics knows no files, formats or use cases", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "analysis..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(
-                                "java.io..",
-                                "java.nio..",
-                                "javax.xml..",
-                                ROOT + "formats..",
-                                ROOT + "app..")),
-                rule("numerics are below gait, fitting and dynamics", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "analysis.numerics..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(
-                                packages("analysis.gait", "analysis.fitting", "analysis.dynamics", "analysis.cost"))),
-                rule("gait, fitting and dynamics are below cost", noClasses()
-                        .that()
-                        .resideInAnyPackage(packages("analysis.gait", "analysis.fitting", "analysis.dynamics"))
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAPackage(ROOT + "analysis.cost..")),
-                rule("one format does not see another: c3d", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "formats.c3d..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(packages("formats.footmodel", "formats.table"))),
-                rule("one format does not see another: footmodel", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "formats.footmodel..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(packages("formats.c3d", "formats.table"))),
-                rule("one format does not see another: table", noClasses()
-                        .that()
-                        .resideInAPackage(ROOT + "formats.table..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage(packages("formats.c3d", "formats.footmodel"))),
-                rule("no package cycles", slices().matching("org.solewright.(**)").should().beFreeOfCycles()),
-                rule("XML binding stays inside formats", noClasses()
-                        .that()
-                        .resideOutsideOfPackage(ROOT + "formats.footmodel..")
-                        .should()
-                        .dependOnClassesThat()
-                        .resideInAnyPackage("jakarta.xml.bind..")),
-                rule("no XML binding type in a public signature", classes()
-                        .that()
-                        .resideInAPackage(ROOT + "formats..")
-                        .and()
-                        .arePublic()
-                        .should(haveNoPublicSignatureFrom("jakarta.xml.bind", "xml.Xml"))),
-                rule("only the command line prints", noClasses()
-                        .that()
-                        .resideOutsideOfPackage(ROOT + "app.cli..")
-                        .should()
-                        .accessField(System.class, "out")
-                        .orShould()
-                        .accessField(System.class, "err")),
-                rule("only the entry ends the process", noClasses()
-                        .that()
-                        .doNotHaveFullyQualifiedName(ROOT + "app.cli.Main")
-                        .should()
-                        .callMethod(System.class, "exit", int.class)),
+                rule(
+                        "the domain rests on the JDK alone",
+                        classes()
+                                .that()
+                                .resideInAPackage(ROOT + "domain..")
+                                .should()
+                                .onlyDependOnClassesThat()
+                                .resideInAnyPackage("java..", "org.jspecify..", ROOT + "domain..")),
+                rule(
+                        "formats know the domain, no mathematics and no use cases",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "formats..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(packages("analysis", "app"))),
+                rule(
+                        "mathematics knows no files, formats or use cases",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "analysis..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(
+                                        "java.io..", "java.nio..", "javax.xml..", ROOT + "formats..", ROOT + "app..")),
+                rule(
+                        "numerics are below gait, fitting and dynamics",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "analysis.numerics..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(packages(
+                                        "analysis.gait", "analysis.fitting", "analysis.dynamics", "analysis.cost"))),
+                rule(
+                        "gait, fitting and dynamics are below cost",
+                        noClasses()
+                                .that()
+                                .resideInAnyPackage(packages("analysis.gait", "analysis.fitting", "analysis.dynamics"))
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAPackage(ROOT + "analysis.cost..")),
+                rule(
+                        "one format does not see another: c3d",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "formats.c3d..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(packages("formats.footmodel", "formats.table"))),
+                rule(
+                        "one format does not see another: footmodel",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "formats.footmodel..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(packages("formats.c3d", "formats.table"))),
+                rule(
+                        "one format does not see another: table",
+                        noClasses()
+                                .that()
+                                .resideInAPackage(ROOT + "formats.table..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage(packages("formats.c3d", "formats.footmodel"))),
+                rule(
+                        "no package cycles",
+                        slices().matching("org.solewright.(**)").should().beFreeOfCycles()),
+                rule(
+                        "XML binding stays inside formats",
+                        noClasses()
+                                .that()
+                                .resideOutsideOfPackage(ROOT + "formats.footmodel..")
+                                .should()
+                                .dependOnClassesThat()
+                                .resideInAnyPackage("jakarta.xml.bind..")),
+                rule(
+                        "no XML binding type in a public signature",
+                        classes()
+                                .that()
+                                .resideInAPackage(ROOT + "formats..")
+                                .and()
+                                .arePublic()
+                                .should(haveNoPublicSignatureFrom("jakarta.xml.bind", "xml.Xml"))),
+                rule(
+                        "only the command line prints",
+                        noClasses()
+                                .that()
+                                .resideOutsideOfPackage(ROOT + "app.cli..")
+                                .should()
+                                .accessField(System.class, "out")
+                                .orShould()
+                                .accessField(System.class, "err")),
+                rule(
+                        "only the entry ends the process",
+                        noClasses()
+                                .that()
+                                .doNotHaveFullyQualifiedName(ROOT + "app.cli.Main")
+                                .should()
+                                .callMethod(System.class, "exit", int.class)),
                 rule("records hold no arrays", classes().that().areRecords().should(haveNoArrayField())),
-                rule("static fields do not change", fields()
-                        .that()
-                        .areStatic()
-                        .should()
-                        .beFinal()),
-                rule("no class is a drawer", noClasses()
-                        .should()
-                        .haveSimpleNameEndingWith("Util")
-                        .orShould()
-                        .haveSimpleNameEndingWith("Utils")
-                        .orShould()
-                        .haveSimpleNameEndingWith("Helper")
-                        .orShould()
-                        .haveSimpleNameEndingWith("Manager")),
+                rule(
+                        "static fields do not change",
+                        fields().that().areStatic().should().beFinal()),
+                rule(
+                        "no class is a drawer",
+                        noClasses()
+                                .should()
+                                .haveSimpleNameEndingWith("Util")
+                                .orShould()
+                                .haveSimpleNameEndingWith("Utils")
+                                .orShould()
+                                .haveSimpleNameEndingWith("Helper")
+                                .orShould()
+                                .haveSimpleNameEndingWith("Manager")),
                 rule("packages are null-marked", classes().should(beInANullMarkedPackage())),
-                rule("classes are final unless made to be extended", classes()
-                        .that()
-                        .areNotInterfaces()
-                        .and()
-                        .areNotEnums()
-                        .and()
-                        .doNotHaveSimpleName("package-info")
-                        .and()
-                        .areNotAnonymousClasses()
-                        .should()
-                        .haveModifier(JavaModifier.FINAL)
-                        .orShould()
-                        .haveModifier(JavaModifier.ABSTRACT)));
+                rule(
+                        "classes are final unless made to be extended",
+                        classes()
+                                .that()
+                                .areNotInterfaces()
+                                .and()
+                                .areNotEnums()
+                                .and()
+                                .doNotHaveSimpleName("package-info")
+                                .and()
+                                .areNotAnonymousClasses()
+                                .should()
+                                .haveModifier(JavaModifier.FINAL)
+                                .orShould()
+                                .haveModifier(JavaModifier.ABSTRACT)));
     }
 
     private static DynamicTest rule(String promise, ArchRule rule) {

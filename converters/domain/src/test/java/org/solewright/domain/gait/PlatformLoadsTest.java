@@ -11,8 +11,8 @@ import org.solewright.domain.geometry.Vec3;
 /** Expected numbers are exact: a known force at a known place gives the wrench, the wrench must give the place back. */
 class PlatformLoadsTest {
 
-    private static final List<Vec3> CORNERS = List.of(
-            new Vec3(1.4, 0.9, 0.2), new Vec3(1.0, 0.9, 0.2), new Vec3(1.0, 0.3, 0.2), new Vec3(1.4, 0.3, 0.2));
+    private static final List<Vec3> CORNERS =
+            List.of(new Vec3(1.4, 0.9, 0.2), new Vec3(1.0, 0.9, 0.2), new Vec3(1.0, 0.3, 0.2), new Vec3(1.4, 0.3, 0.2));
     private static final Vec3 CENTRE = new Vec3(1.2, 0.6, 0.2);
     private static final Vec3 FORCE = new Vec3(30, -12, 700);
     private static final Vec3 PLACE = new Vec3(1.31, 0.52, 0.2);
@@ -78,8 +78,7 @@ class PlatformLoadsTest {
         assertThatThrownBy(() -> new PlatformLoads(
                         1, 2, CORNERS.subList(0, 3), Vec3.Z, 100, 0, true, new double[3], new double[3]))
                 .hasMessage("platform 1 has 3 corners, expected 4");
-        assertThatThrownBy(
-                        () -> new PlatformLoads(1, 2, CORNERS, Vec3.Z, 100, 0, true, new double[3], new double[6]))
+        assertThatThrownBy(() -> new PlatformLoads(1, 2, CORNERS, Vec3.Z, 100, 0, true, new double[3], new double[6]))
                 .hasMessageContaining("3 force and 6 moment components");
         assertThatThrownBy(() -> new PlatformLoads(1, 2, CORNERS, Vec3.Z, 0, 0, true, new double[3], new double[3]))
                 .hasMessage("platform 1 rate 0.0 Hz, expected more than 0 Hz");

@@ -43,8 +43,10 @@ class GeometryTest {
     void rotationTurnsIntoItsOuterFrameAndBack() {
         // A quarter turn about z: the inner x axis is the outer y axis.
         Rotation R_AB = new Rotation(Vec3.Y, Vec3.X.times(-1), Vec3.Z);
-        assertThat(R_AB.transformVector(new Vec3(1, 0, 7)).distance(new Vec3(0, 1, 7))).isLessThan(ROUNDING);
-        assertThat(R_AB.inverseVector(new Vec3(0, 1, 7)).distance(new Vec3(1, 0, 7))).isLessThan(ROUNDING);
+        assertThat(R_AB.transformVector(new Vec3(1, 0, 7)).distance(new Vec3(0, 1, 7)))
+                .isLessThan(ROUNDING);
+        assertThat(R_AB.inverseVector(new Vec3(0, 1, 7)).distance(new Vec3(1, 0, 7)))
+                .isLessThan(ROUNDING);
         assertThat(R_AB.times(R_AB.inverse()).x().distance(Vec3.X)).isLessThan(ROUNDING);
     }
 
@@ -71,9 +73,12 @@ class GeometryTest {
     @Test
     void positionsMoveAndDirectionsOnlyTurn() {
         Pose x_AB = new Pose(new Rotation(Vec3.Y, Vec3.X.times(-1), Vec3.Z), new Vec3(10, 0, 0));
-        assertThat(x_AB.transformPosition(new Vec3(1, 2, 3)).distance(new Vec3(8, 1, 3))).isLessThan(ROUNDING);
-        assertThat(x_AB.transformVector(new Vec3(1, 2, 3)).distance(new Vec3(-2, 1, 3))).isLessThan(ROUNDING);
-        assertThat(x_AB.inversePosition(new Vec3(8, 1, 3)).distance(new Vec3(1, 2, 3))).isLessThan(ROUNDING);
+        assertThat(x_AB.transformPosition(new Vec3(1, 2, 3)).distance(new Vec3(8, 1, 3)))
+                .isLessThan(ROUNDING);
+        assertThat(x_AB.transformVector(new Vec3(1, 2, 3)).distance(new Vec3(-2, 1, 3)))
+                .isLessThan(ROUNDING);
+        assertThat(x_AB.inversePosition(new Vec3(8, 1, 3)).distance(new Vec3(1, 2, 3)))
+                .isLessThan(ROUNDING);
         Pose twice = x_AB.times(x_AB);
         Vec3 p = new Vec3(0.3, -0.2, 1);
         assertThat(twice.transformPosition(p).distance(x_AB.transformPosition(x_AB.transformPosition(p))))
