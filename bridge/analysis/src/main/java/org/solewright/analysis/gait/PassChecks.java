@@ -101,12 +101,17 @@ public final class PassChecks {
                                 Locale.ROOT,
                                 "mean horizontal force %.1f N forward and %.1f N to the right; the pelvis's change of speed"
                                         + " asks for %.1f N and %.1f N; nothing is removed",
-                                loads.totalForce().forward().mean(from, to),
-                                loads.totalForce().right().mean(from, to),
-                                change.x(),
-                                change.z())));
+                                tenths(loads.totalForce().forward().mean(from, to)),
+                                tenths(loads.totalForce().right().mean(from, to)),
+                                tenths(change.x()),
+                                tenths(change.z()))));
             }
         }
         return findings;
+    }
+
+    /** Rounded to tenths, without the sign of a rounded zero. */
+    private static double tenths(double force) {
+        return Math.rint(10 * force) / 10 + 0.0;
     }
 }
