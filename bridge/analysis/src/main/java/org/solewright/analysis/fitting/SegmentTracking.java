@@ -58,7 +58,7 @@ public final class SegmentTracking {
      * @return where it is now, m; empty where the pose is not known
      */
     public Optional<Vec3> at(Vec3 standing, int frame) {
-        return fits.get(frame).map(f -> f.pose().transformPosition(standing));
+        return fit(frame).map(f -> f.pose().transformPosition(standing));
     }
 
     /**
@@ -68,17 +68,17 @@ public final class SegmentTracking {
      * @return X from standing to present, laboratory frame; empty where not known
      */
     public Optional<Pose> pose(int frame) {
-        return fits.get(frame).map(RigidFit::pose);
+        return fit(frame).map(RigidFit::pose);
     }
 
     /**
      * The fit in a frame: its rms and the change of shape tell how far the segment was rigid.
      *
      * @param frame zero-based
-     * @return the fit; empty where not known
+     * @return the fit; empty where not known or beyond the recording
      */
     public Optional<RigidFit> fit(int frame) {
-        return fits.get(frame);
+        return frame < fits.size() ? fits.get(frame) : Optional.empty();
     }
 
     /**

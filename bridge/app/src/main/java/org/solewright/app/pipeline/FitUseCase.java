@@ -5,15 +5,12 @@ import java.util.EnumMap;
 import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import java.util.Set;
 import org.solewright.analysis.fitting.InertiaTable;
-import org.solewright.analysis.fitting.RigidFit;
-import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.fitting.StandingModel;
 import org.solewright.analysis.fitting.StandingOutcome;
@@ -36,7 +33,6 @@ import org.solewright.domain.foot.Segment;
 import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
-import org.solewright.domain.gait.Stance;
 import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.io.FormatException;
@@ -44,8 +40,6 @@ import org.solewright.formats.io.FormatException;
 /** Fits a segmented foot model per side from standing and walking recordings. */
 public final class FitUseCase {
 
-    private static final double DEFORMED = 0.0045;
-    private static final double GAP = 0.017;
     private static final double PROVISIONAL_MASS = 70;
 
     /**
@@ -313,8 +307,7 @@ public final class FitUseCase {
         boolean isHuman = request.gait().population() != Population.OTHER;
         WalkingRollOver rollOver = new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
         Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>(subject.tracksByTrial());
-        Map<String, List<RigidFit>> fits = new LinkedHashMap<>();
-        List<Double> ankleGaps = new ArrayList<>();
+        PoseChecks checks = new PoseChecks(limb);
         for (Pass pass : subject.passes()) {
             LandmarkTracks tracks = byTrial.get(pass.trial().name());
             if (tracks == null) {
@@ -328,106 +321,11 @@ public final class FitUseCase {
                         "fewer than three points of the " + limb.side().word()
                                 + " shank are tracked together: no roll-over in the shank frame"));
             }
-            collect(fits, "shank", motion.shank(), pass, limb.side());
-            collect(fits, "foot", motion.foot(), pass, limb.side());
-            collect(fits, "thigh", motion.thigh(), pass, limb.side());
-            gap(pass, motion, limb).ifPresent(ankleGaps::add);
+            checks.add(pass, motion);
             rollOver.add(pass, motion);
         }
-        fits.forEach((segment, list) -> deformed(limb, segment, list));
-        jointGap(limb, ankleGaps);
+        findings.addAll(checks.findings());
         return rollOver;
-    }
-
-    /** The fits of the frames in which this foot stood on a platform: there the pose is used. */
-    private static void collect(
-            Map<String, List<RigidFit>> fits,
-            String segment,
-            Optional<SegmentTracking> tracking,
-            Pass pass,
-            Side side) {
-        if (tracking.isEmpty()) {
-            return;
-        }
-        List<RigidFit> of = fits.computeIfAbsent(segment, k -> new ArrayList<>());
-        for (int frame : stanceFrames(pass, side)) {
-            tracking.get().fit(frame).ifPresent(of::add);
-        }
-    }
-
-    private static List<Integer> stanceFrames(Pass pass, Side side) {
-        List<Integer> frames = new ArrayList<>();
-        double rate = pass.trial().rate();
-        double start = pass.trial().startTime();
-        for (Stance stance : pass.stances()) {
-            int last = (int) Math.floor((stance.end() - start) * rate);
-            for (int frame = (int) Math.max(0, Math.ceil((stance.start() - start) * rate));
-                    stance.side() == side && frame <= last;
-                    frame++) {
-                frames.add(frame);
-            }
-        }
-        return frames;
-    }
-
-    private void deformed(StandingLimb limb, String segment, List<RigidFit> fits) {
-        double rms = rootMeanSquare(fits.stream().map(RigidFit::rms).toList());
-        double shape = rootMeanSquare(fits.stream().map(RigidFit::shapeChange).toList());
-        double limit = DEFORMED * limb.limbLength().value();
-        if (rms > limit) {
-            findings.add(Finding.warning(
-                    "cluster.deformed",
-                    limb.side().word() + " " + segment,
-                    String.format(
-                            Locale.ROOT,
-                            "in stance the points of the %s %s depart from their standing shape by %.1f mm rms (distances"
-                                    + " between them change by %.1f mm rms), over the limit of %.1f mm: its pose is that"
-                                    + " uncertain; check for swapped or moved markers",
-                            limb.side().word(),
-                            segment,
-                            1000 * rms,
-                            1000 * shape,
-                            1000 * limit)));
-        }
-    }
-
-    private static double rootMeanSquare(List<Double> values) {
-        double sum = 0;
-        for (double v : values) {
-            sum += v * v / values.size();
-        }
-        return Math.sqrt(sum);
-    }
-
-    /** Root mean square distance of the ankle as shank and foot carry it, over the pass's stances of this foot. */
-    private static Optional<Double> gap(Pass pass, LimbMotion motion, StandingLimb limb) {
-        double sum = 0;
-        int n = 0;
-        for (int at : stanceFrames(pass, limb.side())) {
-            Optional<Vec3> byShank = motion.ankle(limb, at);
-            Optional<Vec3> byFoot = motion.foot().flatMap(f -> f.at(limb.ankle().position(), at));
-            if (byShank.isPresent() && byFoot.isPresent()) {
-                double d = byShank.get().distance(byFoot.get());
-                sum += d * d;
-                n++;
-            }
-        }
-        return n == 0 ? Optional.empty() : Optional.of(Math.sqrt(sum / n));
-    }
-
-    private void jointGap(StandingLimb limb, List<Double> gaps) {
-        double gap = rootMeanSquare(gaps);
-        if (!gaps.isEmpty() && gap > GAP * limb.limbLength().value()) {
-            findings.add(Finding.warning(
-                    "joint.gap",
-                    limb.side().word() + " ankle",
-                    String.format(
-                            Locale.ROOT,
-                            "shank and foot put the %s ankle %.0f mm rms apart, over the limit of %.0f mm",
-                            limb.side().word(),
-                            1000 * gap,
-                            1000 * GAP * limb.limbLength().value())));
-        }
     }
 
     /** Segments whose points were tracked in walking: the shank, and the foot's first segment where it holds the heads. */

@@ -93,7 +93,7 @@ final class GaitSubject {
                         GaitSettings.unknownSubject().limbLength(),
                         weight(options.mass())));
         run(trials, first, new ArrayList<>());
-        double found = mass.map(Quantity::value).orElse(Double.NaN);
+        double found = options.mass().orElse(mass.map(Quantity::value).orElse(Double.NaN));
         GaitSettings second =
                 new GaitSettings(first.gravity(), first.limbLength(), found * GaitSettings.STANDARD_GRAVITY);
         run(trials, second, findings);

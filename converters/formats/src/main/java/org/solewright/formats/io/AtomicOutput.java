@@ -6,6 +6,7 @@ import java.nio.file.AtomicMoveNotSupportedException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import java.util.concurrent.atomic.AtomicLong;
 
 /** Writes a file beside its target and renames it, so that a half-written file never bears the target's name. */
 public final class AtomicOutput {
@@ -21,6 +22,8 @@ public final class AtomicOutput {
          */
         void fill(OutputStream out) throws IOException;
     }
+
+    private static final AtomicLong COUNT = new AtomicLong();
 
     private AtomicOutput() {}
 
@@ -41,7 +44,10 @@ public final class AtomicOutput {
         if (!Files.isDirectory(folder)) {
             throw new IOException("its folder does not exist");
         }
-        Path temporary = Files.createTempFile(folder, ".writing-", ".part");
+        // Not createTempFile: its files are for their owner alone, and a result is for everybody who may read the
+        // folder.
+        Path temporary =
+                folder.resolve(".writing-" + ProcessHandle.current().pid() + "-" + COUNT.incrementAndGet() + ".part");
         try {
             try (OutputStream out = Files.newOutputStream(temporary)) {
                 filler.fill(out);
