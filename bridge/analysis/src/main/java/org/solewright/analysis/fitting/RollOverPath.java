@@ -47,7 +47,7 @@ public final class RollOverPath {
         }
 
         /**
-         * Adds the next sample.
+         * Adds the next sample; one that is not finite is left out.
          *
          * @param centreOfPressure laboratory frame, m
          * @param ankle laboratory frame, m
@@ -60,6 +60,9 @@ public final class RollOverPath {
             double ux = u.x() / length;
             double uy = u.y() / length;
             Vec3 p = R_LW.inverseVector(centreOfPressure.minus(ankle));
+            if (!Double.isFinite(p.x() + p.y() + ux + uy)) {
+                return;
+            }
             if (3 * n == xyf.length) {
                 xyf = java.util.Arrays.copyOf(xyf, 2 * xyf.length);
             }

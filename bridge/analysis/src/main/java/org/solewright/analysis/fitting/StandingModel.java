@@ -7,6 +7,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.apache.commons.math3.exception.MathIllegalStateException;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
@@ -39,6 +40,17 @@ public final class StandingModel {
      * @return the limb, or why there is none
      */
     public static StandingOutcome build(StandingPosture posture, StandingSettings settings, Side side) {
+        try {
+            return checked(posture, settings, side);
+        } catch (IllegalArgumentException | MathIllegalStateException e) {
+            // Landmarks that lie impossibly break the invariant of some part of the limb, which says so.
+            return new StandingOutcome.Refused(
+                    "the standing landmarks of the " + side.word() + " side make no limb (" + e.getMessage() + ")",
+                    "check the landmark map, the units and the recording");
+        }
+    }
+
+    private static StandingOutcome checked(StandingPosture posture, StandingSettings settings, Side side) {
         List<SidedLandmark> missing = LimbGeometry.missing(posture, side);
         if (!missing.isEmpty()) {
             return new StandingOutcome.Refused(
@@ -87,6 +99,15 @@ public final class StandingModel {
                 centres.hip().position().y() - floorHeight,
                 centres.hip().basis(),
                 centres.hip().sd());
+        if (!(limbLength.value() > 0)) {
+            return new StandingOutcome.Refused(
+                    String.format(
+                            Locale.ROOT,
+                            "the %s hip lies %.3f m below the floor in the standing trial",
+                            side.word(),
+                            -limbLength.value()),
+                    "check the landmark map, the units and --floor");
+        }
         double scale = footLength.map(Quantity::value).orElse(limb.heelToFirstHead() / LimbGeometry.HEAD_SHARE);
         return new StandingOutcome.Built(new StandingLimb(
                 side,

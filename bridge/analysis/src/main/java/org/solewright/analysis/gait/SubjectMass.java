@@ -17,15 +17,20 @@ import org.solewright.domain.gait.Use;
 public record SubjectMass(Quantity mass, int windows, boolean isWhole) {
 
     private static final double WINDOW_DOUBT = 0.01;
+    /** Heavier than any land animal, kg: a window that carries more has broken loads. */
+    private static final double HEAVIEST = 20000;
 
     /**
      * The mass.
      *
      * @param steps steps by pass
-     * @return empty where there is no step
+     * @return empty where there is no step with a believable load
      */
     public static Optional<SubjectMass> of(List<List<Step>> steps) {
-        List<Step> all = steps.stream().flatMap(List::stream).toList();
+        List<Step> all = steps.stream()
+                .flatMap(List::stream)
+                .filter(s -> massOf(s) > 0 && massOf(s) < HEAVIEST)
+                .toList();
         List<Step> whole = all.stream()
                 .filter(s -> s.loads().trailing().allows(Use.MASS)
                         && s.loads().leading().allows(Use.MASS))
@@ -34,16 +39,15 @@ public record SubjectMass(Quantity mass, int windows, boolean isWhole) {
         if (used.isEmpty()) {
             return Optional.empty();
         }
-        double[] masses = used.stream()
-                .mapToDouble(s -> s.loads()
-                                .totalForce()
-                                .up()
-                                .mean(s.loads().windowFrom(), s.loads().windowTo())
-                        / s.loads().gravity())
-                .toArray();
+        double[] masses = used.stream().mapToDouble(SubjectMass::massOf).toArray();
         Sample sample = Sample.of(masses);
         double sd = sample.sd().orElse(WINDOW_DOUBT * sample.mean());
         return Optional.of(
                 new SubjectMass(Quantity.of(sample.mean(), Basis.MEASURED, sd), masses.length, !whole.isEmpty()));
+    }
+
+    private static double massOf(Step step) {
+        StepLoads loads = step.loads();
+        return loads.totalForce().up().mean(loads.windowFrom(), loads.windowTo()) / loads.gravity();
     }
 }

@@ -41,7 +41,12 @@ public record WalkingTrial(
             this.xyz = xyz;
         }
 
-        int frames() {
+        /**
+         * Number of frames.
+         *
+         * @return zero or more
+         */
+        public int frames() {
             return xyz.length / 3;
         }
 

@@ -99,6 +99,31 @@ class InventedWalkTest {
         return v;
     }
 
+    @Test
+    void strideIsTheWindowWhereAllItsLoadsAreWhole() {
+        SyntheticWalk walk = new SyntheticWalk(PARAMETERS);
+        List<PlatformLoads> platforms = new ArrayList<>();
+        int frames = trial(walk).pelvis().frames();
+        for (int foot = 1; foot <= 4; foot++) {
+            platforms.add(platform(walk, foot, foot, frames));
+        }
+        WalkingTrial two = trial(walk);
+        WalkingTrial four = new WalkingTrial(
+                two.name(), two.rate(), two.startTime(), two.up(), two.pelvis(), two.feet(), platforms);
+        List<Step> all = StepFinder.steps(
+                Pass.of(four, new GaitSettings(GaitSettings.STANDARD_GRAVITY, 0.95, Double.NaN)), new ArrayList<>());
+        assertThat(all).hasSize(3);
+        assertThat(all).extracting(s -> s.loads().isStride()).containsExactly(false, true, false);
+        StepMechanics m = StepMechanics.of(all.get(1));
+        WalkTruth.Step step =
+                (WalkTruth.Step) truth.transitions().get(truth.transitions().size() - 1);
+        assertThat(value(m, Measure.MASS)).isCloseTo(70, within(70 * 1e-4));
+        assertThat(value(m, Measure.PUSH_OFF_DOUBLE_SUPPORT))
+                .isCloseTo(step.trailingPositive(), within(2e-3 * step.trailingPositive()));
+        assertThat(value(m, Measure.COLLISION_DOUBLE_SUPPORT))
+                .isCloseTo(step.leadingNegative(), within(-2e-3 * step.leadingNegative()));
+    }
+
     private static WalkingTrial trial(SyntheticWalk walk) {
         int frames = (int) Math.floor(STEPS * walk.stepTime() * RATE) + 1;
         double[] pelvis = new double[3 * frames];

@@ -41,6 +41,7 @@ import org.solewright.formats.io.FormatException;
 public final class FitUseCase {
 
     private static final double PROVISIONAL_MASS = 70;
+    private static final double LONGEST_LIMB = 10;
 
     /**
      * What the user asked for.
@@ -287,6 +288,7 @@ public final class FitUseCase {
                 .filter(StandingOutcome.Built.class::isInstance)
                 .mapToDouble(
                         o -> ((StandingOutcome.Built) o).limb().limbLength().value())
+                .filter(l -> l > 0 && l < LONGEST_LIMB)
                 .average();
     }
 

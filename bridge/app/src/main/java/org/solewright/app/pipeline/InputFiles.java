@@ -52,6 +52,13 @@ final class InputFiles {
                         "the " + role + " recording holds no point frames",
                         "give a recording with markers");
             }
+            if (!(r.rate() > 0)) {
+                throw new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        file.toString(),
+                        "the " + role + " recording states no frame rate",
+                        "give a recording with POINT:RATE");
+            }
             recordings.add(r);
         }
         return recordings;

@@ -188,11 +188,12 @@ public final class C3dParameters {
         private C3dParameter value(String group, Raw raw) throws FormatException {
             int width = raw.type() == 2 || raw.type() == 4 || raw.type() == 1 ? raw.type() : -1;
             int size = Math.abs(width);
+            long room = Math.max(0, (raw.end() - raw.data()) / size);
             long count = 1;
             for (int d : raw.dimensions()) {
-                count *= d;
+                // Up to 255 dimensions of up to 255: the product is held just above what there is room for.
+                count = d == 0 ? 0 : Math.min(count, room + 1) * d;
             }
-            long room = Math.max(0, (raw.end() - raw.data()) / size);
             if (count > room) {
                 findings.add(cut(group + ":" + raw.name(), raw.data()));
                 count = room;

@@ -3,7 +3,7 @@ package org.solewright.formats.c3d;
 /**
  * The point samples of a file in its own length unit, {@code [frames][points]} row-major.
  *
- * <p>A sample is valid where its fourth word, as a signed 16-bit integer, is not negative and its coordinates are numbers.
+ * <p>A sample is valid where its fourth word, as a signed 16-bit integer, is not negative and its coordinates are finite numbers.
  * 65535 is -1, as 16 of the files seen write it; a word outside the 16-bit range means valid with unknown residual.
  */
 public final class C3dPoints {
@@ -129,7 +129,10 @@ public final class C3dPoints {
      */
     public boolean isValid(int frame, int point) {
         int i = frame * points + point;
-        return word[i] >= 0 && !Float.isNaN(xyz[3 * i] + xyz[3 * i + 1] + xyz[3 * i + 2]);
+        return word[i] >= 0
+                && Float.isFinite(xyz[3 * i])
+                && Float.isFinite(xyz[3 * i + 1])
+                && Float.isFinite(xyz[3 * i + 2]);
     }
 
     /**

@@ -15,6 +15,7 @@ final class C3dReader {
 
     private static final int BLOCK = 512;
     private static final int KEY = 0x50;
+    private static final double FASTEST = 1e7;
     private static final int MOST_POINTS = 65535;
 
     private final String source;
@@ -112,6 +113,10 @@ final class C3dReader {
         return Optional.empty();
     }
 
+    private static boolean isRate(double value) {
+        return value > 0 && value < FASTEST;
+    }
+
     private static boolean hasParameters(ByteCursor c, int block) {
         return block > 0 && c.holds((block - 1L) * BLOCK, 8);
     }
@@ -124,8 +129,8 @@ final class C3dReader {
         long declared = FrameCount.declared(header, p);
         layout = frames(c, layout, header, p);
         double rate = p.number("POINT", "RATE");
-        if (!(rate > 0)) {
-            rate = header.rate() > 0 ? header.rate() : Double.NaN;
+        if (!isRate(rate)) {
+            rate = isRate(header.rate()) ? header.rate() : Double.NaN;
         }
         C3dPoints points = withData ? C3dPoints.read(c, layout, scale) : C3dPoints.none(layout.points());
         flags(points);

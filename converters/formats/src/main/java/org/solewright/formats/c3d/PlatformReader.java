@@ -84,6 +84,9 @@ final class PlatformReader {
                     "names channels " + p.channels() + ", expected " + channels + " between 1 and "
                             + file.analog().channels());
         }
+        if (!(file.analog().rate() > 0 && file.rate() > 0)) {
+            return refuse(where, "has no sample rate");
+        }
         if (!p.corners().stream().allMatch(Vec3::isFinite)) {
             return refuse(where, "has corners that are not finite");
         }
