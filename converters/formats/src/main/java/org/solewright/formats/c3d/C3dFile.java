@@ -1,8 +1,10 @@
 package org.solewright.formats.c3d;
 
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.List;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.motion.RecordedEvent;
@@ -46,6 +48,9 @@ public record C3dFile(
         List<C3dPlatform> platforms,
         long declaredFrames,
         List<Finding> findings) {
+
+    /** Parameters may run on after a data block that the header puts too early. */
+    private static final int LEAST_PARAMETER_BLOCKS = 64;
 
     /** Copies the lists. */
     public C3dFile {
@@ -91,7 +96,27 @@ public record C3dFile(
                     "has " + size + " bytes, more than the 2 GB that can be read",
                     "split the recording");
         }
-        return new C3dReader(file.toString(), name, Files.readAllBytes(file), withData).read();
+        byte[] bytes = withData ? Files.readAllBytes(file) : beforeData(file, size);
+        return new C3dReader(file.toString(), name, bytes, size, withData).read();
+    }
+
+    /** Header and parameters alone: the bytes before the first data block. */
+    private static byte[] beforeData(Path file, long size) throws IOException {
+        try (InputStream in = Files.newInputStream(file)) {
+            byte[] header = in.readNBytes(C3dHeader.BYTES);
+            if (header.length < C3dHeader.BYTES) {
+                return header;
+            }
+            // Little-endian in two of the three processors; the larger reading of both orders holds the parameters.
+            int a = header[16] & 0xff;
+            int b = header[17] & 0xff;
+            int parameters = header[0] & 0xff;
+            long blocks = Math.max(Math.min((b << 8) | a, (a << 8) | b), parameters + LEAST_PARAMETER_BLOCKS);
+            long end = Math.min(size, blocks * C3dHeader.BYTES);
+            byte[] all = Arrays.copyOf(header, (int) end);
+            int read = in.readNBytes(all, C3dHeader.BYTES, (int) end - C3dHeader.BYTES);
+            return Arrays.copyOf(all, C3dHeader.BYTES + read);
+        }
     }
 
     /**

@@ -21,13 +21,24 @@ final class C3dReader {
     private final String source;
     private final String name;
     private final byte[] bytes;
+    private final long size;
     private final boolean withData;
     private final List<Finding> findings = new ArrayList<>();
 
-    C3dReader(String source, String name, byte[] bytes, boolean withData) {
+    /**
+     * A reader.
+     *
+     * @param source the file as the user named it
+     * @param name the file's name without folder
+     * @param bytes the whole file, or its beginning where no data are wanted
+     * @param size of the whole file
+     * @param withData whether samples are decoded
+     */
+    C3dReader(String source, String name, byte[] bytes, long size, boolean withData) {
         this.source = source;
         this.name = name;
         this.bytes = bytes;
+        this.size = size;
         this.withData = withData;
     }
 
@@ -97,7 +108,7 @@ final class C3dReader {
     }
 
     /** The processor under which the header's data block, frames and rate make sense. */
-    private static Optional<Processor> guess(ByteCursor c) throws FormatException {
+    private Optional<Processor> guess(ByteCursor c) throws FormatException {
         for (Processor p : Processor.values()) {
             C3dHeader h = C3dHeader.read(c.as(p));
             boolean isPlausible = h.rate() >= 1
@@ -105,7 +116,7 @@ final class C3dReader {
                     && h.dataBlock() > 0
                     && h.dataBlock() < 1000
                     && h.lastFrame() >= h.firstFrame()
-                    && (h.dataBlock() - 1L) * BLOCK <= c.length();
+                    && (h.dataBlock() - 1L) * BLOCK <= size;
             if (isPlausible) {
                 return Optional.of(p);
             }
@@ -125,9 +136,9 @@ final class C3dReader {
         double stored = p.number("POINT", "SCALE");
         float scale = Double.isNaN(stored) ? header.scale() : (float) stored;
         boolean isReal = scale < 0;
-        DataLayout layout = layout(c, header, p, isReal);
+        DataLayout layout = layout(header, p, isReal);
         long declared = FrameCount.declared(header, p);
-        layout = frames(c, layout, header, p);
+        layout = frames(layout, header, p);
         double rate = p.number("POINT", "RATE");
         if (!isRate(rate)) {
             rate = isRate(header.rate()) ? header.rate() : Double.NaN;
@@ -165,13 +176,13 @@ final class C3dReader {
     }
 
     /** Points, channels and samples per frame: the file's size decides where header and parameters disagree. */
-    private DataLayout layout(ByteCursor c, C3dHeader header, C3dParameters p, boolean isReal) {
+    private DataLayout layout(C3dHeader header, C3dParameters p, boolean isReal) {
         int block = header.dataBlock();
         double stored = p.find("POINT", "DATA_START").map(d -> d.unsigned(0)).orElse(Double.NaN);
         if (block < 1 && stored >= 1) {
             block = (int) stored;
         }
-        int start = (int) Math.min((Math.max(1, block) - 1L) * BLOCK, c.length());
+        int start = (int) Math.min((Math.max(1, block) - 1L) * BLOCK, size);
         int perFrame = header.analogPerFrame();
         if (perFrame == 0) {
             double ratio = p.number("ANALOG", "RATE") / p.number("POINT", "RATE");
@@ -189,7 +200,7 @@ final class C3dReader {
             DataLayout byHeader = new DataLayout(start, 0, points, channels, perFrame, isReal);
             DataLayout byParameters = new DataLayout(start, 0, (int) usedPoints, channels, perFrame, isReal);
             long frames = FrameCount.declared(header, p);
-            if (misfit(c, byParameters, frames) < misfit(c, byHeader, frames)) {
+            if (misfit(byParameters, frames) < misfit(byHeader, frames)) {
                 points = (int) usedPoints;
             }
         }
@@ -204,21 +215,20 @@ final class C3dReader {
                     "",
                     "the header says " + words + " analog words per frame, the parameters " + channels + " channels of "
                             + perFrame + " samples"));
-            if (misfit(c, other, frames) < misfit(c, layout, frames)) {
+            if (misfit(other, frames) < misfit(layout, frames)) {
                 layout = other;
             }
         }
         return layout;
     }
 
-    private static long misfit(ByteCursor c, DataLayout layout, long frames) {
-        long room = c.length() - (long) layout.start();
+    private long misfit(DataLayout layout, long frames) {
+        long room = size - layout.start();
         return Math.abs(room - frames * layout.frameBytes());
     }
 
-    private DataLayout frames(ByteCursor c, DataLayout layout, C3dHeader header, C3dParameters p)
-            throws FormatException {
-        long room = Math.max(0, c.length() - (long) layout.start());
+    private DataLayout frames(DataLayout layout, C3dHeader header, C3dParameters p) throws FormatException {
+        long room = Math.max(0, size - layout.start());
         long bytes = layout.frameBytes();
         if (bytes == 0) {
             if (p.all().isEmpty()) {
@@ -233,7 +243,7 @@ final class C3dReader {
             if (fits == 0 && p.all().isEmpty()) {
                 throw new FormatException(
                         source,
-                        "ends at byte " + c.length() + " before its first frame at byte " + layout.start(),
+                        "ends at byte " + size + " before its first frame at byte " + layout.start(),
                         "get a complete copy of the file");
             }
             String message = "the file says " + count + " frames and ends after " + fits + " whole ones";
