@@ -7,7 +7,7 @@ import org.solewright.analysis.numerics.Series;
  * right).
  *
  * <p>m = mean F_up / g over the window, a = (F - mean F_up - bias) / m, the velocity shifted so that its mean over the
- * window is the given one ([Donelan, Kram & Kuo 2002]; over a single step the sideways mean is the pelvis's, not zero).
+ * window is the given one ([Donelan, Kram and Kuo 2002]; over a single step the sideways mean is the pelvis's, not zero).
  * Outside the window the same constants continue the motion as far as all loads are known.
  */
 public final class CentreOfMassMotion {

@@ -6,7 +6,7 @@ import org.solewright.analysis.numerics.Series;
 
 /**
  * The successive phases of one limb's power on the centre of mass over its stance: collision, rebound, preload,
- * push-off ([Kuo, Donelan & Ruina 2005]), bounded by the zero crossings of the power. Excursions of less than 1 % of
+ * push-off ([Kuo, Donelan and Ruina 2005]), bounded by the zero crossings of the power. Excursions of less than 1 % of
  * the stance's work or 15 ms (scaled) belong to the phase around them.
  */
 final class PowerPhases {

@@ -15,7 +15,7 @@ import org.solewright.domain.gait.Use;
 
 /**
  * What one step-to-step transition cost, from measured loads: work windows, integration and phases of the centre of mass
- * ([Donelan, Kram & Kuo 2002], [Kuo, Donelan & Ruina 2005]) and the collision measures of [Lee et al. 2011].
+ * ([Donelan, Kram and Kuo 2002], [Kuo, Donelan and Ruina 2005]) and the collision measures of [Lee et al. 2011].
  *
  * <p>A value that the loads cannot give is absent from {@link #values()}, and a finding says why. The SD of a work is
  * its spread over the doubt about the mean velocity (upward 0.015 m/s on a step, 0.003 m/s on a stride; forward 0.02

@@ -203,7 +203,7 @@ public final class SyntheticWalk {
     record Moment(int step, int phase, double time) {
 
         boolean isBridge() {
-            return phase % 2 == 1;
+            return phase % 2 != 0;
         }
 
         int pivot() {

@@ -6,7 +6,7 @@ import org.solewright.domain.geometry.Vec3;
 
 /**
  * The path of the centre of pressure in a body frame in the sagittal plane of the walking frame: the roll-over shape of
- * [Hansen & Childress 2004]. Origin ankle, y from the ankle to the upper joint, x forward; m.
+ * [Hansen and Childress 2004]. Origin ankle, y from the ankle to the upper joint, x forward; m.
  */
 public final class RollOverPath {
 

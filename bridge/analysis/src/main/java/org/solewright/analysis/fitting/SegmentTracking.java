@@ -8,7 +8,7 @@ import org.solewright.domain.geometry.Vec3;
 
 /**
  * The pose of one segment over a recording, frame by frame, from the points that are fixed to it: separate rigid fits
- * ([Soederkvist & Wedin 1993]) of where the points are to where they were in the standing trial.
+ * ([Soederkvist and Wedin 1993]) of where the points are to where they were in the standing trial.
  */
 public final class SegmentTracking {
 

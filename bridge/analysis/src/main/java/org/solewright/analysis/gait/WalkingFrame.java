@@ -10,7 +10,7 @@ import org.solewright.domain.geometry.Vec3;
 
 /**
  * The walking frame of one pass: x along the straight line fitted to the pelvis over the longest whole number of strides
- * in view (else the whole pass), y up, z to the subject's right ([Wu & Cavanagh 1995]).
+ * in view (else the whole pass), y up, z to the subject's right ([Wu and Cavanagh 1995]).
  */
 final class WalkingFrame {
 

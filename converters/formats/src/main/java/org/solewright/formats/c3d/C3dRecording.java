@@ -22,7 +22,7 @@ final class C3dRecording {
                     "units.assumed",
                     "",
                     "the length unit is " + (file.unit().isEmpty() ? "not stated" : "'" + file.unit() + "'")
-                            + "; lengths are taken as " + (metres == 1 ? "m" : metres == 1e-2 ? "cm" : "mm")
+                            + "; lengths are taken as " + LengthUnit.word(metres)
                             + (LengthUnit.fitting(file.platforms()).isPresent()
                                     ? ", which makes the platforms 0.05 to 3 m wide"
                                     : "")));

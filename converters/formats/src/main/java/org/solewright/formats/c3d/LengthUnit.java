@@ -48,6 +48,11 @@ final class LengthUnit {
         return Optional.empty();
     }
 
+    /** The word for one of the assumed units. */
+    static String word(double metres) {
+        return metres > 0.5 ? "m" : metres > 0.005 ? "cm" : "mm";
+    }
+
     static boolean hasPlausibleSides(List<Vec3> corners, double factor) {
         for (int i = 0; i < 4; i++) {
             double side = factor * corners.get(i).distance(corners.get((i + 1) % 4));
