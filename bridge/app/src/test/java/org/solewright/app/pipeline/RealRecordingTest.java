@@ -23,8 +23,15 @@ import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.gait.ContactRow;
+import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.gait.Use;
+import org.solewright.domain.geometry.Rotation;
+import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.PointTrack;
+import org.solewright.domain.motion.Recording;
+import org.solewright.formats.c3d.C3dFile;
+import org.solewright.formats.c3d.C3dWriter;
 import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
 
@@ -241,5 +248,102 @@ class RealRecordingTest {
             assertThat(row.number("plantigrade_6_J").orElse(Double.NaN))
                     .isLessThan(row.number("plantigrade_3_J").orElse(Double.NaN));
         }
+    }
+
+    @Test
+    void turnedLaboratoryGivesTheSameWorks() throws IOException, FormatException, UseCaseException, URISyntaxException {
+        // independent: physics does not know the laboratory's axes. y up, walking towards -z, written by our own writer
+        // as
+        // type-2 platforms; float32 leaves 1e-6 of a coordinate or force.
+        Rotation turn = new Rotation(Vec3.Z.times(-1), Vec3.X.times(-1), Vec3.Y);
+        List<Path> turned = new java.util.ArrayList<>();
+        for (int walk = 1; walk <= 3; walk++) {
+            Path file = folder.resolve("s26-walking-hybrid-1-" + walk + ".c3d");
+            C3dWriter.write(
+                    file,
+                    turned(C3dFile.read(recording("walking-hybrid-1-" + walk)).toRecording(), turn));
+            turned.add(file);
+        }
+        GaitOptions o = options(List.of());
+        AppraiseUseCase.Result again = AppraiseUseCase.run(new AppraiseUseCase.Request(
+                new GaitOptions(
+                        List.of(),
+                        turned,
+                        o.landmarks(),
+                        o.mass(),
+                        o.stature(),
+                        o.population(),
+                        o.sex(),
+                        o.contacts(),
+                        o.floor(),
+                        false,
+                        o.markerRadius(),
+                        o.markerCutoff()),
+                List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
+                "test"));
+        for (int row = 0; row < 3; row++) {
+            TransitionRow before = result.cost().rows().stream()
+                    .filter(r -> !r.text("trial").orElse("").equals("*"))
+                    .toList()
+                    .get(row);
+            TransitionRow after = again.cost().rows().stream()
+                    .filter(r -> !r.text("trial").orElse("").equals("*"))
+                    .toList()
+                    .get(row);
+            for (String column : List.of(
+                    "push_off_J",
+                    "collision_J",
+                    "step_length_m",
+                    "step_width_m",
+                    "speed_m_s",
+                    "transition_angle_deg",
+                    "collision_fraction",
+                    "compass_J")) {
+                double expected = before.number(column).orElseThrow();
+                assertThat(after.number(column).orElse(Double.NaN))
+                        .as(column)
+                        .isCloseTo(expected, org.assertj.core.api.Assertions.within(2e-4 * Math.abs(expected)));
+            }
+        }
+    }
+
+    private static Recording turned(Recording r, Rotation turn) {
+        List<PointTrack> points = r.points().stream()
+                .map(p -> {
+                    double[] xyz = new double[3 * p.frames()];
+                    p.copyTo(xyz, 0);
+                    return PointTrack.of(p.label(), turned(xyz, turn));
+                })
+                .toList();
+        List<PlatformLoads> platforms = r.platforms().stream()
+                .map(p -> {
+                    double[] force = new double[3 * p.samples()];
+                    double[] moment = new double[force.length];
+                    p.copyForceTo(force, 0);
+                    p.copyMomentTo(moment, 0);
+                    return new PlatformLoads(
+                            p.number(),
+                            2,
+                            p.corners().stream().map(turn::transformVector).toList(),
+                            turn.transformVector(p.up()),
+                            p.rate(),
+                            p.time(0),
+                            true,
+                            turned(force, turn),
+                            turned(moment, turn));
+                })
+                .toList();
+        return new Recording(r.name(), r.rate(), r.firstFrame(), r.frames(), points, platforms, r.events(), List.of());
+    }
+
+    private static double[] turned(double[] xyz, Rotation turn) {
+        double[] out = new double[xyz.length];
+        for (int i = 0; i < xyz.length; i += 3) {
+            Vec3 v = turn.transformVector(new Vec3(xyz[i], xyz[i + 1], xyz[i + 2]));
+            out[i] = v.x();
+            out[i + 1] = v.y();
+            out[i + 2] = v.z();
+        }
+        return out;
     }
 }
