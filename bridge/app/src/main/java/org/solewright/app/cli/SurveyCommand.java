@@ -63,20 +63,22 @@ final class SurveyCommand implements Callable<Integer> {
                 }
             } catch (UseCaseException e) {
                 failed++;
-                report(out, file, "file.unreadable", e.getMessage() + ": " + e.whatToDo());
+                report(out, file, Finding.error("file.unreadable", "", e.getMessage() + ": " + e.whatToDo()));
             } catch (FormatException e) {
                 failed++;
-                report(out, file, "file.format", e.getMessage() + ": " + e.whatToDo());
+                report(out, file, Finding.error("file.format", "", e.getMessage() + ": " + e.whatToDo()));
             }
             out.flush();
         }
         return failed == 0 ? ExitCode.DONE : failed == files.size() ? ExitCode.INPUT : ExitCode.SOME_FAILED;
     }
 
-    private void report(PrintWriter out, Path file, String code, String message) {
-        spec.commandLine().getErr().println(FindingPrinter.printable("solewright: " + file + ": " + message));
+    private void report(PrintWriter out, Path file, Finding finding) {
+        spec.commandLine()
+                .getErr()
+                .println(FindingPrinter.printable("solewright: " + file + ": " + finding.message()));
         if (isJson) {
-            out.println(SurveyJson.failed(file.toString(), code, message));
+            out.println(SurveyJson.failed(file.toString(), finding));
         }
     }
 }

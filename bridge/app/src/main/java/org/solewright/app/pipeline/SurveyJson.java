@@ -57,14 +57,13 @@ public final class SurveyJson {
      * The survey of a file that could not be read.
      *
      * @param file as the user named it
-     * @param code finding code
-     * @param message what is wrong and what to do
+     * @param finding what is wrong and what to do
      * @return one line
      */
-    public static String failed(String file, String code, String message) {
+    public static String failed(String file, Finding finding) {
         ObjectNode root = NODES.objectNode();
         root.put("file", file);
-        findings(root.putArray("findings"), List.of(Finding.error(code, "", message)));
+        findings(root.putArray("findings"), List.of(finding));
         return text(root);
     }
 

@@ -17,6 +17,9 @@ import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.solewright.domain.gait.PlatformLoads;
+import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.PointTrack;
+import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.c3d.C3dWriter;
@@ -113,6 +116,42 @@ class CommandLineTest {
         assertThat(first.at("/platforms/0/peakVertical_N").asDouble()).isBetween(600.0, 1400.0);
         JsonNode second = new ObjectMapper().readTree(lines.get(1));
         assertThat(second.at("/analog/rate_Hz").isNull()).isTrue();
+    }
+
+    @Test
+    void surveyAsAPageNamesGapsPlatformsAndEvents() throws IOException, FormatException {
+        // exact: 4 frames at 100 Hz, the second point lost in frames 2 and 3; 812.5 is a float.
+        double[] whole = {0.1, 0.2, 0.3, 0.1, 0.2, 0.3, 0.1, 0.2, 0.3, 0.1, 0.2, 0.3};
+        double[] gapped = whole.clone();
+        Arrays.fill(gapped, 3, 9, Double.NaN);
+        double[] force = {0, 0, 0, 0, 0, 100, 0, 0, 812.5, 0, 0, 0};
+        List<Vec3> corners =
+                List.of(new Vec3(0.5, -0.3, 0), new Vec3(0, -0.3, 0), new Vec3(0, 0.3, 0), new Vec3(0.5, 0.3, 0));
+        Path file = folder.resolve("page.c3d");
+        C3dWriter.write(
+                file,
+                new Recording(
+                        "page.c3d",
+                        100,
+                        1,
+                        4,
+                        List.of(PointTrack.of("HEEL", whole), PointTrack.of("TOE", gapped)),
+                        List.of(new PlatformLoads(1, 2, corners, Vec3.Z, 100, 0, true, force, new double[12])),
+                        List.of(new RecordedEvent(0.025, "Left", "Foot Strike", RecordedEvent.Source.GROUP)),
+                        List.of()));
+        Called c = call("survey", file.toString());
+        assertThat(c.code()).as(c.err()).isZero();
+        assertThat(c.out())
+                .contains("intel, real samples, 4 frames from 1 at 100 Hz (0.040 s), lengths in mm")
+                .contains("2 points, without gaps: HEEL")
+                .containsPattern("TOE +lost in 2 of 4 frames, longest gap 2 frames \\(0\\.020 s\\)")
+                .contains("6 analog channels at 100 Hz: Fx1 Fy1 Fz1 Mx1 My1 Mz1")
+                .contains("platform 1, type 2: corners (0.500 -0.300 0.000)")
+                .contains("peak vertical 812.5 N")
+                .contains("event 0.025 s Left Foot Strike");
+        assertThat(call("survey", "--header", file.toString()).out())
+                .contains("2 points: HEEL TOE")
+                .doesNotContain("peak");
     }
 
     @Test
