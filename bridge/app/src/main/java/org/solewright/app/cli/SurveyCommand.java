@@ -74,9 +74,7 @@ final class SurveyCommand implements Callable<Integer> {
     }
 
     private void report(PrintWriter out, Path file, Finding finding) {
-        spec.commandLine()
-                .getErr()
-                .println(FindingPrinter.printable("solewright: " + file + ": " + finding.message()));
+        spec.commandLine().getErr().println(FindingPrinter.printable("solewright: " + file + ": " + finding.message()));
         if (isJson) {
             out.println(SurveyJson.failed(file.toString(), finding));
         }

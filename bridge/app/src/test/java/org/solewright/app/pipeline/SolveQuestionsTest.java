@@ -22,7 +22,8 @@ class SolveQuestionsTest {
     private static final double ROUNDING = 1e-13;
 
     private static JsonNode ask(String question, String inputs) throws IOException, FormatException {
-        String json = "{\"id\": 1, \"question\": \"" + question + "\", \"inputs\": {" + inputs.replace('\'', '"') + "}}";
+        String json =
+                "{\"id\": 1, \"question\": \"" + question + "\", \"inputs\": {" + inputs.replace('\'', '"') + "}}";
         String answers = new SolveQuestions()
                 .answer("questions", json.getBytes(StandardCharsets.UTF_8))
                 .json();
@@ -57,7 +58,8 @@ class SolveQuestionsTest {
         // exact: D = 2 R alpha; the hip moves level, nothing is lost.
         is(o, "/halfAngle", 1 / 3.0);
         is(o, "/arcLengthNeeded", 0.6);
-        for (String name : new String[] {"/transitionAngle", "/pushOffFactor", "/noPushFactor", "/simultaneousFactor"}) {
+        for (String name :
+                new String[] {"/transitionAngle", "/pushOffFactor", "/noPushFactor", "/simultaneousFactor"}) {
             is(o, name, 0);
         }
     }
@@ -91,7 +93,8 @@ class SolveQuestionsTest {
     @Test
     void polygonOfTwoPivotsHasAnInnerAndAStepTransition() throws IOException, FormatException {
         JsonNode o = ask("rolling.polygon", "'pivots': [[-0.1, -0.9], [0.1, -0.9]], 'stepLength': 0.6");
-        // exact: spacings 0.2 and 0.6 - 0.2, r^2 = 0.82; tan^2 = s^2/(4 r^2 - s^2), sin^2(delta) = q (1 - q/4), q = s^2/r^2.
+        // exact: spacings 0.2 and 0.6 - 0.2, r^2 = 0.82; tan^2 = s^2/(4 r^2 - s^2), sin^2(delta) = q (1 - q/4), q =
+        // s^2/r^2.
         double inner = 0.04 / (4 * 0.82 - 0.04);
         double last = 0.16 / (4 * 0.82 - 0.16);
         assertThat(o.at("/transitions/0/kind").asText()).isEqualTo("inner");
