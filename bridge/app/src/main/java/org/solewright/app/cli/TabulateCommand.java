@@ -8,10 +8,13 @@ import java.io.UncheckedIOException;
 import java.io.Writer;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.concurrent.Callable;
 import org.jspecify.annotations.Nullable;
 import org.solewright.app.pipeline.Tabulation;
 import org.solewright.app.pipeline.UseCaseException;
+import org.solewright.domain.finding.Finding;
+import org.solewright.domain.finding.Severity;
 import org.solewright.formats.io.AtomicOutput;
 import org.solewright.formats.io.FormatException;
 import picocli.CommandLine.Command;
@@ -52,7 +55,14 @@ final class TabulateCommand implements Callable<Integer> {
                 .orElseThrow(() -> GaitArguments.usage(
                         "--what", "'" + what + "' is unknown", "use points, analog, loads or events"));
         Tabulation tabulation = Tabulation.of(file, table, hasUnitsRow);
-        FindingPrinter.print(spec.commandLine().getErr(), tabulation.findings());
+        List<Finding> findings = tabulation.findings();
+        for (Finding f : findings) {
+            if (f.severity() == Severity.ERROR) {
+                throw new UseCaseException(
+                        UseCaseException.Kind.INPUT, file.toString(), f.message(), "get a complete copy of the file");
+            }
+        }
+        FindingPrinter.print(spec.commandLine().getErr(), findings);
         if (out == null) {
             PrintWriter stdout = spec.commandLine().getOut();
             try {

@@ -65,12 +65,12 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
     }
 
     /**
-     * Number of frames: those read, or those declared where only the header was read.
+     * Number of whole frames that the file holds.
      *
      * @return zero or more
      */
-    public long frames() {
-        return isHeaderOnly ? file.declaredFrames() : file.frames();
+    public int frames() {
+        return file.storedFrames();
     }
 
     /**
@@ -143,7 +143,7 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
 
     private void points(List<String> lines) {
         int n = file.points().points();
-        if (isHeaderOnly) {
+        if (file.frames() == 0) {
             lines.add("  " + n + " points: " + listed(file.labels()));
             return;
         }
@@ -187,7 +187,7 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
                                 .map(c -> String.format(Locale.ROOT, "(%.3f %.3f %.3f)", c.x(), c.y(), c.z()))
                                 .collect(Collectors.joining(" "))
                         + " m"
-                        + (isHeaderOnly
+                        + (Double.isNaN(peakVertical(p.number()))
                                 ? ""
                                 : String.format(Locale.ROOT, ", peak vertical %.1f N", peakVertical(p.number())));
         return "  platform " + p.number() + ", type " + p.type() + ": " + where;

@@ -36,11 +36,16 @@ public final class SurveyJson {
         points.put("firstFrame", survey.file().firstFrame());
         number(points, "rate_Hz", survey.file().rate());
         points.put("unit", survey.file().unit());
-        survey.file().labels().forEach(points.putArray("labels")::add);
+        survey.file().labels().subList(0, survey.file().storedLabels()).forEach(points.putArray("labels")::add);
+        survey.file().labels().forEach(points.putArray("names")::add);
         ObjectNode analog = root.putObject("analog");
         analog.put("channels", survey.file().analog().channels());
         number(analog, "rate_Hz", survey.file().analog().rate());
-        survey.file().analogLabels().forEach(analog.putArray("labels")::add);
+        survey.file()
+                .analogLabels()
+                .subList(0, survey.file().storedAnalogLabels())
+                .forEach(analog.putArray("labels")::add);
+        survey.file().analogLabels().forEach(analog.putArray("names")::add);
         platforms(root.putArray("platforms"), survey);
         ArrayNode events = root.putArray("events");
         for (RecordedEvent e : survey.file().events()) {

@@ -181,6 +181,32 @@ class CommandLineTest {
         assertThat(head("events")).isEqualTo("time_s,context,label,source");
     }
 
+    @Test
+    void recordingCutBeforeItsFirstFrameGivesNoTable() throws IOException {
+        Path cut = folder.resolve("cut-parameters.c3d");
+        Files.write(cut, Arrays.copyOf(Files.readAllBytes(demo.resolve("walking-1.c3d")), 1100));
+        Path table = folder.resolve("cut.csv");
+        Called c = call("tabulate", cut.toString(), "--what", "points", "--out", table.toString());
+        assertThat(c.code()).isEqualTo(3);
+        assertThat(c.errors()).hasSize(1);
+        assertThat(table).doesNotExist();
+    }
+
+    @Test
+    void surveyAsJsonListsLabelsAsStoredAndNamesOfAllPoints() throws IOException {
+        // exact: the first parameter LABELS is that of POINT; by another name it labels nothing.
+        byte[] b = Files.readAllBytes(demo.resolve("standing.c3d"));
+        int at = new String(b, StandardCharsets.ISO_8859_1).indexOf("LABELS");
+        b[at] = 'X';
+        Path file = Files.write(folder.resolve("unlabelled.c3d"), b);
+        JsonNode points = new ObjectMapper()
+                .readTree(call("survey", "--json", file.toString()).out())
+                .get("points");
+        assertThat(points.get("labels")).isEmpty();
+        assertThat(points.get("names")).hasSize(points.get("count").asInt());
+        assertThat(points.get("names").get(0).asText()).isEqualTo("point_1");
+    }
+
     private String head(String what) {
         Called c = call("tabulate", at("walking-1.c3d"), "--what", what);
         assertThat(c.code()).isZero();

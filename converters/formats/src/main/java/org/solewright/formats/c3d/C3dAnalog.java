@@ -77,4 +77,16 @@ public final class C3dAnalog {
     public double value(int sample, int channel) {
         return (raw[sample * channels + channel] - offset[channel]) * factor[channel];
     }
+
+    /** Whether an offset of -32768 may have been meant as +32768, since the stored samples lie there. */
+    boolean isOffsetAmbiguous(int channel) {
+        if (offset[channel] != Short.MIN_VALUE || samples == 0) {
+            return false;
+        }
+        double sum = 0;
+        for (int i = channel; i < samples * channels; i += channels) {
+            sum += raw[i];
+        }
+        return sum / samples > -Short.MIN_VALUE / 2;
+    }
 }

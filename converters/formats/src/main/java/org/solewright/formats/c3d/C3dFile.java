@@ -28,7 +28,7 @@ import org.solewright.formats.io.FormatException;
  * @param events EVENT group first, then header events
  * @param parameters the parameter section
  * @param platforms force platforms as stored
- * @param declaredFrames frames that the file says it has
+ * @param storedFrames whole frames that the file holds, also where they were not read
  * @param findings what has to be said
  */
 public record C3dFile(
@@ -46,7 +46,7 @@ public record C3dFile(
         List<RecordedEvent> events,
         C3dParameters parameters,
         List<C3dPlatform> platforms,
-        long declaredFrames,
+        int storedFrames,
         List<Finding> findings) {
 
     /** Parameters may run on after a data block that the header puts too early. */
@@ -89,6 +89,9 @@ public record C3dFile(
     private static C3dFile read(Path file, boolean withData) throws IOException, FormatException {
         Path last = file.getFileName();
         String name = last == null ? file.toString() : last.toString();
+        if (Files.exists(file) && !Files.isRegularFile(file)) {
+            throw new FormatException(file.toString(), "is not a regular file", "copy the recording to a file");
+        }
         long size = Files.size(file);
         if (size > Integer.MAX_VALUE - 8) {
             throw new FormatException(
@@ -126,6 +129,24 @@ public record C3dFile(
      */
     public int frames() {
         return points.frames();
+    }
+
+    /**
+     * How many points have a label in the file; the further ones are numbered.
+     *
+     * @return at most the number of points
+     */
+    public int storedLabels() {
+        return Labels.stored(parameters, "POINT", labels.size());
+    }
+
+    /**
+     * How many analog channels have a label in the file; the further ones are numbered.
+     *
+     * @return at most the number of channels
+     */
+    public int storedAnalogLabels() {
+        return Labels.stored(parameters, "ANALOG", analogLabels.size());
     }
 
     /**

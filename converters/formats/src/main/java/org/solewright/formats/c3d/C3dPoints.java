@@ -8,7 +8,7 @@ package org.solewright.formats.c3d;
  */
 public final class C3dPoints {
 
-    private static final float WRITTEN_UNSIGNED = 65535f;
+    private static final float HIGHEST_UNSIGNED = 65535f;
     private static final float LOWEST = -32768f;
     private static final float HIGHEST = 32767f;
 
@@ -69,11 +69,9 @@ public final class C3dPoints {
                     xyz[3 * i + 2] = c.rawF32(at + 8);
                     float w = c.rawF32(at + 12);
                     at += 16;
-                    if (w == WRITTEN_UNSIGNED) {
-                        unsigned++;
-                        word[i] = -1;
-                    } else if (w >= LOWEST && w <= HIGHEST) {
+                    if (w >= LOWEST && w <= HIGHEST_UNSIGNED) {
                         word[i] = (short) w;
+                        unsigned += w > HIGHEST ? 1 : 0;
                     } else {
                         out++;
                     }
@@ -159,7 +157,7 @@ public final class C3dPoints {
         return isValid(frame, point) ? word[i] >> 8 : 0;
     }
 
-    /** Samples whose fourth word is 65535. */
+    /** Samples whose fourth word is a negative one without its sign, as 65535 is -1. */
     int written65535() {
         return written65535;
     }

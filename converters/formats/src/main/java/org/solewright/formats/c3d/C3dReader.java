@@ -1,6 +1,7 @@
 package org.solewright.formats.c3d;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -15,6 +16,9 @@ final class C3dReader {
 
     private static final int BLOCK = 512;
     private static final int KEY = 0x50;
+    /** A PNG picture has the C3D key as its second byte. Source: PNG specification, file signature. */
+    private static final byte[] PICTURE = {(byte) 0x89, 'P', 'N', 'G', '\r', '\n', 0x1a, '\n'};
+
     private static final double FASTEST = 1e7;
     private static final int MOST_POINTS = 65535;
 
@@ -64,6 +68,9 @@ final class C3dReader {
                     "is not a C3D file: byte 1 is " + (bytes.length < 2 ? "missing" : hex(bytes[1]))
                             + ", expected 0x50",
                     "give a C3D file");
+        }
+        if (Arrays.equals(bytes, 0, Math.min(PICTURE.length, bytes.length), PICTURE, 0, PICTURE.length)) {
+            throw new FormatException(source, "is not a C3D file: it is a PNG picture", "give a C3D file");
         }
         if (bytes.length < BLOCK) {
             throw new FormatException(
@@ -137,17 +144,17 @@ final class C3dReader {
         float scale = Double.isNaN(stored) ? header.scale() : (float) stored;
         boolean isReal = scale < 0;
         DataLayout layout = layout(header, p, isReal);
-        long declared = FrameCount.declared(header, p);
         layout = frames(layout, header, p);
         double rate = p.number("POINT", "RATE");
         if (!isRate(rate)) {
             rate = isRate(header.rate()) ? header.rate() : Double.NaN;
         }
         C3dPoints points = withData ? C3dPoints.read(c, layout, scale) : C3dPoints.none(layout.points());
-        flags(points);
-        List<String> labels = Labels.of(C3dParameter.joined(p.continued("POINT", "LABELS")), layout.points(), "point_");
-        List<String> analogLabels =
-                Labels.of(C3dParameter.joined(p.continued("ANALOG", "LABELS")), layout.channels(), "analog_");
+        SampleChecks.add(points, findings);
+        List<String> labels = Labels.of(p, "POINT", layout.points(), "point_", findings);
+        List<String> analogLabels = Labels.of(p, "ANALOG", layout.channels(), "analog_", findings);
+        C3dAnalog analog = analog(c, layout, p, rate);
+        SampleChecks.add(analog, findings);
         List<String> analogUnits = new ArrayList<>();
         List<String> units = C3dParameter.joined(p.continued("ANALOG", "UNITS"));
         for (int k = 0; k < layout.channels(); k++) {
@@ -167,11 +174,11 @@ final class C3dReader {
                 points,
                 analogLabels,
                 analogUnits,
-                analog(c, layout, p, rate),
+                analog,
                 events,
                 p,
                 platforms(p),
-                declared,
+                layout.frames(),
                 findings);
     }
 
@@ -257,44 +264,6 @@ final class C3dReader {
                     "file.surplus", "", (room - count * bytes) + " bytes follow the last frame and are not read"));
         }
         return layout.withFrames((int) count);
-    }
-
-    private void flags(C3dPoints points) {
-        if (points.written65535() > 0) {
-            findings.add(Finding.note(
-                    "points.flag-65535",
-                    "",
-                    points.written65535() + " samples carry the flag 65535, which is -1 without its sign: missing"));
-        }
-        if (points.outOfRange() > 0) {
-            findings.add(Finding.note(
-                    "points.flag-range",
-                    "",
-                    points.outOfRange()
-                            + " samples carry a fourth word outside 16 bits: taken as valid with unknown residual"));
-        }
-        missingWithCoordinates(points);
-    }
-
-    private void missingWithCoordinates(C3dPoints points) {
-        if (points.frames() == 0 || points.points() == 0) {
-            return;
-        }
-        boolean isAnyPlaced = false;
-        for (int frame = 0; frame < points.frames(); frame++) {
-            for (int point = 0; point < points.points(); point++) {
-                if (points.isValid(frame, point)) {
-                    return;
-                }
-                isAnyPlaced |= points.coordinate(frame, point, 0) != 0 || points.coordinate(frame, point, 1) != 0;
-            }
-        }
-        if (isAnyPlaced) {
-            findings.add(Finding.warning(
-                    "points.all-missing",
-                    "",
-                    "every sample is flagged missing although coordinates are stored; the flags are obeyed"));
-        }
     }
 
     private C3dAnalog analog(ByteCursor c, DataLayout layout, C3dParameters p, double pointRate) {

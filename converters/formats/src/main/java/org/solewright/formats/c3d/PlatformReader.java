@@ -65,7 +65,9 @@ final class PlatformReader {
         double sign = sign(usable);
         List<PlatformLoads> loads = new ArrayList<>();
         for (Usable u : usable) {
-            loads.add(loads(u, sign));
+            PlatformLoads of = loads(u, sign);
+            LoadChecks.add(of, findings);
+            loads.add(of);
         }
         return loads;
     }
@@ -208,7 +210,14 @@ final class PlatformReader {
             }
         }
         int[] window = zeroWindow(n);
-        if (window.length == 0 || !isUnloaded(p, c, n, width, window)) {
+        if (window.length == 0) {
+            return c;
+        }
+        if (!isUnloaded(p, c, n, width, window)) {
+            findings.add(Finding.note(
+                    "platform.zero-loaded",
+                    "platform " + p.number(),
+                    "it is not seen unloaded in the frames that ZERO names; no baseline is taken off"));
             return c;
         }
         for (int k = 0; k < width; k++) {
@@ -259,18 +268,36 @@ final class PlatformReader {
         return Math.abs(mean - low) <= UNLOADED && high - low > RISE;
     }
 
-    /** +1 where the file stores the reaction on the subject, -1 where it stores the action on the floor. */
-    private static double sign(List<Usable> usable) {
+    /**
+     * +1 where the file stores the reaction on the subject, -1 where it stores the action on the floor: by the most
+     * loaded platform whose load changes, since a broken one may show a great force that never does; where none
+     * changes, by the most loaded one. Noise turns nothing.
+     */
+    private double sign(List<Usable> usable) {
         double extreme = 0;
+        boolean isChanging = false;
         for (Usable u : usable) {
+            double low = Double.POSITIVE_INFINITY;
+            double high = Double.NEGATIVE_INFINITY;
             for (int i = 0; i < u.force.length / FORCES; i++) {
-                double v = u.vertical(i);
-                if (Math.abs(v) > Math.abs(extreme)) {
-                    extreme = v;
-                }
+                low = Math.min(low, u.vertical(i));
+                high = Math.max(high, u.vertical(i));
+            }
+            double farther = Math.abs(low) > Math.abs(high) ? low : high;
+            boolean changes = high - low > RISE;
+            boolean isBetter = changes == isChanging ? Math.abs(farther) > Math.abs(extreme) : changes;
+            if (isBetter && Double.isFinite(farther)) {
+                extreme = farther;
+                isChanging = changes;
             }
         }
-        return extreme < 0 ? -1 : 1;
+        if (extreme < -LoadChecks.LOADED) {
+            findings.add(Finding.note(
+                    "platform.action-stored",
+                    "",
+                    "the platforms' channels hold the force on the floor; it is reversed to the force on the subject"));
+        }
+        return extreme < -LoadChecks.LOADED ? -1 : 1;
     }
 
     private PlatformLoads loads(Usable u, double sign) {

@@ -18,7 +18,7 @@ class C3dHeaderOnlyTest {
         assertThat(header.labels()).as(path.toString()).isEqualTo(whole.labels());
         assertThat(header.analogLabels()).isEqualTo(whole.analogLabels());
         assertThat(header.rate()).isEqualTo(whole.rate());
-        assertThat(header.declaredFrames()).isEqualTo(whole.declaredFrames());
+        assertThat(header.storedFrames()).isEqualTo(whole.frames());
         assertThat(header.platforms()).isEqualTo(whole.platforms());
         assertThat(header.events()).isEqualTo(whole.events());
         assertThat(header.frames()).isZero();

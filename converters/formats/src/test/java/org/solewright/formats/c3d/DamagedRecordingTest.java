@@ -4,6 +4,8 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
@@ -53,6 +55,37 @@ class DamagedRecordingTest {
         assertThatThrownBy(() -> read(png))
                 .isInstanceOf(FormatException.class)
                 .hasMessageStartingWith("is not a C3D file");
+    }
+
+    @Test
+    void smallPictureIsCalledOne() {
+        byte[] png = new byte[700];
+        System.arraycopy(new byte[] {(byte) 0x89, 'P', 'N', 'G', 13, 10, 26, 10}, 0, png, 0, 8);
+        assertThatThrownBy(() -> read(png))
+                .isInstanceOf(FormatException.class)
+                .hasMessage("is not a C3D file: it is a PNG picture");
+    }
+
+    @Test
+    void folderIsNoRecording() {
+        assertThatThrownBy(() -> C3dFile.read(folder))
+                .isInstanceOf(FormatException.class)
+                .hasMessage("is not a regular file");
+    }
+
+    @Test
+    void unsignedFormsOfANegativeFlagAreMissing() throws IOException, FormatException {
+        byte[] b = good();
+        // good.c3d has its data in block 3, floats, so the fourth word of the first point is at 1024 + 12; its first
+        // sample is valid by its truth.
+        for (float word : new float[] {65535f, 65534f, 32768f}) {
+            ByteBuffer.wrap(b).order(ByteOrder.LITTLE_ENDIAN).putFloat(1036, word);
+            assertThat(read(b).points().isValid(0, 0)).as("%s", word).isFalse();
+        }
+        for (float word : new float[] {32767f, 65536f, 1.7e38f}) {
+            ByteBuffer.wrap(b).order(ByteOrder.LITTLE_ENDIAN).putFloat(1036, word);
+            assertThat(read(b).points().isValid(0, 0)).as("%s", word).isTrue();
+        }
     }
 
     @Test

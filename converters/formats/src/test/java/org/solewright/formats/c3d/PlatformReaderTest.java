@@ -8,6 +8,7 @@ import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -209,12 +210,59 @@ class PlatformReaderTest {
     }
 
     @Test
-    void actionOnTheFloorIsTurnedIntoReaction() throws IOException, FormatException {
+    void actionOnTheFloorIsTurnedIntoReactionAndIsSaid() throws IOException, FormatException {
         double[] action = sixChannels();
         for (int i = 0; i < action.length; i++) {
             action[i] = -action[i];
         }
-        isTheLoad(read(2, origin(-DEPTH), action, new double[0]));
+        Recording r = read(2, origin(-DEPTH), action, new double[0]);
+        isTheLoad(r);
+        assertThat(codes(r)).containsExactly("platform.action-stored");
+    }
+
+    @Test
+    void noiseOfAnEmptyPlatformIsLeftAsStored() throws IOException, FormatException {
+        double[] noise = {0, 0, 6.5, 0, 0, 0};
+        Recording r = read(2, origin(-DEPTH), noise, new double[0]);
+        assertThat(r.platforms().get(0).vertical(0)).isCloseTo(-6.5, within(STORED));
+        assertThat(r.findings()).isEmpty();
+    }
+
+    @Test
+    void platformThatNeverChangesDoesNotTurnTheOthers() throws IOException, FormatException {
+        List<Vec3> corners =
+                List.of(new Vec3(0.5, 0, 0), new Vec3(0, 0, 0), new Vec3(0, 0.6, 0), new Vec3(0.5, 0.6, 0));
+        double[] stuck = {0, 0, -1500, 0, 0, -1500};
+        double[] loaded = {0, 0, 0, 0, 0, 800};
+        List<PlatformLoads> loads = new ArrayList<>();
+        for (double[] force : List.of(stuck, loaded)) {
+            loads.add(new PlatformLoads(
+                    loads.size() + 1, 2, corners, Vec3.Z, 100, 0, true, force, new double[force.length]));
+        }
+        Path file = folder.resolve("stuck.c3d");
+        C3dWriter.write(file, new Recording("stuck.c3d", 100, 1, 2, List.of(), loads, List.of(), List.of()));
+        Recording r = C3dFile.read(file).toRecording();
+        // exact: the written numbers, both with their sign.
+        assertThat(r.platforms().get(1).vertical(1)).isCloseTo(800, within(STORED));
+        assertThat(r.platforms().get(0).vertical(1)).isCloseTo(-1500, within(STORED));
+        assertThat(codes(r)).containsExactly("platform.negative-load");
+    }
+
+    @Test
+    void platformThatPullsTheSubjectIsSaid() throws IOException, FormatException {
+        double[] pull = {0, 0, 60, 0, 0, 0};
+        Recording r = read(2, origin(-DEPTH), new double[][] {sixChannels(), pull}, new int[] {1, 0}, new double[0]);
+        isTheLoad(r);
+        assertThat(codes(r)).containsExactly("platform.negative-load");
+        assertThat(r.findings().get(0).message()).contains("goes down to -60.0 N");
+    }
+
+    @Test
+    void centreOfPressureOutsideTheCornersIsSaid() throws IOException, FormatException {
+        // exact: x = -My / Fz = -240000 / -800 = 300 mm from the centre, 50 mm beyond the edge at 250 mm.
+        Recording r = read(2, origin(0), new double[] {0, 0, FZ, 0, 240000, 0}, new double[0]);
+        assertThat(codes(r)).containsExactly("platform.cop-outside");
+        assertThat(r.findings().get(0).message()).contains("in 100 % of the loaded samples");
     }
 
     @Test
@@ -231,7 +279,10 @@ class PlatformReaderTest {
     @Test
     void baselineOfALoadedWindowIsLeft() throws IOException, FormatException {
         double[] none = new double[6];
-        isTheLoad(read(2, origin(-DEPTH), new double[][] {sixChannels(), none, none}, new int[] {1, 1}, new double[0]));
+        Recording r =
+                read(2, origin(-DEPTH), new double[][] {sixChannels(), none, none}, new int[] {1, 1}, new double[0]);
+        isTheLoad(r);
+        assertThat(codes(r)).containsExactly("platform.zero-loaded");
     }
 
     @Test
