@@ -1,5 +1,7 @@
 package org.solewright.analysis.cost;
 
+import org.solewright.analysis.numerics.Series;
+
 /**
  * Work of the positive and of the negative part of a sampled power that runs straight between its samples, split at its
  * zero crossings.
@@ -20,18 +22,8 @@ public record PowerWork(double positive, double negative) {
         double positive = 0;
         double negative = 0;
         for (int i = 1; i < power.length; i++) {
-            double a = power[i - 1];
-            double b = power[i];
-            if (a >= 0 && b >= 0) {
-                positive += (a + b) / 2;
-            } else if (a <= 0 && b <= 0) {
-                negative += (a + b) / 2;
-            } else {
-                double high = Math.max(a, b);
-                double low = Math.min(a, b);
-                positive += high * high / (2 * (high - low));
-                negative -= low * low / (2 * (high - low));
-            }
+            positive += Series.positivePart(power[i - 1], power[i]);
+            negative -= Series.positivePart(-power[i - 1], -power[i]);
         }
         return new PowerWork(positive * timeStep, negative * timeStep);
     }

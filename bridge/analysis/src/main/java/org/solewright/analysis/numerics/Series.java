@@ -162,7 +162,14 @@ public final class Series {
         return (int) Math.floor((time - start) * rate + 1e-9) + 1;
     }
 
-    private static double positivePart(double a, double b) {
+    /**
+     * Mean of the positive part of a straight line between two samples, split exactly at its zero crossing.
+     *
+     * @param a one sample
+     * @param b the other
+     * @return not negative, in the samples' unit; NaN where one of them is lost
+     */
+    public static double positivePart(double a, double b) {
         if (a >= 0 && b >= 0) {
             return (a + b) / 2;
         }

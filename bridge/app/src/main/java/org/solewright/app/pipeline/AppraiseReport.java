@@ -47,7 +47,12 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
      */
     public static AppraiseReport write(AppraiseUseCase.Request request, Path out)
             throws UseCaseException, FormatException {
-        AppraiseUseCase.Result result = AppraiseUseCase.run(request);
+        return write(AppraiseUseCase.run(request), request, out);
+    }
+
+    /** Writes what a run gave, as {@link #write(AppraiseUseCase.Request, Path)} does. */
+    static AppraiseReport write(AppraiseUseCase.Result result, AppraiseUseCase.Request request, Path out)
+            throws UseCaseException {
         Map<String, byte[]> files = new LinkedHashMap<>();
         files.put("posture-cost.csv", PostureCostTable.bytes(result.cost().rows()));
         files.put("posture-cost.xml", PostureCostFile.bytes(result.cost()));

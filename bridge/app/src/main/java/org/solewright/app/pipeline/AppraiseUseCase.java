@@ -105,7 +105,7 @@ public final class AppraiseUseCase {
         GaitOptions options = request.gait();
         readModels();
         LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
-        List<Recording> walking = InputFiles.recordings(options.walking(), "walking", sources, findings);
+        List<Recording> walking = InputFiles.walking(options.walking(), sources, findings);
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();

@@ -130,18 +130,18 @@ public final class DemoUseCase {
                 DemoStudy.SUBJECT,
                 version);
         lines.add("3. fit");
-        FitReport fitReport = FitReport.write(fit, folder);
-        fitReport.lines().forEach(l -> lines.add("   " + l));
         FitUseCase.Result fitted = FitUseCase.run(fit);
+        FitReport fitReport = FitReport.write(fitted, fit, folder);
+        fitReport.lines().forEach(l -> lines.add("   " + l));
         GaitOptions walking = options.withoutStanding();
         AppraiseUseCase.Request appraise = new AppraiseUseCase.Request(
                 walking,
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 version);
         lines.add("4. appraise");
-        AppraiseReport appraiseReport = AppraiseReport.write(appraise, folder);
-        appraiseReport.lines().forEach(l -> lines.add("   " + l));
         AppraiseUseCase.Result appraised = AppraiseUseCase.run(appraise);
+        AppraiseReport appraiseReport = AppraiseReport.write(appraised, appraise, folder);
+        appraiseReport.lines().forEach(l -> lines.add("   " + l));
         postures();
         compareFit(fitted);
         compareSteps(appraised);

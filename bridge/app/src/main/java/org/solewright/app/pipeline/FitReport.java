@@ -45,7 +45,11 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
      * @throws FormatException where a file is not as its format says
      */
     public static FitReport write(FitUseCase.Request request, Path out) throws UseCaseException, FormatException {
-        FitUseCase.Result result = FitUseCase.run(request);
+        return write(FitUseCase.run(request), request, out);
+    }
+
+    /** Writes what a run gave, as {@link #write(FitUseCase.Request, Path)} does. */
+    static FitReport write(FitUseCase.Result result, FitUseCase.Request request, Path out) throws UseCaseException {
         Map<String, byte[]> files = new LinkedHashMap<>();
         result.models().forEach((side, m) -> files.put("foot-model-" + side.word() + ".xml", FootModelFile.bytes(m)));
         files.put("fit-contacts.csv", ContactsTable.bytes(result.contacts()));

@@ -3,7 +3,6 @@ package org.solewright.app.pipeline;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.EnumSet;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -111,8 +110,8 @@ public final class FitUseCase {
     private Result run() throws UseCaseException, FormatException {
         GaitOptions options = request.gait();
         LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
-        List<Recording> standing = InputFiles.recordings(options.standing(), "standing", sources, findings);
-        List<Recording> walking = InputFiles.recordings(options.walking(), "walking", sources, findings);
+        List<Recording> standing = InputFiles.standing(options.standing(), sources, findings);
+        List<Recording> walking = InputFiles.walking(options.walking(), sources, findings);
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();
@@ -140,9 +139,15 @@ public final class FitUseCase {
         Map<Side, FootModel> models = new EnumMap<>(Side.class);
         Map<Side, StandingLimb> limbs = new EnumMap<>(Side.class);
         Map<Side, WalkingRollOver> rollOvers = new EnumMap<>(Side.class);
+        Map<Side, Set<SegmentName>> observed = new EnumMap<>(Side.class);
         for (Side side : sides) {
             StandingLimb limb = built(posture, mass, side, stood);
-            WalkingRollOver rollOver = rollOver(limb, subject, stood, mass);
+            requireSound(limb, standing.get(0));
+            List<LimbMotion> motions = subject.walking().stream()
+                    .map(tracks -> LimbMotion.of(stood, tracks, side))
+                    .toList();
+            WalkingRollOver rollOver = rollOver(limb, subject, motions, mass);
+            observed.put(side, observed(motions));
             limbs.put(side, limb);
             rollOvers.put(side, rollOver);
         }
@@ -153,20 +158,9 @@ public final class FitUseCase {
             Rolling rolling = rollOver.rolling();
             limb.findings().forEach(this::addOnce);
             rollOver.findings().forEach(this::addOnce);
-            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), observed(subject, stood, side)));
+            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), get(observed, side)));
         }
         List<Finding> shared = List.copyOf(findings);
-        for (Finding f : shared) {
-            boolean isStanding =
-                    f.severity() == Severity.ERROR && !failedTrials(subject).contains(f.where());
-            if (isStanding) {
-                throw new UseCaseException(
-                        UseCaseException.Kind.INPUT,
-                        standing.get(0).name(),
-                        f.message(),
-                        "correct it and fit again (" + f.code() + ")");
-            }
-        }
         models.replaceAll((side, m) -> withFindings(m, shared));
         return new Result(
                 models, limbs, rollOvers, subject, ContactOverrides.rows(subject.passes()), shared, failed(shared));
@@ -186,8 +180,17 @@ public final class FitUseCase {
         }
     }
 
-    private static List<String> failedTrials(GaitSubject subject) {
-        return failed(subject.findings());
+    /** An error of the standing limb leaves no model worth writing. */
+    private static void requireSound(StandingLimb limb, Recording standing) throws UseCaseException {
+        for (Finding f : limb.findings()) {
+            if (f.severity() == Severity.ERROR) {
+                throw new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        standing.name(),
+                        f.message(),
+                        "correct it and fit again (" + f.code() + ")");
+            }
+        }
     }
 
     private static List<String> failed(List<Finding> findings) {
@@ -305,17 +308,13 @@ public final class FitUseCase {
         return ((StandingOutcome.Built) outcome).limb();
     }
 
-    private WalkingRollOver rollOver(StandingLimb limb, GaitSubject subject, StandingTrial stood, Quantity mass) {
+    private WalkingRollOver rollOver(StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {
         boolean isHuman = request.gait().population() != Population.OTHER;
         WalkingRollOver rollOver = new WalkingRollOver(limb, mass.value() * GaitSettings.STANDARD_GRAVITY, isHuman);
-        Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>(subject.tracksByTrial());
         PoseChecks checks = new PoseChecks(limb);
-        for (Pass pass : subject.passes()) {
-            LandmarkTracks tracks = byTrial.get(pass.trial().name());
-            if (tracks == null) {
-                continue;
-            }
-            LimbMotion motion = LimbMotion.of(stood, tracks, limb.side());
+        for (int i = 0; i < motions.size(); i++) {
+            Pass pass = subject.passes().get(i);
+            LimbMotion motion = motions.get(i);
             if (motion.shank().isEmpty()) {
                 findings.add(Finding.warning(
                         "rolling.shank-not-tracked",
@@ -331,10 +330,9 @@ public final class FitUseCase {
     }
 
     /** Segments whose points were tracked in walking: the shank, and the foot's first segment where it holds the heads. */
-    private static Set<SegmentName> observed(GaitSubject subject, StandingTrial stood, Side side) {
+    private static Set<SegmentName> observed(List<LimbMotion> motions) {
         Set<SegmentName> observed = EnumSet.noneOf(SegmentName.class);
-        for (LandmarkTracks tracks : subject.walking()) {
-            LimbMotion motion = LimbMotion.of(stood, tracks, side);
+        for (LimbMotion motion : motions) {
             if (motion.shank().isPresent()) {
                 observed.add(SegmentName.SHANK);
             }

@@ -2,7 +2,6 @@ package org.solewright.app.pipeline;
 
 import java.util.ArrayList;
 import java.util.EnumMap;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -72,20 +71,33 @@ final class GaitSubject {
             Optional<Double> limbLength)
             throws UseCaseException {
         GaitSubject subject = new GaitSubject(options, map, contacts);
+        List<WalkingTrial> trials = new ArrayList<>();
+        UseCaseException first = null;
         for (Recording r : recordings) {
-            Recording seen = options.isMirrored() ? Mirror.of(r, subject.up(r, up)) : r;
-            subject.walking.add(LandmarkTracks.of(seen, map, options.markerCutoff(), subject.findings));
-            subject.findings.addAll(LandmarkCoverage.repeatedLabels(r));
+            try {
+                trials.add(subject.tracked(r, up));
+            } catch (UseCaseException e) {
+                first = first == null ? e : first;
+                subject.findings.add(InputFiles.failed(r.name(), e.getMessage(), e.whatToDo()));
+            }
         }
-        subject.analyse(up, limbLength);
+        if (trials.isEmpty() && first != null) {
+            throw first;
+        }
+        subject.analyse(trials, limbLength);
         return subject;
     }
 
-    private void analyse(Optional<Vec3> standingUp, Optional<Double> limbLength) throws UseCaseException {
-        List<WalkingTrial> trials = new ArrayList<>();
-        for (LandmarkTracks tracks : walking) {
-            trials.add(trial(tracks, standingUp));
-        }
+    private WalkingTrial tracked(Recording recording, Optional<Vec3> standingUp) throws UseCaseException {
+        Recording seen = options.isMirrored() ? Mirror.of(recording, up(recording, standingUp)) : recording;
+        LandmarkTracks tracks = LandmarkTracks.of(seen, map, options.markerCutoff(), findings);
+        WalkingTrial trial = trial(tracks, standingUp);
+        findings.addAll(LandmarkCoverage.repeatedLabels(recording));
+        walking.add(tracks);
+        return trial;
+    }
+
+    private void analyse(List<WalkingTrial> trials, Optional<Double> limbLength) throws UseCaseException {
         GaitSettings first = limbLength
                 .map(l -> new GaitSettings(GaitSettings.STANDARD_GRAVITY, l, weight(options.mass())))
                 .orElseGet(() -> new GaitSettings(
@@ -93,22 +105,25 @@ final class GaitSubject {
                         GaitSettings.unknownSubject().limbLength(),
                         weight(options.mass())));
         run(trials, first, new ArrayList<>());
+        dropFailed(trials);
+        mass = SubjectMass.of(steps).map(SubjectMass::mass);
         double found = options.mass().orElse(mass.map(Quantity::value).orElse(Double.NaN));
         GaitSettings second =
                 new GaitSettings(first.gravity(), first.limbLength(), found * GaitSettings.STANDARD_GRAVITY);
         run(trials, second, findings);
+        dropFailed(trials);
         findings.addAll(PassChecks.platformHeights(passes));
         checkMass();
-        dropFailed();
     }
 
     /** Leaves out recordings that say nothing or the opposite; where none is left, the first one's reason is thrown. */
-    private void dropFailed() throws UseCaseException {
+    private void dropFailed(List<WalkingTrial> trials) throws UseCaseException {
         List<Finding> failures = new ArrayList<>();
         for (int i = passes.size() - 1; i >= 0; i--) {
             Optional<Finding> failure = failure(passes.get(i));
             if (failure.isPresent()) {
                 failures.add(0, failure.get());
+                trials.remove(i);
                 walking.remove(i);
                 passes.remove(i);
                 steps.remove(i);
@@ -302,6 +317,7 @@ final class GaitSubject {
         return passes;
     }
 
+    /** Tracks by pass, in the passes' order. */
     List<LandmarkTracks> walking() {
         return walking;
     }
@@ -314,12 +330,5 @@ final class GaitSubject {
     /** Given, else measured; empty where neither. */
     Optional<Quantity> mass() {
         return mass;
-    }
-
-    /** Tracks by recording name. */
-    Map<String, LandmarkTracks> tracksByTrial() {
-        Map<String, LandmarkTracks> byTrial = new LinkedHashMap<>();
-        walking.forEach(t -> byTrial.put(trialName(t.recording()), t));
-        return byTrial;
     }
 }

@@ -9,8 +9,10 @@ import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.HexFormat;
 import java.util.List;
+import java.util.Set;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.SourceFile;
 import org.solewright.domain.foot.LandmarkMap;
@@ -32,36 +34,96 @@ final class InputFiles {
         T read(Path file) throws IOException, FormatException;
     }
 
-    static List<Recording> recordings(List<Path> files, String role, List<SourceFile> sources, List<Finding> findings)
+    /** Standing recordings: every one of them is needed. */
+    static List<Recording> standing(List<Path> files, List<SourceFile> sources, List<Finding> findings)
             throws UseCaseException, FormatException {
         List<Recording> recordings = new ArrayList<>();
         for (Path file : files) {
-            Recording r = read(file, f -> C3dFile.read(f).toRecording());
-            sources.add(source(role, file));
-            for (Finding f : r.findings()) {
-                findings.add(new Finding(
-                        f.code(),
-                        f.severity(),
-                        f.where().isEmpty() ? r.name() : r.name() + " " + f.where(),
-                        f.message()));
-            }
-            if (r.frames() == 0) {
-                throw new UseCaseException(
-                        UseCaseException.Kind.INPUT,
-                        file.toString(),
-                        "the " + role + " recording holds no point frames",
-                        "give a recording with markers");
-            }
-            if (!(r.rate() > 0)) {
-                throw new UseCaseException(
-                        UseCaseException.Kind.INPUT,
-                        file.toString(),
-                        "the " + role + " recording states no frame rate",
-                        "give a recording with POINT:RATE");
-            }
-            recordings.add(r);
+            recordings.add(recording(file, "standing", sources, findings));
         }
         return recordings;
+    }
+
+    /**
+     * Walking recordings: one that cannot be used is named in a finding and left out; where none can be used, the first
+     * one's reason is thrown. Files of one name in two folders are told apart as {@code walk#2}.
+     */
+    static List<Recording> walking(List<Path> files, List<SourceFile> sources, List<Finding> findings)
+            throws UseCaseException, FormatException {
+        List<Recording> recordings = new ArrayList<>();
+        Set<String> names = new HashSet<>();
+        UseCaseException unusable = null;
+        FormatException damaged = null;
+        for (Path file : files) {
+            List<SourceFile> read = new ArrayList<>();
+            List<Finding> said = new ArrayList<>();
+            try {
+                recordings.add(distinct(recording(file, "walking", read, said), names));
+                sources.addAll(read);
+                findings.addAll(said);
+            } catch (UseCaseException e) {
+                unusable = unusable == null && damaged == null ? e : unusable;
+                findings.add(failed(nameOf(file), e.getMessage(), e.whatToDo()));
+            } catch (FormatException e) {
+                damaged = unusable == null && damaged == null ? e : damaged;
+                findings.add(failed(nameOf(file), e.getMessage(), e.whatToDo()));
+            }
+        }
+        if (recordings.isEmpty() && unusable != null) {
+            throw unusable;
+        }
+        if (recordings.isEmpty() && damaged != null) {
+            throw damaged;
+        }
+        return recordings;
+    }
+
+    /** An input that could not be used although others of the call were. */
+    static Finding failed(String where, String message, String whatToDo) {
+        return Finding.error("input.failed", where, message + ": " + whatToDo);
+    }
+
+    private static Recording distinct(Recording r, Set<String> names) {
+        String stem = GaitSubject.trialName(r);
+        String ending = r.name().substring(stem.length());
+        String name = stem;
+        for (int n = 2; !names.add(name); n++) {
+            name = stem + "#" + n;
+        }
+        return new Recording(
+                name + ending,
+                r.rate(),
+                r.firstFrame(),
+                r.frames(),
+                r.points(),
+                r.platforms(),
+                r.events(),
+                r.findings());
+    }
+
+    private static Recording recording(Path file, String role, List<SourceFile> sources, List<Finding> findings)
+            throws UseCaseException, FormatException {
+        Recording r = read(file, f -> C3dFile.read(f).toRecording());
+        sources.add(source(role, file));
+        for (Finding f : r.findings()) {
+            findings.add(new Finding(
+                    f.code(), f.severity(), f.where().isEmpty() ? r.name() : r.name() + " " + f.where(), f.message()));
+        }
+        if (r.frames() == 0) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT,
+                    file.toString(),
+                    "the " + role + " recording holds no point frames",
+                    "give a recording with markers");
+        }
+        if (!(r.rate() > 0)) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.INPUT,
+                    file.toString(),
+                    "the " + role + " recording states no frame rate",
+                    "give a recording with POINT:RATE");
+        }
+        return r;
     }
 
     static LandmarkMap landmarkMap(Path file, List<SourceFile> sources) throws UseCaseException, FormatException {
@@ -96,8 +158,12 @@ final class InputFiles {
     }
 
     static SourceFile source(String role, Path file) throws UseCaseException, FormatException {
+        return new SourceFile(role, nameOf(file), read(file, InputFiles::sha256));
+    }
+
+    private static String nameOf(Path file) {
         Path name = file.getFileName();
-        return new SourceFile(role, name == null ? file.toString() : name.toString(), read(file, InputFiles::sha256));
+        return name == null ? file.toString() : name.toString();
     }
 
     private static String sha256(Path file) throws IOException {

@@ -17,6 +17,7 @@ public final class UseCaseException extends Exception {
 
     private final Kind kind;
     private final String file;
+    private final String message;
     private final String whatToDo;
 
     /**
@@ -31,6 +32,7 @@ public final class UseCaseException extends Exception {
         super(message);
         this.kind = kind;
         this.file = file;
+        this.message = message;
         this.whatToDo = whatToDo;
     }
 
@@ -47,6 +49,7 @@ public final class UseCaseException extends Exception {
         super(message, cause);
         this.kind = kind;
         this.file = file;
+        this.message = message;
         this.whatToDo = whatToDo;
     }
 
@@ -75,5 +78,15 @@ public final class UseCaseException extends Exception {
      */
     public String whatToDo() {
         return whatToDo;
+    }
+
+    /**
+     * What is wrong.
+     *
+     * @return one sentence without full stop
+     */
+    @Override
+    public String getMessage() {
+        return message;
     }
 }

@@ -60,11 +60,11 @@ public record LandmarkMap(String name, List<Entry> entries) {
      * @param landmark what is sought
      * @param side whose
      * @param recorded labels of the recording
-     * @return those that fit one of the patterns, in the order of the patterns, then of the recording; empty where none
+     * @return those that fit one of the patterns, in the order of the patterns, then by name; empty where none
      */
     public List<String> labels(Landmark landmark, Side side, List<String> recorded) {
         return patterns(landmark, side).stream()
-                .flatMap(p -> recorded.stream().filter(p::matches))
+                .flatMap(p -> recorded.stream().filter(p::matches).sorted())
                 .distinct()
                 .toList();
     }

@@ -38,10 +38,10 @@ class LandmarkMapTest {
     }
 
     @Test
-    void starStandsForAnyCharactersInTheRecordingsOrder() {
+    void starStandsForAnyCharactersAndTheOrderIsThatOfTheNames() {
         assertThat(MAP.labels(
                         Landmark.SHANK_CLUSTER, Side.RIGHT, List.of("R_SHIN", "R_SHANK_2", "R_SHANK_1", "L_SHANK_1")))
-                .containsExactly("R_SHANK_2", "R_SHANK_1", "R_SHIN");
+                .containsExactly("R_SHANK_1", "R_SHANK_2", "R_SHIN");
     }
 
     @Test

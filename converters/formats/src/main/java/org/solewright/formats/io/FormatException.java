@@ -6,6 +6,7 @@ public final class FormatException extends Exception {
     private static final long serialVersionUID = 1L;
 
     private final String source;
+    private final String message;
     private final String whatToDo;
 
     /**
@@ -18,6 +19,7 @@ public final class FormatException extends Exception {
     public FormatException(String source, String message, String whatToDo) {
         super(message);
         this.source = source;
+        this.message = message;
         this.whatToDo = whatToDo;
     }
 
@@ -32,6 +34,7 @@ public final class FormatException extends Exception {
     public FormatException(String source, String message, String whatToDo, Throwable cause) {
         super(message, cause);
         this.source = source;
+        this.message = message;
         this.whatToDo = whatToDo;
     }
 
@@ -51,5 +54,15 @@ public final class FormatException extends Exception {
      */
     public String whatToDo() {
         return whatToDo;
+    }
+
+    /**
+     * What is wrong.
+     *
+     * @return one sentence without full stop
+     */
+    @Override
+    public String getMessage() {
+        return message;
     }
 }
