@@ -78,22 +78,8 @@ final class ByteCursor {
         return switch (processor) {
             case INTEL -> Float.intBitsToFloat((d << 24) | (c << 16) | (b << 8) | a);
             case MIPS -> Float.intBitsToFloat((a << 24) | (b << 16) | (c << 8) | d);
-            case DEC -> vax((b << 24) | (a << 16) | (d << 8) | c);
+            case DEC -> VaxFloat.of((d << 24) | (c << 16) | (b << 8) | a);
         };
-    }
-
-    /**
-     * VAX F: sign, exponent with excess 128, fraction below a hidden 0.1; a quarter of what the bits mean in IEEE 754.
-     * Exponent 0 is 0 whatever the fraction.
-     */
-    private static float vax(int bits) {
-        int exponent = (bits >>> 23) & 0xff;
-        if (exponent == 0) {
-            return 0;
-        }
-        double fraction = ((bits & 0x7fffff) | 0x800000) / (double) (1 << 24);
-        double value = Math.scalb(fraction, exponent - 128);
-        return (float) (bits < 0 ? -value : value);
     }
 
     /** Text as stored: Windows-1252 where it is no valid UTF-8; trailing blanks and zeros dropped. */

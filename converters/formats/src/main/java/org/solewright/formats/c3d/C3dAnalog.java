@@ -3,41 +3,54 @@ package org.solewright.formats.c3d;
 /** The analog samples of a file, scaled, {@code [samples][channels]} row-major. */
 public final class C3dAnalog {
 
+    private static final float UNSIGNED = 65536f;
+
     private final int samples;
     private final int channels;
     private final double rate;
-    private final float[] raw;
+    private final SampleStore store;
+    private final boolean isUnsigned;
     private final double[] offset;
     private final double[] factor;
 
-    C3dAnalog(int samples, int channels, double rate, float[] raw, double[] offset, double[] factor) {
+    /**
+     * Samples.
+     *
+     * @param samples per channel
+     * @param channels number of channels
+     * @param rate samples per second, Hz
+     * @param store {@code [samples][channels]}
+     * @param isUnsigned whether integer words are read without their sign
+     * @param offset per channel
+     * @param factor per channel
+     */
+    C3dAnalog(
+            int samples,
+            int channels,
+            double rate,
+            SampleStore store,
+            boolean isUnsigned,
+            double[] offset,
+            double[] factor) {
         this.samples = samples;
         this.channels = channels;
         this.rate = rate;
-        this.raw = raw;
+        this.store = store;
+        this.isUnsigned = isUnsigned;
         this.offset = offset;
         this.factor = factor;
     }
 
-    /** Raw words; the caller has made sure that all frames lie inside the file. */
-    static float[] raw(ByteCursor c, DataLayout layout, boolean isUnsigned) {
-        int words = layout.channels() * layout.analogPerFrame();
-        float[] raw = new float[layout.frames() * words];
-        int i = 0;
-        for (int frame = 0; frame < layout.frames(); frame++) {
-            int at = layout.frameOffset(frame) + layout.pointBytes();
-            for (int k = 0; k < words; k++, i++) {
-                if (layout.isReal()) {
-                    raw[i] = c.rawF32(at);
-                    at += 4;
-                } else {
-                    int v = c.rawU16(at);
-                    raw[i] = isUnsigned ? v : (short) v;
-                    at += 2;
-                }
-            }
-        }
-        return raw;
+    /** No samples. */
+    static C3dAnalog none(int channels) {
+        return new C3dAnalog(
+                0, channels, Double.NaN, SampleStore.of(true, 0), false, new double[channels], new double[channels]);
+    }
+
+    /** A word as it lies in the file: a real, or an integer without its sign where the file says so. */
+    float stored(int sample, int channel) {
+        float raw = store.at(sample * channels + channel);
+        return isUnsigned && raw < 0 ? raw + UNSIGNED : raw;
     }
 
     /**
@@ -75,7 +88,7 @@ public final class C3dAnalog {
      * @return in the channel's unit
      */
     public double value(int sample, int channel) {
-        return (raw[sample * channels + channel] - offset[channel]) * factor[channel];
+        return (stored(sample, channel) - offset[channel]) * factor[channel];
     }
 
     /** Whether an offset of -32768 may have been meant as +32768, since the stored samples lie there. */
@@ -84,8 +97,8 @@ public final class C3dAnalog {
             return false;
         }
         double sum = 0;
-        for (int i = channel; i < samples * channels; i += channels) {
-            sum += raw[i];
+        for (int i = 0; i < samples; i++) {
+            sum += stored(i, channel);
         }
         return sum / samples > -Short.MIN_VALUE / 2;
     }

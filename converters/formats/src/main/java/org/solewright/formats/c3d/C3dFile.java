@@ -1,11 +1,14 @@
 package org.solewright.formats.c3d;
 
 import java.io.IOException;
-import java.io.InputStream;
+import java.nio.ByteBuffer;
+import java.nio.channels.FileChannel;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.domain.motion.Recording;
@@ -49,8 +52,8 @@ public record C3dFile(
         int storedFrames,
         List<Finding> findings) {
 
-    /** Parameters may run on after a data block that the header puts too early. */
-    private static final int LEAST_PARAMETER_BLOCKS = 64;
+    /** Far above the longest section seen, where nothing in the file says how far it reaches. */
+    private static final int MOST_PARAMETER_BYTES = 1 << 24;
 
     /** Copies the lists. */
     public C3dFile {
@@ -71,7 +74,20 @@ public record C3dFile(
      * @throws FormatException where it is no C3D file or ends before its first frame
      */
     public static C3dFile read(Path file) throws IOException, FormatException {
-        return read(file, true);
+        return read(file, C3dReading.everything());
+    }
+
+    /**
+     * Reads a part of a file: header, parameters and the samples that are asked for.
+     *
+     * @param file a C3D file
+     * @param reading which points, whether analog samples, whether flags are obeyed
+     * @return its content; labels and points are the wanted ones
+     * @throws IOException where it cannot be read
+     * @throws FormatException where it is no C3D file or ends before its first frame
+     */
+    public static C3dFile read(Path file, C3dReading reading) throws IOException, FormatException {
+        return read(file, true, reading);
     }
 
     /**
@@ -83,43 +99,61 @@ public record C3dFile(
      * @throws FormatException where it is no C3D file
      */
     public static C3dFile readHeader(Path file) throws IOException, FormatException {
-        return read(file, false);
+        return read(file, false, C3dReading.everything());
     }
 
-    private static C3dFile read(Path file, boolean withData) throws IOException, FormatException {
+    private static C3dFile read(Path file, boolean withData, C3dReading reading) throws IOException, FormatException {
         Path last = file.getFileName();
         String name = last == null ? file.toString() : last.toString();
         if (Files.exists(file) && !Files.isRegularFile(file)) {
             throw new FormatException(file.toString(), "is not a regular file", "copy the recording to a file");
         }
-        long size = Files.size(file);
-        if (size > Integer.MAX_VALUE - 8) {
-            throw new FormatException(
-                    file.toString(),
-                    "has " + size + " bytes, more than the 2 GB that can be read",
-                    "split the recording");
+        try (FileChannel channel = FileChannel.open(file, StandardOpenOption.READ)) {
+            long size = channel.size();
+            if (size > Integer.MAX_VALUE - 8) {
+                throw new FormatException(
+                        file.toString(),
+                        "has " + size + " bytes, more than the 2 GB that can be read",
+                        "split the recording");
+            }
+            byte[] bytes = beforeData(channel, (int) size);
+            return new C3dReader(
+                            file.toString(),
+                            name,
+                            bytes,
+                            size,
+                            withData ? Optional.of(channel) : Optional.empty(),
+                            reading)
+                    .read();
         }
-        byte[] bytes = withData ? Files.readAllBytes(file) : beforeData(file, size);
-        return new C3dReader(file.toString(), name, bytes, size, withData).read();
     }
 
-    /** Header and parameters alone: the bytes before the first data block. */
-    private static byte[] beforeData(Path file, long size) throws IOException {
-        try (InputStream in = Files.newInputStream(file)) {
-            byte[] header = in.readNBytes(C3dHeader.BYTES);
-            if (header.length < C3dHeader.BYTES) {
-                return header;
-            }
-            // Little-endian in two of the three processors; the larger reading of both orders holds the parameters.
-            int a = header[16] & 0xff;
-            int b = header[17] & 0xff;
-            int parameters = header[0] & 0xff;
-            long blocks = Math.max(Math.min((b << 8) | a, (a << 8) | b), parameters + LEAST_PARAMETER_BLOCKS);
-            long end = Math.min(size, blocks * C3dHeader.BYTES);
-            byte[] all = Arrays.copyOf(header, (int) end);
-            int read = in.readNBytes(all, C3dHeader.BYTES, (int) end - C3dHeader.BYTES);
-            return Arrays.copyOf(all, C3dHeader.BYTES + read);
+    /**
+     * Header and parameters: the bytes before the first data block. Where the header puts the data before the parameters
+     * or beyond the file, as far as parameters have been seen to reach.
+     */
+    private static byte[] beforeData(FileChannel channel, int size) throws IOException {
+        byte[] header = bytes(channel, Math.min(size, C3dHeader.BYTES));
+        if (header.length < C3dHeader.BYTES || header[0] == 0) {
+            return header;
         }
+        int parameters = ((header[0] & 0xff) - 1) * C3dHeader.BYTES;
+        ByteBuffer key = ByteBuffer.allocate(1);
+        boolean isMips = channel.read(key, parameters + 3L) == 1 && key.get(0) == Processor.MIPS.key();
+        int a = header[16] & 0xff;
+        int b = header[17] & 0xff;
+        int data = ((isMips ? (a << 8) | b : (b << 8) | a) - 1) * C3dHeader.BYTES;
+        boolean isBetween = data > parameters && data < size;
+        return bytes(channel, isBetween ? data : Math.min(size, parameters + MOST_PARAMETER_BYTES));
+    }
+
+    private static byte[] bytes(FileChannel channel, int count) throws IOException {
+        ByteBuffer buffer = ByteBuffer.allocate(count);
+        int read = 0;
+        while (read >= 0 && buffer.hasRemaining()) {
+            read = channel.read(buffer, buffer.position());
+        }
+        return Arrays.copyOf(buffer.array(), buffer.position());
     }
 
     /**

@@ -12,9 +12,16 @@ import org.solewright.domain.geometry.Vec3;
  * @param origin ORIGIN as stored
  * @param channels analog channels, from 1; 0 where not stored
  * @param calibration CAL_MATRIX of this platform in stored order, column by column; empty where none is stored
+ * @param calibrationRows first dimension of CAL_MATRIX; 0 where none is stored
  */
 public record C3dPlatform(
-        int number, int type, List<Vec3> corners, Vec3 origin, List<Integer> channels, List<Double> calibration) {
+        int number,
+        int type,
+        List<Vec3> corners,
+        Vec3 origin,
+        List<Integer> channels,
+        List<Double> calibration,
+        int calibrationRows) {
 
     /** Copies the lists. */
     public C3dPlatform {

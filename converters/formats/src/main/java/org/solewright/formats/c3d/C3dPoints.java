@@ -11,81 +11,71 @@ public final class C3dPoints {
     private static final float HIGHEST_UNSIGNED = 65535f;
     private static final float LOWEST = -32768f;
     private static final float HIGHEST = 32767f;
+    private static final int WORDS = 4;
 
     private final int frames;
     private final int points;
-    private final float[] xyz;
-    private final short[] word;
+    private final SampleStore store;
+    private final boolean isReal;
+    private final boolean isFlagObeyed;
     private final double coordinateScale;
     private final double residualScale;
-    private final int written65535;
-    private final int outOfRange;
+    private int written65535;
+    private int outOfRange;
 
-    private C3dPoints(
-            int frames,
-            int points,
-            float[] xyz,
-            short[] word,
-            double coordinateScale,
-            double residualScale,
-            int written65535,
-            int outOfRange) {
+    /**
+     * Samples.
+     *
+     * @param frames number of frames
+     * @param points points per frame
+     * @param store four words per point, {@code [frames][points][4]}
+     * @param isReal whether the words are reals
+     * @param scale of integer samples, and of residuals
+     * @param isFlagObeyed whether the fourth word decides what is missing
+     */
+    C3dPoints(int frames, int points, SampleStore store, boolean isReal, float scale, boolean isFlagObeyed) {
         this.frames = frames;
         this.points = points;
-        this.xyz = xyz;
-        this.word = word;
-        this.coordinateScale = coordinateScale;
-        this.residualScale = residualScale;
-        this.written65535 = written65535;
-        this.outOfRange = outOfRange;
+        this.store = store;
+        this.isReal = isReal;
+        this.isFlagObeyed = isFlagObeyed;
+        this.residualScale = Math.abs(scale);
+        this.coordinateScale = isReal ? 1 : residualScale;
+        for (int i = WORDS - 1; isReal && i < store.words(); i += WORDS) {
+            float w = store.at(i);
+            if (!(w >= LOWEST && w <= HIGHEST_UNSIGNED)) {
+                outOfRange++;
+            } else if (w > HIGHEST) {
+                written65535++;
+            }
+        }
     }
 
     /** No samples. */
     static C3dPoints none(int points) {
-        return new C3dPoints(0, points, new float[0], new short[0], 1, 1, 0, 0);
+        return new C3dPoints(0, points, SampleStore.of(true, 0), true, 1, true);
+    }
+
+    private int first(int frame, int point) {
+        return WORDS * (frame * points + point);
+    }
+
+    /** The fourth word of a sample as a signed 16-bit integer; 0 where it lies outside 16 bits. */
+    private int word(int first) {
+        float w = store.at(first + WORDS - 1);
+        return w >= LOWEST && w <= HIGHEST_UNSIGNED ? (short) (int) w : 0;
     }
 
     /**
-     * Decodes; the caller has made sure that all frames lie inside the file.
+     * A word of a sample as it lies in the file.
      *
-     * @param c cursor in the file's processor
-     * @param layout where the samples lie
-     * @param scale of integer samples, and of residuals
+     * @param frame zero-based
+     * @param point zero-based
+     * @param word 0 x, 1 y, 2 z, 3 residual and cameras
+     * @return a real, or a signed integer
      */
-    static C3dPoints read(ByteCursor c, DataLayout layout, float scale) {
-        int n = layout.frames() * layout.points();
-        float[] xyz = new float[3 * n];
-        short[] word = new short[n];
-        int unsigned = 0;
-        int out = 0;
-        float factor = Math.abs(scale);
-        int i = 0;
-        for (int frame = 0; frame < layout.frames(); frame++) {
-            int at = layout.frameOffset(frame);
-            for (int point = 0; point < layout.points(); point++, i++) {
-                if (layout.isReal()) {
-                    xyz[3 * i] = c.rawF32(at);
-                    xyz[3 * i + 1] = c.rawF32(at + 4);
-                    xyz[3 * i + 2] = c.rawF32(at + 8);
-                    float w = c.rawF32(at + 12);
-                    at += 16;
-                    if (w >= LOWEST && w <= HIGHEST_UNSIGNED) {
-                        word[i] = (short) w;
-                        unsigned += w > HIGHEST ? 1 : 0;
-                    } else {
-                        out++;
-                    }
-                } else {
-                    xyz[3 * i] = (short) c.rawU16(at);
-                    xyz[3 * i + 1] = (short) c.rawU16(at + 2);
-                    xyz[3 * i + 2] = (short) c.rawU16(at + 4);
-                    word[i] = (short) c.rawU16(at + 6);
-                    at += 8;
-                }
-            }
-        }
-        return new C3dPoints(
-                layout.frames(), layout.points(), xyz, word, layout.isReal() ? 1 : factor, factor, unsigned, out);
+    float stored(int frame, int point, int word) {
+        return store.at(first(frame, point) + word);
     }
 
     /**
@@ -115,7 +105,7 @@ public final class C3dPoints {
      * @return in the file's length unit
      */
     public double coordinate(int frame, int point, int component) {
-        return xyz[3 * (frame * points + point) + component] * coordinateScale;
+        return store.at(first(frame, point) + component) * coordinateScale;
     }
 
     /**
@@ -126,11 +116,18 @@ public final class C3dPoints {
      * @return true where valid
      */
     public boolean isValid(int frame, int point) {
-        int i = frame * points + point;
-        return word[i] >= 0
-                && Float.isFinite(xyz[3 * i])
-                && Float.isFinite(xyz[3 * i + 1])
-                && Float.isFinite(xyz[3 * i + 2]);
+        int i = first(frame, point);
+        if (!isReal) {
+            return isFlagObeyed ? store.at(i + WORDS - 1) >= 0 : isPlaced(i);
+        }
+        return (isFlagObeyed ? word(i) >= 0 : isPlaced(i))
+                && Float.isFinite(store.at(i))
+                && Float.isFinite(store.at(i + 1))
+                && Float.isFinite(store.at(i + 2));
+    }
+
+    private boolean isPlaced(int i) {
+        return store.at(i) != 0 || store.at(i + 1) != 0 || store.at(i + 2) != 0;
     }
 
     /**
@@ -141,8 +138,8 @@ public final class C3dPoints {
      * @return in the file's length unit; -1 where not valid
      */
     public double residual(int frame, int point) {
-        int i = frame * points + point;
-        return isValid(frame, point) ? (word[i] & 0xff) * residualScale : -1;
+        int word = word(first(frame, point));
+        return isValid(frame, point) ? (word < 0 ? 0 : (word & 0xff) * residualScale) : -1;
     }
 
     /**
@@ -153,8 +150,7 @@ public final class C3dPoints {
      * @return bit mask of seven cameras; 0 where not valid
      */
     public int cameras(int frame, int point) {
-        int i = frame * points + point;
-        return isValid(frame, point) ? word[i] >> 8 : 0;
+        return isValid(frame, point) ? Math.max(0, word(first(frame, point))) >> 8 : 0;
     }
 
     /** Samples whose fourth word is a negative one without its sign, as 65535 is -1. */

@@ -1,5 +1,7 @@
 package org.solewright.formats.c3d;
 
+import java.io.IOException;
+import java.nio.channels.FileChannel;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashMap;
@@ -20,13 +22,14 @@ final class C3dReader {
     private static final byte[] PICTURE = {(byte) 0x89, 'P', 'N', 'G', '\r', '\n', 0x1a, '\n'};
 
     private static final double FASTEST = 1e7;
-    private static final int MOST_POINTS = 65535;
+    private static final int POINT_WORDS = 4;
 
     private final String source;
     private final String name;
     private final byte[] bytes;
     private final long size;
-    private final boolean withData;
+    private final Optional<FileChannel> channel;
+    private final C3dReading reading;
     private final List<Finding> findings = new ArrayList<>();
 
     /**
@@ -34,19 +37,21 @@ final class C3dReader {
      *
      * @param source the file as the user named it
      * @param name the file's name without folder
-     * @param bytes the whole file, or its beginning where no data are wanted
+     * @param bytes header and parameters: the file's beginning
      * @param size of the whole file
-     * @param withData whether samples are decoded
+     * @param channel the file, for samples; empty where none are wanted
+     * @param reading which samples are wanted
      */
-    C3dReader(String source, String name, byte[] bytes, long size, boolean withData) {
+    C3dReader(String source, String name, byte[] bytes, long size, Optional<FileChannel> channel, C3dReading reading) {
         this.source = source;
         this.name = name;
         this.bytes = bytes;
         this.size = size;
-        this.withData = withData;
+        this.channel = channel;
+        this.reading = reading;
     }
 
-    C3dFile read() throws FormatException {
+    C3dFile read() throws IOException, FormatException {
         sniff();
         ByteCursor any = new ByteCursor(source, bytes, Processor.INTEL);
         int block = any.u8(0);
@@ -105,7 +110,7 @@ final class C3dReader {
         } else if (block > 0) {
             throw new FormatException(
                     source,
-                    "ends at byte " + bytes.length + " before its parameter section at byte " + at,
+                    "ends at byte " + size + " before its parameter section at byte " + at,
                     "get a complete copy of the file");
         }
         return guess(c).orElseThrow(() -> new FormatException(
@@ -139,39 +144,35 @@ final class C3dReader {
         return block > 0 && c.holds((block - 1L) * BLOCK, 8);
     }
 
-    private C3dFile assemble(ByteCursor c, C3dHeader header, C3dParameters p) throws FormatException {
-        double stored = p.number("POINT", "SCALE");
-        float scale = Double.isNaN(stored) ? header.scale() : (float) stored;
-        boolean isReal = scale < 0;
-        DataLayout layout = layout(header, p, isReal);
-        layout = frames(layout, header, p);
+    private C3dFile assemble(ByteCursor c, C3dHeader header, C3dParameters p) throws IOException, FormatException {
+        DataLayout layout = new LayoutChoice(source, header, p, size, findings).choose();
         double rate = p.number("POINT", "RATE");
         if (!isRate(rate)) {
             rate = isRate(header.rate()) ? header.rate() : Double.NaN;
         }
-        C3dPoints points = withData ? C3dPoints.read(c, layout, scale) : C3dPoints.none(layout.points());
-        SampleChecks.add(points, findings);
         List<String> labels = Labels.of(p, "POINT", layout.points(), "point_", findings);
+        Samples samples = samples(c.processor(), layout, labels, LayoutChoice.scale(header, p));
+        SampleChecks.add(samples.points(), findings);
         List<String> analogLabels = Labels.of(p, "ANALOG", layout.channels(), "analog_", findings);
-        C3dAnalog analog = analog(c, layout, p, rate);
+        C3dAnalog analog = analog(samples.analog(), layout, p, rate);
         SampleChecks.add(analog, findings);
         List<String> analogUnits = new ArrayList<>();
         List<String> units = C3dParameter.joined(p.continued("ANALOG", "UNITS"));
         for (int k = 0; k < layout.channels(); k++) {
             analogUnits.add(k < units.size() ? units.get(k) : "");
         }
-        int firstFrame = FrameCount.first(header, p);
+        rotations(p);
         List<RecordedEvent> events = events(p);
         events.addAll(header.events());
         return new C3dFile(
                 name,
                 c.processor(),
-                isReal,
-                firstFrame,
+                layout.isReal(),
+                FrameCount.first(header, p),
                 rate,
                 p.find("POINT", "UNITS").map(u -> u.text(0)).orElse(""),
-                labels,
-                points,
+                samples.labels(),
+                samples.points(),
                 analogLabels,
                 analogUnits,
                 analog,
@@ -182,94 +183,73 @@ final class C3dReader {
                 findings);
     }
 
-    /** Points, channels and samples per frame: the file's size decides where header and parameters disagree. */
-    private DataLayout layout(C3dHeader header, C3dParameters p, boolean isReal) {
-        int block = header.dataBlock();
-        double stored = p.find("POINT", "DATA_START").map(d -> d.unsigned(0)).orElse(Double.NaN);
-        if (block < 1 && stored >= 1) {
-            block = (int) stored;
-        }
-        int start = (int) Math.min((Math.max(1, block) - 1L) * BLOCK, size);
-        int perFrame = header.analogPerFrame();
-        if (perFrame == 0) {
-            double ratio = p.number("ANALOG", "RATE") / p.number("POINT", "RATE");
-            perFrame = ratio >= 1 && ratio < 1e4 ? (int) Math.round(ratio) : header.analogWords() > 0 ? 1 : 0;
-        }
-        double used = p.find("ANALOG", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
-        int channels = Double.isNaN(used) ? header.analogWords() / Math.max(1, perFrame) : (int) used;
-        int points = header.points();
-        double usedPoints = p.find("POINT", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
-        if (!Double.isNaN(usedPoints) && usedPoints != points) {
-            findings.add(Finding.warning(
-                    "points.count",
-                    "",
-                    "the header says " + points + " points per frame, POINT:USED " + (int) usedPoints));
-            DataLayout byHeader = new DataLayout(start, 0, points, channels, perFrame, isReal);
-            DataLayout byParameters = new DataLayout(start, 0, (int) usedPoints, channels, perFrame, isReal);
-            long frames = FrameCount.declared(header, p);
-            if (misfit(byParameters, frames) < misfit(byHeader, frames)) {
-                points = (int) usedPoints;
+    /** What was decoded: the wanted points with their labels, and the words of the analog channels. */
+    private record Samples(List<String> labels, C3dPoints points, SampleStore analog) {}
+
+    private Samples samples(Processor processor, DataLayout layout, List<String> labels, float scale)
+            throws IOException, FormatException {
+        List<String> wanted = new ArrayList<>();
+        List<Integer> runs = new ArrayList<>();
+        for (int point = 0; point < labels.size(); point++) {
+            if (reading.points().test(labels.get(point))) {
+                wanted.add(labels.get(point));
+                int last = runs.size() - 1;
+                if (last > 0 && runs.get(last - 1) + runs.get(last) == POINT_WORDS * point) {
+                    runs.set(last, runs.get(last) + POINT_WORDS);
+                } else {
+                    runs.add(POINT_WORDS * point);
+                    runs.add(POINT_WORDS);
+                }
             }
         }
-        DataLayout layout = new DataLayout(start, 0, Math.min(points, MOST_POINTS), channels, perFrame, isReal);
-        int words = header.analogWords();
-        if (words != channels * perFrame) {
-            long frames = FrameCount.declared(header, p);
-            int byWords = words / Math.max(1, perFrame);
-            DataLayout other = new DataLayout(start, 0, layout.points(), byWords, perFrame, isReal);
-            findings.add(Finding.warning(
-                    "analog.count",
-                    "",
-                    "the header says " + words + " analog words per frame, the parameters " + channels + " channels of "
-                            + perFrame + " samples"));
-            if (misfit(other, frames) < misfit(layout, frames)) {
-                layout = other;
-            }
+        boolean hasAnalog = reading.isAnalogWanted() && layout.channels() > 0 && layout.analogPerFrame() > 0;
+        int frames = channel.isPresent() ? layout.frames() : 0;
+        int analogWords = hasAnalog ? layout.channels() * layout.analogPerFrame() : 0;
+        requireRoom(layout, (long) frames * POINT_WORDS * wanted.size(), (long) frames * analogWords);
+        SampleStore points = SampleStore.of(layout.isReal(), frames * POINT_WORDS * wanted.size());
+        SampleStore analog = SampleStore.of(layout.isReal(), frames * analogWords);
+        if (channel.isPresent()) {
+            int[] analogRun = hasAnalog ? new int[] {POINT_WORDS * layout.points(), analogWords} : new int[0];
+            new SampleSections(channel.get(), layout, processor)
+                    .read(
+                            new int[][] {
+                                runs.stream().mapToInt(Integer::intValue).toArray(), analogRun
+                            },
+                            new SampleStore[] {points, analog});
         }
-        return layout;
+        return new Samples(
+                wanted,
+                new C3dPoints(frames, wanted.size(), points, layout.isReal(), scale, reading.isFlagObeyed()),
+                analog);
     }
 
-    private long misfit(DataLayout layout, long frames) {
-        long room = size - layout.start();
-        return Math.abs(room - frames * layout.frameBytes());
+    /** Says it in time where the samples would not fit in memory. */
+    private void requireRoom(DataLayout layout, long pointWords, long analogWords) throws FormatException {
+        long bytes = (pointWords + analogWords) * layout.wordBytes();
+        long heap = Runtime.getRuntime().maxMemory();
+        if (Math.max(pointWords, analogWords) > Integer.MAX_VALUE - 8 || bytes > heap - heap / 8) {
+            throw new FormatException(
+                    source,
+                    "holds " + (bytes >> 20) + " MB of samples, more than fits in " + (heap >> 20) + " MB of memory",
+                    "crop it, or allow more memory by JAVA_OPTS=-Xmx" + ((bytes >> 29) + 1) + "g");
+        }
     }
 
-    private DataLayout frames(DataLayout layout, C3dHeader header, C3dParameters p) throws FormatException {
-        long room = Math.max(0, size - layout.start());
-        long bytes = layout.frameBytes();
-        if (bytes == 0) {
-            if (p.all().isEmpty()) {
-                throw new FormatException(
-                        source, "has neither parameters nor frames", "get a complete copy of the file");
-            }
-            return layout;
-        }
-        long fits = room / bytes;
-        long count = FrameCount.of(header, p, fits, findings);
-        if (count > fits) {
-            if (fits == 0 && p.all().isEmpty()) {
-                throw new FormatException(
-                        source,
-                        "ends at byte " + size + " before its first frame at byte " + layout.start(),
-                        "get a complete copy of the file");
-            }
-            String message = "the file says " + count + " frames and ends after " + fits + " whole ones";
-            findings.add(
-                    fits == 0
-                            ? Finding.error("file.truncated", "", message)
-                            : Finding.warning("file.truncated", "", message));
-            count = fits;
-        } else if (room - count * bytes >= BLOCK) {
+    private void rotations(C3dParameters p) {
+        double used = p.find("ROTATION", "USED").map(u -> u.unsigned(0)).orElse(Double.NaN);
+        if (used > 0) {
             findings.add(Finding.note(
-                    "file.surplus", "", (room - count * bytes) + " bytes follow the last frame and are not read"));
+                    "rotations.not-read",
+                    "ROTATION",
+                    (int) used + " segment orientations are stored beside the points; they are kept as parameters and"
+                            + " not read"));
         }
-        return layout.withFrames((int) count);
     }
 
-    private C3dAnalog analog(ByteCursor c, DataLayout layout, C3dParameters p, double pointRate) {
+    private C3dAnalog analog(SampleStore store, DataLayout layout, C3dParameters p, double pointRate) {
         int n = layout.channels();
         if (n == 0 || layout.analogPerFrame() == 0) {
-            return new C3dAnalog(0, n, Double.NaN, new float[0], new double[n], new double[n]);
+            return C3dAnalog.none(n);
         }
         boolean isUnsigned = p.find("ANALOG", "FORMAT")
                 .map(f -> f.text(0).equalsIgnoreCase("UNSIGNED"))
@@ -284,9 +264,7 @@ final class C3dReader {
             factor[k] = at(scales, k, false).orElse(1.0) * (Double.isNaN(general) ? 1 : general);
         }
         double rate = pointRate * layout.analogPerFrame();
-        float[] raw = withData ? C3dAnalog.raw(c, layout, isUnsigned) : new float[0];
-        int samples = withData ? layout.frames() * layout.analogPerFrame() : 0;
-        return new C3dAnalog(samples, n, rate, raw, offset, factor);
+        return new C3dAnalog(store.words() / n, n, rate, store, isUnsigned && !layout.isReal(), offset, factor);
     }
 
     private static Optional<Double> at(List<C3dParameter> parts, int index, boolean isUnsigned) {
@@ -344,6 +322,10 @@ final class C3dReader {
                 .filter(c -> c.dimensions().size() >= 2)
                 .map(c -> c.dimensions().get(0) * c.dimensions().get(1))
                 .orElse(0);
+        int rows = calibration
+                .filter(c -> !c.dimensions().isEmpty())
+                .map(c -> c.dimensions().get(0))
+                .orElse(0);
         for (int k = 0; k < count; k++) {
             List<Vec3> corners = new ArrayList<>();
             for (int i = 0; i < 4; i++) {
@@ -359,7 +341,7 @@ final class C3dReader {
                 values.add(calibration.get().number(k * matrix + i));
             }
             int type = (int) types.get().number(k);
-            platforms.add(new C3dPlatform(k + 1, type, corners, triple(found.get("ORIGIN"), k), of, values));
+            platforms.add(new C3dPlatform(k + 1, type, corners, triple(found.get("ORIGIN"), k), of, values, rows));
         }
         return platforms;
     }

@@ -10,7 +10,7 @@ import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.geometry.Vec3;
 
 /**
- * Force-platform channels to the ground reaction on the subject, in the laboratory frame (types 1 to 4).
+ * Force-platform channels to the ground reaction on the subject, in the laboratory frame (types 1 to 7).
  *
  * <p>Platform axes P: x along c1 + c4 - c2 - c3, z = x cross (c1 + c2 - c3 - c4), pointing down. ORIGIN points from the
  * measuring origin to the surface centre, so its z is negative; files with a positive one mean the opposite. Moments are
@@ -74,10 +74,10 @@ final class PlatformReader {
 
     private Optional<Usable> usable(C3dPlatform p) {
         String where = "platform " + p.number();
-        int channels = p.type() == 3 ? 8 : 6;
-        if (p.type() < 1 || p.type() > 4) {
-            return refuse(where, "is of type " + p.type() + ", which this version does not read");
+        if (!PlatformChannels.knows(p.type())) {
+            return refuse(where, "is of type " + p.type() + "; types 1 to 7 are known");
         }
+        int channels = PlatformChannels.width(p.type());
         if (p.channels().size() < channels
                 || p.channels().subList(0, channels).stream()
                         .anyMatch(c -> c < 1 || c > file.analog().channels())) {
@@ -101,12 +101,25 @@ final class PlatformReader {
         } catch (IllegalArgumentException e) {
             return refuse(where, "has corners that span no plane");
         }
-        if (p.type() == 4 && p.calibration().size() < 36) {
-            return refuse(where, "is of type 4 and has no 6 x 6 calibration matrix");
+        Optional<PlatformChannels> converted = PlatformChannels.of(p);
+        if (converted.isEmpty()) {
+            return refuse(
+                    where,
+                    "is of type " + p.type() + " and has no " + PlatformChannels.neededMatrix(p.type())
+                            + " calibration matrix");
+        }
+        PlatformChannels six = converted.get();
+        if (p.type() == 6 && six.hasSensorDistances()) {
+            findings.add(Finding.note(
+                    "platform.channel-order",
+                    where,
+                    "its twelve channels are taken as Fx1 Fy1 Fz1 to Fx4 Fy4 Fz4 of the sensors at corners 1 to 4: check the"
+                            + " centre of pressure"));
         }
         boolean hasOrigin = p.origin().isFinite();
         boolean isZero = hasOrigin && p.origin().norm() == 0;
-        boolean hasCop = isUnitKnown && (p.type() == 1 || (hasOrigin && !(p.type() == 3 && isZero)));
+        boolean hasCop =
+                isUnitKnown && (six.isPressureCentre() || (hasOrigin && !(six.hasSensorDistances() && isZero)));
         if (!hasCop) {
             findings.add(Finding.warning(
                     "platform.no-cop",
@@ -114,7 +127,7 @@ final class PlatformReader {
                     (isUnitKnown ? "its ORIGIN is " + (isZero ? "0" : "not stored") : "the length unit is not known")
                             + ": its forces are used, a centre of pressure cannot be computed"));
         }
-        return Optional.of(wrench(p, axes, hasCop));
+        return Optional.of(wrench(p, six, axes, hasCop));
     }
 
     private Optional<Usable> refuse(String where, String why) {
@@ -123,13 +136,13 @@ final class PlatformReader {
         return Optional.empty();
     }
 
-    private Vec3 origin(C3dPlatform p) {
+    private Vec3 origin(C3dPlatform p, PlatformChannels six) {
         Vec3 o = p.origin();
         if (!o.isFinite()) {
             return Vec3.ZERO;
         }
         boolean isUpward = o.z() > 0;
-        if (isUpward && p.type() != 1) {
+        if (isUpward && !six.isPressureCentre()) {
             findings.add(Finding.warning(
                     "platform.origin-sign",
                     "platform " + p.number(),
@@ -139,29 +152,27 @@ final class PlatformReader {
                                     + " %s reversed",
                             o.z(),
                             file.unit(),
-                            p.type() == 3 ? "its z is" : "it is")));
+                            six.hasSensorDistances() ? "its z is" : "it is")));
         }
-        if (p.type() == 3) {
+        if (six.hasSensorDistances()) {
             return new Vec3(o.x(), o.y(), isUpward ? -o.z() : o.z());
         }
         return isUpward ? o.times(-1) : o;
     }
 
-    private Usable wrench(C3dPlatform p, PlatformAxes axes, boolean hasCop) {
+    private Usable wrench(C3dPlatform p, PlatformChannels six, PlatformAxes axes, boolean hasCop) {
         int n = file.analog().samples();
-        int width = p.type() == 3 ? 8 : 6;
-        double[] c = channels(p, n, width);
-        Vec3 o = origin(p);
-        // ORIGIN 1 and 2 of type 3 are the sensors' distances a and b, not a place.
-        Vec3 arm = p.type() == 3 ? new Vec3(0, 0, o.z()) : o;
+        double[] c = channels(p, six, n);
+        Vec3 o = origin(p, six);
+        Vec3 arm = six.hasSensorDistances() ? new Vec3(0, 0, o.z()) : o;
         double[] force = new double[FORCES * n];
         double[] moment = new double[FORCES * n];
         double[] w = new double[6];
         for (int i = 0; i < n; i++) {
-            six(p, c, i * width, o, w);
+            six.six(c, i * six.width(), o, w);
             int at = FORCES * i;
             System.arraycopy(w, 0, force, at, FORCES);
-            if (p.type() == 1) {
+            if (six.isPressureCentre()) {
                 // Channels 4 and 5 are the centre of pressure from the surface centre, 6 the free moment about it.
                 moment[at] = w[4] * w[2] * metres;
                 moment[at + 1] = -w[3] * w[2] * metres;
@@ -176,32 +187,9 @@ final class PlatformReader {
         return new Usable(p, axes, hasCop, force, moment);
     }
 
-    /** Forces and moments about the measuring origin (type 1: centre of pressure and free moment), file's units. */
-    private static void six(C3dPlatform p, double[] c, int at, Vec3 o, double[] w) {
-        if (p.type() == 3) {
-            double a = o.x();
-            double b = o.y();
-            w[0] = c[at] + c[at + 1];
-            w[1] = c[at + 2] + c[at + 3];
-            w[2] = c[at + 4] + c[at + 5] + c[at + 6] + c[at + 7];
-            w[3] = b * (c[at + 4] + c[at + 5] - c[at + 6] - c[at + 7]);
-            w[4] = a * (-c[at + 4] + c[at + 5] + c[at + 6] - c[at + 7]);
-            w[5] = b * (-c[at] + c[at + 1]) + a * (c[at + 2] - c[at + 3]);
-        } else if (p.type() == 4) {
-            for (int row = 0; row < 6; row++) {
-                double sum = 0;
-                for (int column = 0; column < 6; column++) {
-                    sum += p.calibration().get(6 * column + row) * c[at + column];
-                }
-                w[row] = sum;
-            }
-        } else {
-            System.arraycopy(c, at, w, 0, 6);
-        }
-    }
-
     /** The platform's channels, {@code [samples][width]}, less the mean of the ZERO window where that is unloaded. */
-    private double[] channels(C3dPlatform p, int n, int width) {
+    private double[] channels(C3dPlatform p, PlatformChannels six, int n) {
+        int width = six.width();
         double[] c = new double[n * width];
         for (int k = 0; k < width; k++) {
             int channel = p.channels().get(k) - 1;
@@ -213,7 +201,7 @@ final class PlatformReader {
         if (window.length == 0) {
             return c;
         }
-        if (!isUnloaded(p, c, n, width, window)) {
+        if (!isUnloaded(p, six, c, n, window)) {
             findings.add(Finding.note(
                     "platform.zero-loaded",
                     "platform " + p.number(),
@@ -246,11 +234,11 @@ final class PlatformReader {
         return last < first ? new int[0] : new int[] {(int) (first - 1) * perFrame, (int) last * perFrame};
     }
 
-    private boolean isUnloaded(C3dPlatform p, double[] c, int n, int width, int[] window) {
+    private static boolean isUnloaded(C3dPlatform p, PlatformChannels six, double[] c, int n, int[] window) {
         double[] vertical = new double[n];
         double[] w = new double[6];
         for (int i = 0; i < n; i++) {
-            six(p, c, i * width, p.origin(), w);
+            six.six(c, i * six.width(), p.origin(), w);
             vertical[i] = w[2];
         }
         double[] sorted = vertical.clone();

@@ -113,7 +113,8 @@ class PlatformReaderTest {
         }
         p.integers("CHANNEL", "Channels", numbers, numbers.length, 1);
         if (calibration.length > 0) {
-            p.reals("CAL_MATRIX", "Calibration", calibration, 6, 6, 1);
+            int rows = calibration.length / n;
+            p.reals("CAL_MATRIX", "Calibration", calibration, rows, n, 1);
         }
         return p;
     }
@@ -158,16 +159,16 @@ class PlatformReaderTest {
         isTheLoad(read(1, origin(0), new double[] {FX, 0, FZ, X, Y, 0}, new double[0]));
     }
 
-    @Test
-    void typeThreeSumsItsEightSensors() throws IOException, FormatException {
-        double a = 120;
-        double b = 200;
+    private static final double A = 120;
+    private static final double B = 200;
+
+    /** exact: four verticals with the wanted sum and moments and no twist; both Fx chosen for Mz, no Fy. */
+    private static double[] eightChannels() {
         double[] six = sixChannels();
-        // exact: four verticals with the wanted sum and moments and no twist; both Fx chosen for Mz, no Fy.
-        double along = six[3] / (4 * b);
-        double across = six[4] / (4 * a);
-        double turn = six[5] / (2 * b);
-        double[] eight = {
+        double along = six[3] / (4 * B);
+        double across = six[4] / (4 * A);
+        double turn = six[5] / (2 * B);
+        return new double[] {
             FX / 2 - turn,
             FX / 2 + turn,
             0,
@@ -177,10 +178,64 @@ class PlatformReaderTest {
             FZ / 4 - along + across,
             FZ / 4 - along - across
         };
-        isTheLoad(read(3, new double[] {a, b, -DEPTH}, eight, new double[0]));
-        Recording reversed = read(3, new double[] {a, b, DEPTH}, eight, new double[0]);
+    }
+
+    @Test
+    void typeThreeSumsItsEightSensors() throws IOException, FormatException {
+        isTheLoad(read(3, new double[] {A, B, -DEPTH}, eightChannels(), new double[0]));
+        Recording reversed = read(3, new double[] {A, B, DEPTH}, eightChannels(), new double[0]);
         isTheLoad(reversed);
         assertThat(reversed.findings().get(0).message()).contains("its z is reversed");
+    }
+
+    @Test
+    void typeFiveMakesSixOfEightByItsMatrix() throws IOException, FormatException {
+        // exact: the sums of type 3 written as a 6 x 8 matrix, stored column by column.
+        double[][] sums = {
+            {1, 1, 0, 0, 0, 0, 0, 0},
+            {0, 0, 1, 1, 0, 0, 0, 0},
+            {0, 0, 0, 0, 1, 1, 1, 1},
+            {0, 0, 0, 0, B, B, -B, -B},
+            {0, 0, 0, 0, -A, A, A, -A},
+            {-B, B, A, -A, 0, 0, 0, 0}
+        };
+        double[] matrix = new double[48];
+        for (int row = 0; row < 6; row++) {
+            for (int column = 0; column < 8; column++) {
+                matrix[6 * column + row] = sums[row][column];
+            }
+        }
+        isTheLoad(read(5, origin(-DEPTH), eightChannels(), matrix));
+    }
+
+    @Test
+    void typeSevenMultipliesTheEightOfTypeThree() throws IOException, FormatException {
+        // exact: the first channel is half of what it should be and lacks a tenth of the second.
+        double[] eight = eightChannels();
+        double[] matrix = new double[64];
+        for (int i = 0; i < 8; i++) {
+            matrix[8 * i + i] = 1;
+        }
+        matrix[0] = 2;
+        matrix[8] = 0.1;
+        eight[0] = (eight[0] - 0.1 * eight[1]) / 2;
+        isTheLoad(read(7, new double[] {A, B, -DEPTH}, eight, matrix));
+    }
+
+    @Test
+    void typeSixHasThreeForcesOfEachOfFourSensors() throws IOException, FormatException {
+        double[] eight = eightChannels();
+        // exact: type 3 sums Fx of the sensors at +b and at -b, here one sensor of each pair carries all of it.
+        double[] twelve = {eight[0], 0, eight[4], 0, 0, eight[5], eight[1], 0, eight[6], 0, 0, eight[7]};
+        Recording plain = read(6, new double[] {A, B, -DEPTH}, twelve, new double[0]);
+        isTheLoad(plain);
+        assertThat(codes(plain)).containsExactly("platform.channel-order");
+        double[] half = new double[144];
+        for (int i = 0; i < 12; i++) {
+            half[12 * i + i] = 0.5;
+            twelve[i] *= 2;
+        }
+        isTheLoad(read(6, new double[] {A, B, -DEPTH}, twelve, half));
     }
 
     @Test
@@ -290,7 +345,7 @@ class PlatformReaderTest {
         double[] none = new double[0];
         Recording unknown = read(9, origin(-DEPTH), sixChannels(), none);
         assertThat(unknown.platforms()).isEmpty();
-        assertThat(unknown.findings().get(0).message()).contains("is of type 9, which this version does not read");
+        assertThat(unknown.findings().get(0).message()).contains("is of type 9; types 1 to 7 are known");
         assertThat(read(2, origin(-DEPTH), sixChannels(), none, "CORNERS")
                         .findings()
                         .get(0)
@@ -306,6 +361,11 @@ class PlatformReaderTest {
                         .get(0)
                         .message())
                 .contains("has no 6 x 6 calibration matrix");
+        assertThat(read(7, new double[] {A, B, -DEPTH}, eightChannels(), none)
+                        .findings()
+                        .get(0)
+                        .message())
+                .contains("has no 8 x 8 calibration matrix");
         assertThat(codes(read(2, origin(-DEPTH), sixChannels(), none, "ORIGIN")))
                 .contains("platform.no-cop");
     }
