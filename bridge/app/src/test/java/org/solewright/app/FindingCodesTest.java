@@ -11,8 +11,9 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import org.solewright.app.pipeline.FindingCures;
 
-/** The list of finding codes in DEVELOPERS.md is that of the sources. */
+/** The list of finding codes in DEVELOPERS.md is that of the sources, and each has a cure. */
 class FindingCodesTest {
 
     private static final Pattern IN_SOURCE =
@@ -45,5 +46,9 @@ class FindingCodesTest {
         }
         assertThat(used).hasSizeGreaterThan(50);
         assertThat(listed).isEqualTo(used);
+        FindingCures cures = FindingCures.read();
+        for (String code : used) {
+            assertThat(cures.of(code)).as("what to do about " + code).isPresent();
+        }
     }
 }

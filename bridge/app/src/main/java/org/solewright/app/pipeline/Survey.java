@@ -4,14 +4,14 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import java.util.stream.Collectors;
 import org.solewright.domain.finding.Finding;
+import org.solewright.domain.finding.Severity;
 import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.geometry.Vec3;
-import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.c3d.C3dPlatform;
+import org.solewright.formats.c3d.C3dReading;
 import org.solewright.formats.io.FormatException;
 
 /**
@@ -19,12 +19,10 @@ import org.solewright.formats.io.FormatException;
  *
  * @param path the file as the user named it
  * @param file its content; without samples where only the header was read
- * @param recording the same in SI units
+ * @param recording its platforms and findings in SI units; without tracks
  * @param isHeaderOnly whether no data block was touched
  */
 public record Survey(Path path, C3dFile file, Recording recording, boolean isHeaderOnly) {
-
-    private static final int MOST_LISTED = 100;
 
     /**
      * Surveys a file.
@@ -36,8 +34,49 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
      * @throws FormatException where it is no C3D file
      */
     public static Survey of(Path path, boolean isHeaderOnly) throws UseCaseException, FormatException {
-        C3dFile file = InputFiles.read(path, f -> isHeaderOnly ? C3dFile.readHeader(f) : C3dFile.read(f));
-        return new Survey(path, file, file.toRecording(), isHeaderOnly);
+        return of(path, isHeaderOnly, C3dReading.everything());
+    }
+
+    /**
+     * Surveys a file.
+     *
+     * @param path a C3D file
+     * @param isHeaderOnly whether to touch no data block
+     * @param reading how it is read
+     * @return the survey
+     * @throws UseCaseException where it cannot be read
+     * @throws FormatException where it is no C3D file
+     */
+    public static Survey of(Path path, boolean isHeaderOnly, C3dReading reading)
+            throws UseCaseException, FormatException {
+        C3dFile file = InputFiles.read(path, f -> isHeaderOnly ? C3dFile.readHeader(f) : C3dFile.read(f, reading));
+        return new Survey(path, file, file.withoutTracks(), isHeaderOnly);
+    }
+
+    /**
+     * The same with every warning made an error.
+     *
+     * @return a stricter survey
+     */
+    public Survey strict() {
+        List<Finding> findings = recording.findings().stream()
+                .map(f -> f.severity() == Severity.WARNING
+                        ? new Finding(f.code(), Severity.ERROR, f.where(), f.message())
+                        : f)
+                .toList();
+        return new Survey(
+                path,
+                file,
+                new Recording(
+                        recording.name(),
+                        recording.rate(),
+                        recording.firstFrame(),
+                        recording.frames(),
+                        recording.points(),
+                        recording.platforms(),
+                        recording.events(),
+                        findings),
+                isHeaderOnly);
     }
 
     /**
@@ -110,46 +149,22 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
      * @return one line each
      */
     public List<String> page() {
-        List<String> lines = new ArrayList<>();
-        lines.add(path.toString());
-        lines.add("  " + file.processor().word() + ", " + (file.isReal() ? "real" : "integer") + " samples, "
-                + frames() + " frames from " + file.firstFrame() + " at " + number(file.rate()) + " Hz"
-                + (file.rate() > 0 ? String.format(Locale.ROOT, " (%.3f s)", frames() / file.rate()) : "")
-                + ", lengths in " + (file.unit().isEmpty() ? "an unknown unit" : file.unit()));
-        points(lines);
-        if (file.analog().channels() > 0) {
-            lines.add("  " + file.analog().channels() + " analog channels at "
-                    + number(file.analog().rate()) + " Hz: " + listed(file.analogLabels()));
-        }
-        for (C3dPlatform p : file.platforms()) {
-            lines.add(platform(p));
-        }
-        for (RecordedEvent e : file.events()) {
-            lines.add(String.format(
-                    Locale.ROOT,
-                    "  event %.3f s %s%s (%s)",
-                    e.time(),
-                    e.context().isEmpty() ? "" : e.context() + " ",
-                    e.label(),
-                    e.source().word()));
-        }
-        lines.add("  " + (findings().isEmpty() ? "no findings" : "findings:"));
-        for (Finding f : findings()) {
-            lines.add("    " + f.severity().word() + " " + f.code()
-                    + (f.where().isEmpty() ? "" : " (" + f.where() + ")") + ": " + f.message());
-        }
-        return lines;
+        return SurveyPage.of(this);
     }
 
-    private void points(List<String> lines) {
-        int n = file.points().points();
-        if (file.frames() == 0) {
-            lines.add("  " + n + " points: " + listed(file.labels()));
-            return;
-        }
-        List<String> whole = new ArrayList<>();
-        List<String> gapped = new ArrayList<>();
-        for (int k = 0; k < n; k++) {
+    /**
+     * In how many frames a point was lost.
+     *
+     * @param label of the point
+     * @param lost frames in which it is not seen
+     * @param longest run of such frames
+     */
+    record Gaps(String label, int lost, int longest) {}
+
+    /** One per point; none where no data was read. */
+    List<Gaps> gaps() {
+        List<Gaps> all = new ArrayList<>();
+        for (int k = 0; file.frames() > 0 && k < file.points().points(); k++) {
             int lost = 0;
             int longest = 0;
             int run = 0;
@@ -158,44 +173,9 @@ public record Survey(Path path, C3dFile file, Recording recording, boolean isHea
                 lost += run > 0 ? 1 : 0;
                 longest = Math.max(longest, run);
             }
-            if (lost == 0) {
-                whole.add(file.labels().get(k));
-            } else {
-                gapped.add(String.format(
-                        Locale.ROOT,
-                        "    %-16s lost in %d of %d frames, longest gap %d frames%s",
-                        file.labels().get(k),
-                        lost,
-                        file.frames(),
-                        longest,
-                        file.rate() > 0 ? String.format(Locale.ROOT, " (%.3f s)", longest / file.rate()) : ""));
-            }
+            all.add(new Gaps(file.labels().get(k), lost, longest));
         }
-        lines.add("  " + n + " points" + (whole.isEmpty() ? "" : ", without gaps: " + listed(whole)));
-        lines.addAll(gapped.subList(0, Math.min(MOST_LISTED, gapped.size())));
-        if (gapped.size() > MOST_LISTED) {
-            lines.add("    ... and " + (gapped.size() - MOST_LISTED) + " more with gaps");
-        }
-    }
-
-    private String platform(C3dPlatform p) {
-        List<Vec3> corners = corners(p);
-        String where = corners.isEmpty()
-                ? "not usable"
-                : "corners "
-                        + corners.stream()
-                                .map(c -> String.format(Locale.ROOT, "(%.3f %.3f %.3f)", c.x(), c.y(), c.z()))
-                                .collect(Collectors.joining(" "))
-                        + " m"
-                        + (Double.isNaN(peakVertical(p.number()))
-                                ? ""
-                                : String.format(Locale.ROOT, ", peak vertical %.1f N", peakVertical(p.number())));
-        return "  platform " + p.number() + ", type " + p.type() + ": " + where;
-    }
-
-    private static String listed(List<String> labels) {
-        return String.join(" ", labels.subList(0, Math.min(MOST_LISTED, labels.size())))
-                + (labels.size() > MOST_LISTED ? " ... and " + (labels.size() - MOST_LISTED) + " more" : "");
+        return all;
     }
 
     private static String number(double v) {

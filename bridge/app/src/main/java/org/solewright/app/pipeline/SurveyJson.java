@@ -9,6 +9,7 @@ import java.util.List;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.RecordedEvent;
+import org.solewright.formats.c3d.C3dParameter;
 import org.solewright.formats.c3d.C3dPlatform;
 
 /** A survey as one line of JSON. */
@@ -53,6 +54,21 @@ public final class SurveyJson {
                     .put("label", e.label())
                     .put("context", e.context())
                     .put("time_s", e.time());
+        }
+        ObjectNode groups = root.putObject("groups");
+        for (C3dParameter p : survey.file().parameters().all()) {
+            groups.put(p.group(), groups.path(p.group()).asInt() + 1);
+        }
+        if (!survey.isHeaderOnly()) {
+            ArrayNode gaps = root.putArray("gaps");
+            for (Survey.Gaps g : survey.gaps()) {
+                if (g.lost() > 0) {
+                    gaps.addObject()
+                            .put("label", g.label())
+                            .put("lostFrames", g.lost())
+                            .put("longestGap", g.longest());
+                }
+            }
         }
         findings(root.putArray("findings"), survey.findings());
         return text(root);

@@ -8,6 +8,7 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.stream.Stream;
@@ -17,6 +18,7 @@ import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.PointTrack;
 import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.domain.motion.Recording;
+import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.c3d.C3dWriter;
 import org.solewright.formats.io.FormatException;
 
@@ -104,6 +106,47 @@ class CommandLineTest extends DemoCalls {
         assertThat(call("survey", "--header", file.toString()).out())
                 .contains("2 points: HEEL TOE")
                 .doesNotContain("peak");
+    }
+
+    @Test
+    void strictSurveyMakesWarningsErrors() throws IOException, FormatException {
+        Recording walk = C3dFile.read(demo.resolve("walking-1.c3d")).toRecording();
+        List<PointTrack> twice = new ArrayList<>(walk.points());
+        PlatformLoads p = walk.platforms().get(0);
+        double[] pulling = new double[3 * p.samples()];
+        Arrays.setAll(pulling, i -> i % 3 == 2 ? i < 300 ? -60 : 900 : 0);
+        Path file = folder.resolve("pulling.c3d");
+        C3dWriter.write(
+                file,
+                new Recording(
+                        "pulling.c3d",
+                        walk.rate(),
+                        1,
+                        walk.frames(),
+                        twice,
+                        List.of(new PlatformLoads(
+                                1,
+                                2,
+                                p.corners(),
+                                p.up(),
+                                p.rate(),
+                                p.time(0),
+                                true,
+                                pulling,
+                                new double[pulling.length])),
+                        List.of(),
+                        List.of()));
+        Called lenient = call("survey", file.toString(), at("walking-1.c3d"));
+        assertThat(lenient.code()).isZero();
+        assertThat(lenient.out())
+                .contains("warning platform.negative-load")
+                .contains("do: Check channels, scale and baseline")
+                .containsSubsequence("pulling.c3d", "walking-1.c3d");
+        Called strict = call("survey", "--strict", "--json", file.toString(), at("walking-1.c3d"));
+        assertThat(strict.code()).isEqualTo(1);
+        assertThat(strict.out()).contains("\"severity\":\"error\"");
+        assertThat(strict.errors()).hasSize(1);
+        assertThat(call("survey", "--strict", file.toString()).code()).isEqualTo(3);
     }
 
     @Test

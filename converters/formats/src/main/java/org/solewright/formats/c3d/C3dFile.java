@@ -191,4 +191,13 @@ public record C3dFile(
     public Recording toRecording() {
         return C3dRecording.of(this);
     }
+
+    /**
+     * Platform loads, events and findings in SI units, without the points' tracks.
+     *
+     * @return as {@link #toRecording()}, with no points
+     */
+    public Recording withoutTracks() {
+        return C3dRecording.withoutTracks(this);
+    }
 }

@@ -14,6 +14,14 @@ final class C3dRecording {
     private C3dRecording() {}
 
     static Recording of(C3dFile file) {
+        return of(file, true);
+    }
+
+    static Recording withoutTracks(C3dFile file) {
+        return of(file, false);
+    }
+
+    private static Recording of(C3dFile file, boolean withTracks) {
         List<Finding> findings = new ArrayList<>(file.findings());
         Optional<Double> stated = LengthUnit.metres(file.unit());
         double metres = stated.or(() -> LengthUnit.fitting(file.platforms())).orElse(1e-3);
@@ -35,7 +43,7 @@ final class C3dRecording {
                 file.rate(),
                 file.firstFrame(),
                 file.frames(),
-                tracks(file, metres),
+                withTracks ? tracks(file, metres) : List.of(),
                 platforms,
                 file.events(),
                 findings);
