@@ -9,6 +9,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.ComparedLimb;
 import org.solewright.domain.cost.Comparison;
 import org.solewright.domain.cost.Posture;

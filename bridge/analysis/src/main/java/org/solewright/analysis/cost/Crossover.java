@@ -1,6 +1,8 @@
 package org.solewright.analysis.cost;
 
 import java.util.OptionalDouble;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.analysis.numerics.Root;
 import org.solewright.domain.cost.WorkForm;
 

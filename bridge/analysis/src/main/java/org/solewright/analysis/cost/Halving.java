@@ -1,5 +1,6 @@
 package org.solewright.analysis.cost;
 
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.WorkForm;
 
 /** What halving the step does to a compass: work per distance at D/2 over that at D. */

@@ -5,6 +5,8 @@ import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
 import java.util.OptionalDouble;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.FootRule;
 import org.solewright.domain.cost.LandscapeRow;
 import org.solewright.domain.cost.Posture;

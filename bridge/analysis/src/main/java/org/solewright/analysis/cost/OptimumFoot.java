@@ -1,5 +1,6 @@
 package org.solewright.analysis.cost;
 
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.analysis.numerics.Root;
 import org.solewright.domain.cost.WorkForm;
 

@@ -1,5 +1,7 @@
 package org.solewright.analysis.cost;
 
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.analysis.numerics.Root;
 import org.solewright.domain.cost.WorkForm;
 

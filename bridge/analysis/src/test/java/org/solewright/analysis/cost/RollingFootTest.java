@@ -5,6 +5,8 @@ import static org.assertj.core.api.Assertions.catchThrowableOfType;
 import static org.assertj.core.api.Assertions.within;
 
 import org.junit.jupiter.api.Test;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.WorkForm;
 
 class RollingFootTest {

@@ -9,6 +9,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.EnumSource;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.WorkForm;
 
 class VaultingStepTest {

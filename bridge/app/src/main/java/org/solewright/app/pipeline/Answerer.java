@@ -4,8 +4,8 @@ import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.OptionalDouble;
 import java.util.Set;
-import org.solewright.analysis.cost.Limit;
-import org.solewright.analysis.cost.LimitException;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 
 /**
  * Answers one kind of question.

@@ -93,6 +93,27 @@ final class QuestionInputs {
         return value;
     }
 
+    /** A share, above 0 to 1. */
+    double positiveShare(String name, double fallback) throws CallerError {
+        double value = share(name, fallback);
+        return positive(value, name);
+    }
+
+    /** An angle from the vertical or level, rad, less than pi in size. */
+    double angle(String name) throws CallerError {
+        double value = number(name);
+        if (!(Math.abs(value) < Math.PI)) {
+            throw new CallerError(
+                    CallerError.Code.WRONG_TYPE,
+                    "input '" + name + "' is " + value + ", expected an angle between -pi and pi rad");
+        }
+        return value;
+    }
+
+    double angle(String name, double fallback) throws CallerError {
+        return has(name) ? angle(name) : fallback;
+    }
+
     double gravity() throws CallerError {
         return positive("gravity", STANDARD_GRAVITY);
     }

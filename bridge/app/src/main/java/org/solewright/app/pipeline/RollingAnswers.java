@@ -7,10 +7,10 @@ import static org.solewright.app.pipeline.Answerer.putOrCode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Map;
-import org.solewright.analysis.cost.LimitException;
 import org.solewright.analysis.cost.PivotPolygon;
 import org.solewright.analysis.cost.RollingFoot;
 import org.solewright.analysis.cost.VaultingStep;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.WorkForm;
 
 /** The questions {@code rolling.*}. */

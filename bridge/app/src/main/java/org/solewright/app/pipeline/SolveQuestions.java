@@ -18,7 +18,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.TreeMap;
-import org.solewright.analysis.cost.LimitException;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.io.Spelling;
 
@@ -36,16 +36,6 @@ public final class SolveQuestions {
             "cost.optimum",
             "cost.optimum-by-speed",
             "cost.rates",
-            "vault.duration",
-            "vault.level-gait",
-            "vault.passive-gait",
-            "vault.rimless-wheel",
-            "vault.polygon-step",
-            "vault.speed-window",
-            "walker.passive",
-            "walker.powered",
-            "walker.target",
-            "walker.period-doubling",
             "impact.chain",
             "sprawl.trochoid",
             "sprawl.circle",
@@ -65,6 +55,8 @@ public final class SolveQuestions {
     public SolveQuestions() {
         answerers.putAll(TransitionAnswers.all());
         answerers.putAll(RollingAnswers.all());
+        answerers.putAll(VaultAnswers.all());
+        answerers.putAll(WalkerAnswers.all());
         answerers.putAll(FitAnswers.all());
         answerers.putAll(MotionAnswers.all());
     }

@@ -13,10 +13,10 @@ import java.util.Optional;
 import org.solewright.analysis.cost.Crossover;
 import org.solewright.analysis.cost.EqualCost;
 import org.solewright.analysis.cost.Halving;
-import org.solewright.analysis.cost.Limit;
-import org.solewright.analysis.cost.LimitException;
 import org.solewright.analysis.cost.OptimumFoot;
 import org.solewright.analysis.cost.VaultingStep;
+import org.solewright.analysis.dynamics.Limit;
+import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.FootRule;
 import org.solewright.domain.cost.WorkForm;
 
@@ -79,7 +79,8 @@ final class TransitionAnswers {
                 "input 'footRule' is \"" + QuestionInputs.shown(word) + "\", expected one of given, equal, optimum");
     }
 
-    private static ObjectNode step(QuestionInputs in) throws CallerError, LimitException {
+    /** The geometry of a step; the optimum foot is that of a work form. */
+    static VaultingStep step(QuestionInputs in, WorkForm form) throws CallerError, LimitException {
         double segments = in.number("segments");
         double stepLength = in.number("stepLength");
         double limbLength = in.number("limbLength");
@@ -91,14 +92,17 @@ final class TransitionAnswers {
         } else {
             in.setAside("footLength");
         }
+        return switch (rule) {
+            case GIVEN -> VaultingStep.given(segments, stepLength, limbLength, foot, share);
+            case EQUAL -> VaultingStep.equalVaults(segments, stepLength, limbLength, share);
+            case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, limbLength, share);
+        };
+    }
+
+    private static ObjectNode step(QuestionInputs in) throws CallerError, LimitException {
         List<Costed> steps = new ArrayList<>();
         for (WorkForm form : in.workForms()) {
-            VaultingStep step =
-                    switch (rule) {
-                        case GIVEN -> VaultingStep.given(segments, stepLength, limbLength, foot, share);
-                        case EQUAL -> VaultingStep.equalVaults(segments, stepLength, limbLength, share);
-                        case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, limbLength, share);
-                    };
+            VaultingStep step = step(in, form);
             steps.add(new Costed(form, step, step.factor(form)));
         }
         double speed = in.number("speed");
@@ -113,8 +117,8 @@ final class TransitionAnswers {
             Answerer.put(of, "vaultRadius", step.radius());
             Answerer.put(of, "stepFactor", costed.factor());
             Answerer.put(of, "workPerStep", work);
-            Answerer.put(of, "workPerMetre", work / stepLength);
-            Answerer.put(of, "costOfTransport", work / (mass * gravity * stepLength));
+            Answerer.put(of, "workPerMetre", work / step.stepLength());
+            Answerer.put(of, "costOfTransport", work / (mass * gravity * step.stepLength()));
             ArrayNode angles = of.putArray("transitionAngles");
             for (int i = 0; i < step.transitions(); i++) {
                 angles.add(step.angle(i));

@@ -1,4 +1,4 @@
-package org.solewright.analysis.cost;
+package org.solewright.analysis.dynamics;
 
 /** A model has no value at these inputs. The message says which number breaks which limit. */
 public final class LimitException extends Exception {

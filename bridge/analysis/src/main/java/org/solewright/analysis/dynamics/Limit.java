@@ -1,4 +1,4 @@
-package org.solewright.analysis.cost;
+package org.solewright.analysis.dynamics;
 
 /** A limit of the models, by the code word that scripts see. */
 public enum Limit {
@@ -31,5 +31,19 @@ public enum Limit {
     /** The hip is too fast to stay on its circle without a pull of the limb. */
     TAKE_OFF,
     /** There are fewer points than a shape needs. */
-    TOO_FEW_POINTS
+    TOO_FEW_POINTS,
+    /** The new limb would have to pull at a transition. */
+    OVER_PUSH,
+    /** The old limb would have to pull at a transition. */
+    NEGATIVE_PUSH,
+    /** There is no such way of pushing off. */
+    POLICY,
+    /** No walk repeats itself. */
+    NO_PERIODIC_GAIT,
+    /** The swing limb does not come to the ground ahead of the stance limb. */
+    NO_HEEL_STRIKE,
+    /** The rows of the constraints depend on one another. */
+    REDUNDANT_CONSTRAINTS,
+    /** The femur does not reach from the hip to the knee. */
+    FEMUR_TOO_SHORT
 }
