@@ -102,6 +102,22 @@ public record RollingFoot(
     private static void check(double stepLength, double limbLength, double arcRadius) throws LimitException {
         VaultingStep.checkLimb(limbLength);
         VaultingStep.checkStep(stepLength);
+        checkArc(limbLength, arcRadius);
+    }
+
+    /**
+     * Checks limb and arc.
+     *
+     * @param limbLength L, m
+     * @param arcRadius R, m
+     * @throws LimitException NONPOSITIVE_RADIUS, ARC_RADIUS
+     */
+    public static void requireArc(double limbLength, double arcRadius) throws LimitException {
+        VaultingStep.checkLimb(limbLength);
+        checkArc(limbLength, arcRadius);
+    }
+
+    private static void checkArc(double limbLength, double arcRadius) throws LimitException {
         if (!(arcRadius >= 0 && arcRadius <= limbLength)) {
             throw new LimitException(
                     Limit.ARC_RADIUS,
@@ -109,7 +125,7 @@ public record RollingFoot(
         }
     }
 
-    private static double longest(double limbLength, double arcRadius) {
+    static double longest(double limbLength, double arcRadius) {
         return Math.PI * arcRadius + 2 * (limbLength - arcRadius);
     }
 

@@ -94,6 +94,27 @@ public final class VaultingStep {
         return given(count, stepLength, limbLength, count * stepLength / (count + 1), seriesShare);
     }
 
+    /**
+     * Checks a number of segments.
+     *
+     * @param segments N
+     * @return the same
+     * @throws LimitException SEGMENT_COUNT where it is negative, not whole or too large
+     */
+    public static int segmentCount(double segments) throws LimitException {
+        return count(segments);
+    }
+
+    /**
+     * Checks a limb length.
+     *
+     * @param limbLength m
+     * @throws LimitException NONPOSITIVE_RADIUS where it is not above 0
+     */
+    public static void requireLimb(double limbLength) throws LimitException {
+        checkLimb(limbLength);
+    }
+
     static void checkLimb(double limbLength) throws LimitException {
         if (!(limbLength > 0)) {
             throw new LimitException(

@@ -1,5 +1,6 @@
 package org.solewright.app.pipeline;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.OptionalDouble;
@@ -26,7 +27,7 @@ record Answerer(Set<String> inputs, Rule rule) {
          * @throws CallerError where an input is missing or not what its name says
          * @throws LimitException where a model has no value: an answer with a code
          */
-        ObjectNode answer(QuestionInputs in) throws CallerError, LimitException;
+        JsonNode answer(QuestionInputs in) throws CallerError, LimitException;
     }
 
     /** A number that a model may not have. */

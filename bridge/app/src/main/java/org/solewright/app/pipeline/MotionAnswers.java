@@ -9,13 +9,14 @@ import java.util.Map;
 import org.solewright.analysis.cost.CollisionMeasures;
 import org.solewright.analysis.cost.PowerWork;
 import org.solewright.analysis.cost.VaultingStep;
+import org.solewright.analysis.dynamics.DistalPower;
 import org.solewright.analysis.dynamics.Limit;
 import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.analysis.dynamics.SyntheticWalk;
 import org.solewright.analysis.dynamics.WalkParameters;
 import org.solewright.domain.cost.WalkTruth;
 
-/** The questions {@code collision.*}, {@code power.work} and {@code trial.*}. */
+/** The questions {@code collision.*}, {@code power.*} and {@code trial.*}. */
 final class MotionAnswers {
 
     private MotionAnswers() {}
@@ -26,6 +27,9 @@ final class MotionAnswers {
                 Answerer.of(MotionAnswers::collision, "force", "velocity", "timeStep", "mass", "gravity"),
                 "power.work",
                 Answerer.of(MotionAnswers::work, "power", "timeStep"),
+                "power.distal",
+                Answerer.of(
+                        MotionAnswers::distal, "force", "freeMoment", "comVelocity", "angularVelocity", "com", "cop"),
                 "trial.synthetic",
                 Answerer.of(
                         MotionAnswers::synthetic,
@@ -38,6 +42,21 @@ final class MotionAnswers {
                         "stepBridgeShare",
                         "innerBridgeShare",
                         "gravity"));
+    }
+
+    private static ObjectNode distal(QuestionInputs in) throws CallerError {
+        ObjectNode out = object();
+        put(
+                out,
+                "power",
+                DistalPower.of(
+                        in.vector("force"),
+                        in.vector("freeMoment"),
+                        in.vector("comVelocity"),
+                        in.vector("angularVelocity"),
+                        in.vector("com"),
+                        in.vector("cop")));
+        return out;
     }
 
     private static ObjectNode collision(QuestionInputs in) throws CallerError, LimitException {

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import org.solewright.domain.cost.WorkForm;
+import org.solewright.domain.geometry.Vec3;
 
 /** The inputs of one question. A value of null counts as not given. */
 final class QuestionInputs {
@@ -81,6 +82,62 @@ final class QuestionInputs {
                     CallerError.Code.WRONG_TYPE, "input '" + name + "' is " + value + ", expected more than 0");
         }
         return value;
+    }
+
+    double notNegative(String name) throws CallerError {
+        double value = number(name);
+        if (!(value >= 0)) {
+            throw new CallerError(
+                    CallerError.Code.WRONG_TYPE, "input '" + name + "' is " + value + ", expected 0 or more");
+        }
+        return value;
+    }
+
+    double notNegative(String name, double fallback) throws CallerError {
+        return has(name) ? notNegative(name) : fallback;
+    }
+
+    /** A whole number that counts entries of a list. */
+    int index(String name, int least, int greatest) throws CallerError {
+        double value = number(name);
+        if (!(value >= least && value <= greatest) || value != Math.rint(value)) {
+            throw new CallerError(
+                    CallerError.Code.WRONG_TYPE,
+                    "input '" + name + "' is " + value + ", expected a whole number from " + least + " to " + greatest);
+        }
+        return (int) value;
+    }
+
+    /** The inputs inside an input. */
+    QuestionInputs object(String name) throws CallerError {
+        return object(needed(name), "input '" + name + "'");
+    }
+
+    /** A list of objects. */
+    List<QuestionInputs> objects(String name) throws CallerError {
+        JsonNode list = list(needed(name), "input '" + name + "'");
+        List<QuestionInputs> all = new ArrayList<>();
+        for (int i = 0; i < list.size(); i++) {
+            all.add(object(list.get(i), "entry " + (i + 1) + " of input '" + name + "'"));
+        }
+        return all;
+    }
+
+    private static QuestionInputs object(JsonNode node, String where) throws CallerError {
+        if (!node.isObject()) {
+            throw new CallerError(CallerError.Code.WRONG_TYPE, where + " is " + kind(node) + ", expected an object");
+        }
+        return new QuestionInputs(node);
+    }
+
+    /** A vector of three numbers. */
+    Vec3 vector(String name) throws CallerError {
+        double[] v = numbers(name);
+        if (v.length != 3) {
+            throw new CallerError(
+                    CallerError.Code.WRONG_TYPE, "input '" + name + "' has " + v.length + " numbers, expected 3");
+        }
+        return new Vec3(v[0], v[1], v[2]);
     }
 
     /** A share, 0 to 1. */

@@ -16,7 +16,6 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
-import java.util.Set;
 import java.util.TreeMap;
 import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.formats.io.FormatException;
@@ -29,17 +28,6 @@ public final class SolveQuestions {
     private static final long MOST_BYTES = 64L << 20;
 
     private static final int DEEPEST = 100;
-
-    /** Questions that have a name already and no answer yet. */
-    private static final Set<String> LATER = Set.of(
-            "cost.calibration",
-            "cost.optimum",
-            "cost.optimum-by-speed",
-            "cost.rates",
-            "impact.chain",
-            "sprawl.trochoid",
-            "sprawl.circle",
-            "power.distal");
 
     private final JsonMapper mapper = JsonMapper.builder(JsonFactory.builder()
                     .streamReadConstraints(StreamReadConstraints.builder()
@@ -57,6 +45,9 @@ public final class SolveQuestions {
         answerers.putAll(RollingAnswers.all());
         answerers.putAll(VaultAnswers.all());
         answerers.putAll(WalkerAnswers.all());
+        answerers.putAll(CostAnswers.all());
+        answerers.putAll(ImpactAnswers.all());
+        answerers.putAll(SprawlAnswers.all());
         answerers.putAll(FitAnswers.all());
         answerers.putAll(MotionAnswers.all());
     }
@@ -226,12 +217,10 @@ public final class SolveQuestions {
             String name = "'" + QuestionInputs.shown(word.textValue()) + "'";
             throw new CallerError(
                     CallerError.Code.UNKNOWN_QUESTION,
-                    LATER.contains(word.textValue())
-                            ? name + " is not answered by this version"
-                            : "there is no question " + name
-                                    + Spelling.nearest(word.textValue(), answerers.keySet())
-                                            .map(n -> ", did you mean '" + n + "'?")
-                                            .orElse(""));
+                    "there is no question " + name
+                            + Spelling.nearest(word.textValue(), answerers.keySet())
+                                    .map(n -> ", did you mean '" + n + "'?")
+                                    .orElse(""));
         }
         return answerer;
     }

@@ -86,7 +86,7 @@ class SolveCommandTest {
     @Test
     void callersErrorsAreNamedAndTheOthersAnswered() throws IOException {
         int code = solve("{\"records\": [" + String.format(STEP, GEOMETRY) + ","
-                + "{\"id\": 7, \"question\": \"walker.passive\", \"inputs\": {}},"
+                + "{\"id\": 7, \"question\": \"walker.run\", \"inputs\": {}},"
                 + "{\"id\": \"t\", \"question\": \"transition.halving\", \"inputs\": {\"stepLength\": \"NaN\","
                 + " \"limbLength\": 0.9}},"
                 + "{\"question\": \"transition.halving\", \"inputs\": {\"stepLength\": 0.6, \"limbLength\": 0.9}}, 3,"
@@ -95,7 +95,7 @@ class SolveCommandTest {
         assertThat(answer(0).get("outputs").get("error").asText()).isEqualTo("MISSING_INPUT");
         assertThat(answer(0).get("outputs").get("message").asText()).contains("'speed'");
         assertThat(answer(1).get("outputs").get("error").asText()).isEqualTo("UNKNOWN_QUESTION");
-        assertThat(answer(1).get("outputs").get("message").asText()).contains("not answered by this version");
+        assertThat(answer(1).get("outputs").get("message").asText()).contains("there is no question 'walker.run'");
         assertThat(answer(1).get("id").asInt()).isEqualTo(7);
         assertThat(answer(2).get("outputs").get("error").asText()).isEqualTo("WRONG_TYPE");
         assertThat(answer(3).get("outputs").get("simultaneous").asDouble()).isEqualTo(0.5);
