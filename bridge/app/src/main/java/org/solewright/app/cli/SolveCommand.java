@@ -1,11 +1,12 @@
 package org.solewright.app.cli;
 
+import java.io.OutputStream;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Callable;
-import org.solewright.app.pipeline.ResultText;
 import org.solewright.app.pipeline.SolveQuestions;
 import org.solewright.app.pipeline.UseCaseException;
 import org.solewright.formats.io.FormatException;
@@ -45,18 +46,32 @@ final class SolveCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws FormatException, UseCaseException {
-        SolveQuestions.Answers answers = new SolveQuestions().answer(questions);
         PrintWriter console = spec.commandLine().getOut();
-        if (out.isPresent()) {
-            ResultText.write(out.get(), answers.json().getBytes(StandardCharsets.UTF_8));
-        } else {
-            console.print(answers.json());
+        List<String> refused = new SolveQuestions().answer(questions, out, new ConsoleBytes(console));
+        console.flush();
+        for (String what : refused) {
+            spec.commandLine().getErr().println("solewright: " + questions + ": " + what + ": correct that question");
         }
-        for (String refused : answers.refused()) {
-            spec.commandLine()
-                    .getErr()
-                    .println("solewright: " + questions + ": " + refused + ": correct that question");
+        return refused.isEmpty() ? ExitCode.DONE : ExitCode.SOME_FAILED;
+    }
+
+    /** The console as a stream of UTF-8. */
+    private static final class ConsoleBytes extends OutputStream {
+        private final PrintWriter console;
+
+        ConsoleBytes(PrintWriter console) {
+            this.console = console;
         }
-        return answers.refused().isEmpty() ? ExitCode.DONE : ExitCode.SOME_FAILED;
+
+        @Override
+        public void write(int b) {
+            console.write(b);
+        }
+
+        @Override
+        public void write(byte[] bytes, int offset, int length) {
+            // Batches end between characters.
+            console.write(new String(bytes, offset, length, StandardCharsets.UTF_8));
+        }
     }
 }

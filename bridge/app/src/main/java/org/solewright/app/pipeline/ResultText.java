@@ -18,11 +18,16 @@ public final class ResultText {
      * @throws UseCaseException where the file cannot be written
      */
     public static void write(Path file, byte[] content) throws UseCaseException {
+        write(file, out -> out.write(content));
+    }
+
+    /** Writes a file piece by piece; where that fails the file is as before. */
+    static void write(Path file, AtomicOutput.Filler filler) throws UseCaseException {
         try {
             if (Files.isDirectory(file)) {
                 throw new IOException("it is a folder");
             }
-            AtomicOutput.write(file, content);
+            AtomicOutput.write(file, filler);
         } catch (IOException e) {
             throw new UseCaseException(
                     UseCaseException.Kind.OUTPUT,

@@ -1,22 +1,32 @@
 package org.solewright.app.pipeline;
 
-import com.fasterxml.jackson.core.JsonFactory;
-import com.fasterxml.jackson.core.JsonLocation;
-import com.fasterxml.jackson.core.JsonProcessingException;
-import com.fasterxml.jackson.core.StreamReadConstraints;
-import com.fasterxml.jackson.databind.DeserializationFeature;
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.json.JsonMapper;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import com.fasterxml.jackson.databind.node.TextNode;
+import java.io.BufferedInputStream;
+import java.io.ByteArrayInputStream;
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
+import java.io.OutputStream;
+import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Deque;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.TreeMap;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.Future;
+import org.solewright.analysis.dynamics.Limit;
 import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.io.Spelling;
@@ -24,19 +34,9 @@ import org.solewright.formats.io.Spelling;
 /** Answers the questions of a file: 04-posture-cost section 12. */
 public final class SolveQuestions {
 
-    /** Files above this size are refused before they are read. */
-    private static final long MOST_BYTES = 64L << 20;
+    private static final int BATCH = 200;
 
-    private static final int DEEPEST = 100;
-
-    private final JsonMapper mapper = JsonMapper.builder(JsonFactory.builder()
-                    .streamReadConstraints(StreamReadConstraints.builder()
-                            .maxNestingDepth(DEEPEST)
-                            .build())
-                    .build())
-            .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
-            .enable(DeserializationFeature.FAIL_ON_READING_DUP_TREE_KEY)
-            .build();
+    private final JsonMapper mapper = new JsonMapper();
     private final Map<String, Answerer> answerers = new TreeMap<>();
 
     /** With all questions of this version. */
@@ -58,7 +58,7 @@ public final class SolveQuestions {
      * @param json a JSON array, one answer to a line
      * @param refused what could not be asked that way, one sentence each, in the order of the file
      */
-    public record Answers(String json, List<String> refused) {
+    record Answers(String json, List<String> refused) {
 
         /** Copies the list. */
         public Answers {
@@ -67,23 +67,35 @@ public final class SolveQuestions {
     }
 
     /**
-     * Reads questions and answers them in their order.
+     * Reads questions and answers them in their order, some hundreds at a time on all cores, whatever their number.
      *
      * @param file one question, an array of them, or an object with an array {@code records}
-     * @return the answers
+     * @param out where a JSON array goes, one answer to a line; empty: to {@code console}
+     * @param console receives the answers where there is no file to write
+     * @return what could not be asked that way, one sentence each, in the order of the file
      * @throws FormatException where the file is not JSON of that shape
-     * @throws UseCaseException where the file cannot be read
+     * @throws UseCaseException where a file cannot be read or written
      */
-    public Answers answer(Path file) throws FormatException, UseCaseException {
-        byte[] bytes;
+    public List<String> answer(Path file, Optional<Path> out, OutputStream console)
+            throws FormatException, UseCaseException {
+        QuestionFile questions = open(file);
+        List<String> refused = new ArrayList<>();
+        if (out.isPresent()) {
+            ResultText.write(out.get(), stream -> answer(questions, stream, refused));
+            return refused;
+        }
         try {
-            if (Files.isRegularFile(file) && Files.size(file) > MOST_BYTES) {
-                throw new FormatException(
-                        file.toString(),
-                        "the file has " + Files.size(file) + " bytes, expected up to " + MOST_BYTES,
-                        "ask in several files");
-            }
-            bytes = Files.readAllBytes(file);
+            answer(questions, console, refused);
+        } catch (IOException e) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.OUTPUT, "standard output", "cannot be written", "give --out", e);
+        }
+        return refused;
+    }
+
+    private static QuestionFile open(Path file) throws FormatException, UseCaseException {
+        try {
+            return QuestionFile.of(file.toString(), () -> new BufferedInputStream(Files.newInputStream(file), 1 << 16));
         } catch (IOException e) {
             throw new UseCaseException(
                     UseCaseException.Kind.INPUT,
@@ -92,66 +104,112 @@ public final class SolveQuestions {
                     "name a readable file of questions",
                     e);
         }
-        return answer(file.toString(), bytes);
     }
 
     Answers answer(String source, byte[] bytes) throws FormatException {
-        List<JsonNode> questions = questions(source, parse(source, bytes));
-        List<String> lines = new ArrayList<>();
         List<String> refused = new ArrayList<>();
-        for (JsonNode question : questions) {
-            lines.add("  " + answer(question, lines.size() + 1, refused));
-        }
-        String json = lines.isEmpty() ? "[]\n" : "[\n" + String.join(",\n", lines) + "\n]\n";
-        return new Answers(json, refused);
-    }
-
-    private JsonNode parse(String source, byte[] bytes) throws FormatException {
-        JsonNode root;
+        ByteArrayOutputStream out = new ByteArrayOutputStream();
         try {
-            root = mapper.readTree(bytes);
-        } catch (JsonProcessingException e) {
-            JsonLocation at = e.getLocation();
-            String place = at == null || at.getLineNr() < 1
-                    ? ""
-                    : "line " + at.getLineNr() + ", column " + at.getColumnNr() + ": ";
-            throw new FormatException(
-                    source,
-                    place + "not JSON (" + QuestionInputs.shown(e.getOriginalMessage()) + ")",
-                    "give one question, an array of questions, or {\"records\": [...]}",
-                    e);
+            answer(QuestionFile.of(source, () -> new ByteArrayInputStream(bytes)), out, refused);
         } catch (IOException e) {
-            throw new FormatException(
-                    source,
-                    "not JSON (" + QuestionInputs.shown(String.valueOf(e.getMessage())) + ")",
-                    "save the file as UTF-8",
-                    e);
+            throw new UncheckedIOException("memory does not fail", e);
         }
-        if (root.isMissingNode()) {
-            throw new FormatException(
-                    source, "the file is empty", "give one question, an array of questions, or {\"records\": [...]}");
-        }
-        return root;
+        return new Answers(out.toString(StandardCharsets.UTF_8), refused);
     }
 
-    private static List<JsonNode> questions(String source, JsonNode root) throws FormatException {
-        JsonNode list = root.isObject() && root.has("records") ? root.get("records") : root;
-        List<JsonNode> questions = new ArrayList<>();
-        if (list.isArray()) {
-            list.forEach(questions::add);
-        } else if (list.isObject() && !root.has("records")) {
-            questions.add(list);
-        } else {
-            throw new FormatException(
-                    source,
-                    (root.has("records") ? "\"records\" is " : "the file holds ") + QuestionInputs.kind(list)
-                            + ", expected questions",
-                    "give one question, an array of questions, or {\"records\": [...]}");
+    private void answer(QuestionFile questions, OutputStream out, List<String> refused) throws IOException {
+        ExecutorService pool = Executors.newFixedThreadPool(Runtime.getRuntime().availableProcessors());
+        try {
+            Run run = new Run(pool, out, refused);
+            questions.forEach(run::take);
+            run.finish();
+        } finally {
+            pool.shutdownNow();
         }
-        return questions;
     }
 
-    private String answer(JsonNode question, int number, List<String> refused) {
+    /** One pass over a file: batches ahead on the pool, written in their order. */
+    private final class Run {
+        private final ExecutorService pool;
+        private final OutputStream out;
+        private final List<String> refused;
+        private final Deque<Future<Batched>> ahead = new ArrayDeque<>();
+        private final int most = 2 * Runtime.getRuntime().availableProcessors();
+        private List<JsonNode> batch = new ArrayList<>();
+        private long taken;
+        private boolean isBegun;
+
+        Run(ExecutorService pool, OutputStream out, List<String> refused) {
+            this.pool = pool;
+            this.out = out;
+            this.refused = refused;
+        }
+
+        void take(JsonNode question) throws IOException {
+            batch.add(question);
+            taken++;
+            if (batch.size() == BATCH) {
+                submit();
+            }
+        }
+
+        private void submit() throws IOException {
+            List<JsonNode> full = batch;
+            long first = taken - full.size() + 1;
+            batch = new ArrayList<>();
+            ahead.add(pool.submit(() -> answered(full, first)));
+            while (ahead.size() > most) {
+                write();
+            }
+        }
+
+        private void write() throws IOException {
+            Batched done;
+            try {
+                done = ahead.remove().get();
+            } catch (InterruptedException e) {
+                Thread.currentThread().interrupt();
+                throw new IOException("stopped", e);
+            } catch (ExecutionException e) {
+                throw new IllegalStateException(e.getCause());
+            }
+            out.write((isBegun ? ",\n" : "[\n").getBytes(StandardCharsets.UTF_8));
+            isBegun = true;
+            done.json().writeTo(out);
+            refused.addAll(done.refused());
+        }
+
+        void finish() throws IOException {
+            if (!batch.isEmpty()) {
+                submit();
+            }
+            while (!ahead.isEmpty()) {
+                write();
+            }
+            out.write((isBegun ? "\n]\n" : "[]\n").getBytes(StandardCharsets.UTF_8));
+            out.flush();
+        }
+    }
+
+    /** Answers of some questions, separated by commas. */
+    private record Batched(ByteArrayOutputStream json, List<String> refused) {}
+
+    private Batched answered(List<JsonNode> questions, long first) throws IOException {
+        ByteArrayOutputStream json = new ByteArrayOutputStream(256 * questions.size());
+        List<String> refused = new ArrayList<>();
+        byte[] between = ",\n".getBytes(StandardCharsets.UTF_8);
+        byte[] indent = "  ".getBytes(StandardCharsets.UTF_8);
+        for (int i = 0; i < questions.size(); i++) {
+            if (i > 0) {
+                json.write(between);
+            }
+            json.write(indent);
+            json.write(mapper.writeValueAsBytes(answer(questions.get(i), first + i, refused)));
+        }
+        return new Batched(json, refused);
+    }
+
+    private ObjectNode answer(JsonNode question, long number, List<String> refused) {
         ObjectNode answer = JsonNodeFactory.instance.objectNode();
         answer.set("id", orNull(question.get("id")));
         answer.set("question", orNull(question.get("question")));
@@ -160,7 +218,7 @@ public final class SolveQuestions {
             Answerer answerer = answerer(question);
             QuestionInputs in = inputs(question);
             try {
-                answer.set("outputs", answerer.rule().answer(in));
+                answer.set("outputs", finite(answerer.rule().answer(in)));
             } finally {
                 ignored = in.ignored(answerer.inputs());
             }
@@ -178,12 +236,27 @@ public final class SolveQuestions {
             ArrayNode names = answer.putArray("ignored");
             ignored.forEach(names::add);
         }
-        return answer.toString();
+        return answer;
     }
 
-    private static String name(JsonNode question, int number) {
+    private static String name(JsonNode question, long number) {
         JsonNode id = question.get("id");
         return id != null && id.isValueNode() && !id.isNull() ? QuestionInputs.shown(id.asText()) : "number " + number;
+    }
+
+    /** A number that has overflowed has no value: its place holds the code. */
+    private static JsonNode finite(JsonNode node) {
+        if (node.isDouble() && !Double.isFinite(node.doubleValue())) {
+            return TextNode.valueOf(Limit.NO_SOLUTION.name());
+        }
+        if (node instanceof ObjectNode object) {
+            object.properties().forEach(e -> e.setValue(finite(e.getValue())));
+        } else if (node instanceof ArrayNode array) {
+            for (int i = 0; i < array.size(); i++) {
+                array.set(i, finite(array.get(i)));
+            }
+        }
+        return node;
     }
 
     private static void refuse(ObjectNode answer, String code, String message) {
