@@ -1,5 +1,8 @@
 package org.solewright.formats.c3d;
 
+import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
+import java.util.List;
 import org.solewright.formats.io.FormatException;
 
 /**
@@ -90,6 +93,21 @@ final class ByteCursor {
             end--;
         }
         return Text.decode(bytes, offset, end - offset);
+    }
+
+    /** The first words of the file, without sign. */
+    List<Integer> words(int count) throws FormatException {
+        List<Integer> words = new ArrayList<>();
+        for (int i = 0; i < count; i++) {
+            words.add(u16(2 * i));
+        }
+        return words;
+    }
+
+    /** Bytes as characters of the same numbers. */
+    String latin(int offset, int count) throws FormatException {
+        check(offset, count);
+        return new String(bytes, offset, count, StandardCharsets.ISO_8859_1);
     }
 
     private void check(int offset, int count) throws FormatException {

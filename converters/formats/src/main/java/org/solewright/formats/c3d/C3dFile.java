@@ -32,6 +32,7 @@ import org.solewright.formats.io.FormatException;
  * @param parameters the parameter section
  * @param platforms force platforms as stored
  * @param storedFrames whole frames that the file holds, also where they were not read
+ * @param headerWords the header block, 256 words without sign
  * @param findings what has to be said
  */
 public record C3dFile(
@@ -50,6 +51,7 @@ public record C3dFile(
         C3dParameters parameters,
         List<C3dPlatform> platforms,
         int storedFrames,
+        List<Integer> headerWords,
         List<Finding> findings) {
 
     /** Far above the longest section seen, where nothing in the file says how far it reaches. */
@@ -62,6 +64,7 @@ public record C3dFile(
         analogUnits = List.copyOf(analogUnits);
         events = List.copyOf(events);
         platforms = List.copyOf(platforms);
+        headerWords = List.copyOf(headerWords);
         findings = List.copyOf(findings);
     }
 

@@ -32,9 +32,10 @@ record C3dHeader(
         List<RecordedEvent> events) {
 
     static final int BYTES = 512;
-    private static final int EVENT_COUNT = 300;
-    private static final int EVENT_TIMES = 304;
-    private static final int EVENT_LABELS = 396;
+    static final int EVENT_COUNT = 300;
+    static final int EVENT_TIMES = 304;
+    static final int EVENT_FLAGS = 376;
+    static final int EVENT_LABELS = 396;
     private static final int MOST_EVENTS = 18;
 
     static C3dHeader read(ByteCursor c) throws FormatException {

@@ -17,14 +17,49 @@ public final class C3dParameter {
     private final List<Integer> dimensions;
     private final double[] numbers;
     private final List<String> texts;
+    private final String storedText;
 
-    C3dParameter(String group, String name, int width, List<Integer> dimensions, double[] numbers, List<String> texts) {
+    /**
+     * A parameter.
+     *
+     * @param group upper case
+     * @param name upper case
+     * @param width bytes of a number, -1 for characters
+     * @param dimensions as stored
+     * @param numbers values; empty for text
+     * @param texts lines; empty for numbers
+     * @param storedText all characters as stored, a byte each; empty for numbers
+     */
+    C3dParameter(
+            String group,
+            String name,
+            int width,
+            List<Integer> dimensions,
+            double[] numbers,
+            List<String> texts,
+            String storedText) {
         this.group = group;
         this.name = name;
         this.width = width;
         this.dimensions = List.copyOf(dimensions);
         this.numbers = numbers;
         this.texts = List.copyOf(texts);
+        this.storedText = storedText;
+    }
+
+    /** Bytes of a number, -1 for characters. */
+    int width() {
+        return width;
+    }
+
+    /** All characters as stored, a byte each. */
+    String storedText() {
+        return storedText;
+    }
+
+    /** Bytes that the values take in the file. */
+    int storedBytes() {
+        return isText() ? storedText.length() : numbers.length * width;
     }
 
     /**

@@ -23,6 +23,23 @@ public final class C3dParameters {
     private static final int MOST_CONTINUATIONS = 1000;
 
     private final Map<String, C3dParameter> parameters = new LinkedHashMap<>();
+    private final List<Entry> entries = new ArrayList<>();
+
+    /**
+     * A record of the section as it lies in the file, for writing it back: a group (negative id) or a parameter.
+     *
+     * @param id of the group, negative for the group itself
+     * @param name as stored
+     * @param isLocked whether it is marked as not to be changed
+     * @param description as stored
+     * @param parameter the first of its name; empty for a group
+     */
+    record Entry(int id, String name, boolean isLocked, String description, Optional<C3dParameter> parameter) {}
+
+    /** All groups and the first parameter of each name, in the file's order; text in ISO 8859-1, so byte for byte. */
+    List<Entry> entries() {
+        return Collections.unmodifiableList(entries);
+    }
 
     private C3dParameters() {}
 
@@ -84,7 +101,15 @@ public final class C3dParameters {
     }
 
     /** One record as it lies in the file. */
-    private record Raw(int group, String name, int type, List<Integer> dimensions, int data, int end) {}
+    private record Raw(
+            int group,
+            String name,
+            String storedName,
+            boolean isLocked,
+            int type,
+            List<Integer> dimensions,
+            int data,
+            int end) {}
 
     /** Reads records; group names may come after their parameters. */
     private static final class Reader {
@@ -108,12 +133,28 @@ public final class C3dParameters {
             C3dParameters section = new C3dParameters();
             int repeated = 0;
             for (Raw raw : raws) {
+                if (raw.group() < 0) {
+                    section.entries.add(new Entry(
+                            raw.group(),
+                            raw.storedName(),
+                            raw.isLocked(),
+                            description(raw.data(), raw.end()),
+                            Optional.empty()));
+                    continue;
+                }
                 String group = groups.getOrDefault(raw.group(), "GROUP_" + raw.group());
                 String key = group + ":" + raw.name();
                 if (section.parameters.containsKey(key)) {
                     repeated++;
                 } else {
-                    section.parameters.put(key, value(group, raw));
+                    C3dParameter value = value(group, raw);
+                    section.parameters.put(key, value);
+                    section.entries.add(new Entry(
+                            raw.group(),
+                            raw.storedName(),
+                            raw.isLocked(),
+                            description(raw.data() + value.storedBytes(), raw.end()),
+                            Optional.of(value)));
                 }
             }
             if (repeated > 0) {
@@ -128,7 +169,8 @@ public final class C3dParameters {
         private void records() throws FormatException {
             int at = start + FIRST_RECORD;
             while (at + 2 <= end) {
-                int length = Math.abs(cursor.i8(at));
+                int signed = cursor.i8(at);
+                int length = Math.abs(signed);
                 int id = cursor.i8(at + 1);
                 if (length == 0 || id == 0 || at + 2 + length + 2 > end) {
                     return;
@@ -141,9 +183,12 @@ public final class C3dParameters {
                 int limit = isLast || isOut ? end : next;
                 String name = cursor.text(at + 2, length).trim().toUpperCase(Locale.ROOT);
                 if (id < 0) {
-                    groups.putIfAbsent(-id, name);
+                    if (groups.putIfAbsent(-id, name) == null) {
+                        raws.add(new Raw(
+                                id, name, cursor.latin(at + 2, length), signed < 0, 0, List.of(), link + 2, limit));
+                    }
                 } else {
-                    parameter(id, name, link + 2, limit);
+                    parameter(id, name, cursor.latin(at + 2, length), signed < 0, link + 2, limit);
                 }
                 if (isLast) {
                     return;
@@ -160,7 +205,17 @@ public final class C3dParameters {
             }
         }
 
-        private void parameter(int id, String name, int at, int limit) throws FormatException {
+        /** Text after a value: its length in a byte, then its bytes; empty where it is missing or cut. */
+        private String description(int at, int limit) throws FormatException {
+            if (at >= limit) {
+                return "";
+            }
+            int length = cursor.u8(at);
+            return at + 1 + length <= limit ? cursor.latin(at + 1, length) : "";
+        }
+
+        private void parameter(int id, String name, String storedName, boolean isLocked, int at, int limit)
+                throws FormatException {
             if (at + 2 > limit) {
                 return;
             }
@@ -175,7 +230,7 @@ public final class C3dParameters {
             for (int k = 0; k < count; k++) {
                 dimensions.add(cursor.u8(at + 2 + k));
             }
-            raws.add(new Raw(id, name, type, dimensions, data, limit));
+            raws.add(new Raw(id, name, storedName, isLocked, type, dimensions, data, limit));
         }
 
         private static Finding cut(String name, int at) {
@@ -200,7 +255,13 @@ public final class C3dParameters {
             }
             if (width == -1) {
                 return new C3dParameter(
-                        group, raw.name(), width, raw.dimensions(), new double[0], lines(raw, (int) count));
+                        group,
+                        raw.name(),
+                        width,
+                        raw.dimensions(),
+                        new double[0],
+                        lines(raw, (int) count),
+                        cursor.latin(raw.data(), (int) count));
             }
             double[] numbers = new double[(int) count];
             for (int i = 0; i < numbers.length; i++) {
@@ -211,7 +272,7 @@ public final class C3dParameters {
                     default -> cursor.f32(at);
                 };
             }
-            return new C3dParameter(group, raw.name(), width, raw.dimensions(), numbers, List.of());
+            return new C3dParameter(group, raw.name(), width, raw.dimensions(), numbers, List.of(), "");
         }
 
         private List<String> lines(Raw raw, int count) throws FormatException {

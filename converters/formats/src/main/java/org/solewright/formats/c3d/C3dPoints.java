@@ -66,6 +66,11 @@ public final class C3dPoints {
         return w >= LOWEST && w <= HIGHEST_UNSIGNED ? (short) (int) w : 0;
     }
 
+    /** What a step of the residual byte stands for, in the file's length unit. */
+    double residualScale() {
+        return residualScale;
+    }
+
     /**
      * A word of a sample as it lies in the file.
      *

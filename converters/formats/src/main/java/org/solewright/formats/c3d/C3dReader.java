@@ -180,6 +180,7 @@ final class C3dReader {
                 p,
                 platforms(p),
                 layout.frames(),
+                c.words(C3dHeader.BYTES / 2),
                 findings);
     }
 

@@ -26,4 +26,26 @@ final class VaxFloat {
         double value = Math.scalb(fraction, (exponent >>> 23) - 128);
         return (float) (bits < 0 ? -value : value);
     }
+
+    /** From here on a number has no VAX F form. */
+    static final float TOO_LARGE = 0x1p127f;
+
+    /**
+     * The little-endian 32-bit word for a number: -0 and what is smaller than 2^-128 become 0.
+     *
+     * @param value smaller than {@link #TOO_LARGE} in size
+     */
+    static int word(float value) {
+        int bits = Float.floatToRawIntBits(value);
+        int exponent = (bits & EXPONENT) >>> 23;
+        if (exponent != 0) {
+            return Integer.rotateLeft(bits + (2 << 23), 16);
+        }
+        // IEEE numbers below 2^-126 have no hidden bit; the largest of them are still VAX numbers.
+        if (Math.abs(value) < 0x1p-128f) {
+            return 0;
+        }
+        int scaled = Float.floatToRawIntBits(value * 0x1p10f);
+        return Integer.rotateLeft(scaled - (8 << 23), 16);
+    }
 }

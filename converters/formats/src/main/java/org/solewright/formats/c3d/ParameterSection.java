@@ -1,0 +1,166 @@
+package org.solewright.formats.c3d;
+
+import java.io.ByteArrayOutputStream;
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * A parameter section to be written: the records of a file that was read, in their order, some of them replaced, some
+ * added. What some readers choke on is not written: every group is declared, the last link is 0, the block count is right,
+ * every record has a description.
+ */
+final class ParameterSection {
+
+    private static final int BLOCK = 512;
+    private static final int MOST_BLOCKS = 255;
+    private static final int LARGEST_LINK = 65535;
+    private static final int MOST_GROUPS = 127;
+
+    private final List<ParameterRecord> records = new ArrayList<>();
+    private final Map<String, Integer> groups = new HashMap<>();
+
+    /** The records of a file; groups that it did not declare are declared. */
+    static ParameterSection of(C3dParameters parameters) {
+        ParameterSection section = new ParameterSection();
+        Map<Integer, String> declared = new HashMap<>();
+        for (C3dParameters.Entry e : parameters.entries()) {
+            if (e.id() < 0) {
+                declared.put(-e.id(), e.name().trim().toUpperCase(Locale.ROOT));
+            }
+        }
+        declared.forEach((id, name) -> section.groups.putIfAbsent(name, id));
+        for (C3dParameters.Entry e : parameters.entries()) {
+            if (e.id() > 0 && !declared.containsKey(e.id())) {
+                declared.put(e.id(), "GROUP_" + e.id());
+                section.groups.put("GROUP_" + e.id(), e.id());
+                section.records.add(ParameterRecord.group(e.id(), "GROUP_" + e.id(), "was not declared"));
+            }
+            section.records.add(ParameterRecord.of(e));
+        }
+        return section;
+    }
+
+    /** Makes sure that there is such a group and gives its number. */
+    int group(String name, String description) {
+        Integer known = groups.get(name);
+        if (known != null) {
+            return known;
+        }
+        int id = 1;
+        while (groups.containsValue(id)) {
+            id++;
+        }
+        if (id > MOST_GROUPS) {
+            throw new IllegalArgumentException("the file has " + MOST_GROUPS + " groups already; none can be added");
+        }
+        groups.put(name, id);
+        records.add(ParameterRecord.group(id, name, description));
+        return id;
+    }
+
+    private int find(int group, String name) {
+        for (int i = 0; i < records.size(); i++) {
+            ParameterRecord r = records.get(i);
+            if (r.id() == group && r.name().trim().toUpperCase(Locale.ROOT).equals(name)) {
+                return i;
+            }
+        }
+        return -1;
+    }
+
+    Optional<ParameterRecord> find(String group, String name) {
+        Integer id = groups.get(group);
+        int at = id == null ? -1 : find(id, name);
+        return at < 0 ? Optional.empty() : Optional.of(records.get(at));
+    }
+
+    /** Replaces a parameter in its place, keeping its name, lock and description, or adds it after the others. */
+    void put(ParameterRecord record) {
+        int at = find(record.id(), record.name());
+        if (at >= 0) {
+            records.set(at, record.like(records.get(at)));
+        } else {
+            records.add(record);
+        }
+    }
+
+    /** Replaces a parameter only where there is one. */
+    void replace(ParameterRecord record) {
+        if (find(record.id(), record.name()) >= 0) {
+            put(record);
+        }
+    }
+
+    void remove(String group, String name) {
+        Integer id = groups.get(group);
+        int at = id == null ? -1 : find(id, name);
+        if (at >= 0) {
+            records.remove(at);
+        }
+    }
+
+    /** Numbers of the section, for checks before it is written. */
+    List<ParameterRecord> records() {
+        return List.copyOf(records);
+    }
+
+    int blocks() {
+        long bytes = 4;
+        for (ParameterRecord r : records) {
+            bytes += 2L + r.name().length() + r.bytesAfterName();
+        }
+        return (int) ((bytes + BLOCK - 1) / BLOCK);
+    }
+
+    /** The whole section, filled up to full blocks. */
+    byte[] bytes(Processor processor) {
+        ByteArrayOutputStream out = new ByteArrayOutputStream();
+        out.write(1);
+        out.write(0x50);
+        out.write(Math.min(MOST_BLOCKS, blocks()));
+        out.write(processor.key());
+        for (int i = 0; i < records.size(); i++) {
+            write(out, records.get(i), processor, i == records.size() - 1);
+        }
+        byte[] section = new byte[blocks() * BLOCK];
+        System.arraycopy(out.toByteArray(), 0, section, 0, out.size());
+        return section;
+    }
+
+    private static void write(ByteArrayOutputStream out, ParameterRecord r, Processor processor, boolean isLast) {
+        int next = r.bytesAfterName();
+        if (next > LARGEST_LINK && !isLast) {
+            throw new IllegalArgumentException(
+                    "parameter " + r.name() + " takes " + next + " bytes, expected at most " + LARGEST_LINK);
+        }
+        ByteBuffer b = ByteBuffer.allocate(2 + r.name().length() + next)
+                .order(processor == Processor.MIPS ? ByteOrder.BIG_ENDIAN : ByteOrder.LITTLE_ENDIAN);
+        b.put((byte) (r.isLocked() ? -r.name().length() : r.name().length()));
+        b.put((byte) r.id());
+        b.put(r.name().getBytes(StandardCharsets.ISO_8859_1));
+        b.putShort((short) (isLast ? 0 : next));
+        if (r.width() != 0) {
+            b.put((byte) r.width());
+            b.put((byte) r.dimensions().size());
+            r.dimensions().forEach(d -> b.put((byte) d.intValue()));
+            b.put(r.text().getBytes(StandardCharsets.ISO_8859_1));
+            for (double v : r.numbers()) {
+                switch (r.width()) {
+                    case 1 -> b.put((byte) v);
+                    case 2 -> b.putShort((short) (int) v);
+                    default -> b.putInt(WordOutput.word((float) v, processor));
+                }
+            }
+        }
+        b.put((byte) r.description().length());
+        b.put(r.description().getBytes(StandardCharsets.ISO_8859_1));
+        out.write(b.array(), 0, b.position());
+    }
+}
