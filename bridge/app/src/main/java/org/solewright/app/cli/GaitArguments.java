@@ -59,6 +59,16 @@ final class GaitArguments {
             description = "Where contacts come from; this version knows platform.")
     private String events = "platform";
 
+    @Option(names = "--ignore-flags", description = "Take samples for seen that a file flags as missing.")
+    private boolean isFlagIgnored;
+
+    @Option(
+            names = "--annotate",
+            paramLabel = "DIR",
+            description =
+                    "Write the walking recordings into this folder with joint centres, centres of pressure, contacts.")
+    private Optional<Path> annotate = Optional.empty();
+
     /** For picocli. */
     GaitArguments() {}
 
@@ -78,6 +88,12 @@ final class GaitArguments {
         if (!events.equals("platform")) {
             throw usage("--events", "this version takes contacts from platforms only", "use --events platform");
         }
+        if (isMirrored && annotate.isPresent()) {
+            throw usage(
+                    "--annotate",
+                    "is not given together with --mirrored",
+                    "annotate recordings of a right-handed frame");
+        }
         check("--mass", mass, 0.01, 1e5, "kg");
         check("--stature", stature, 0.05, 10, "m");
         check("--floor", floor, -100, 100, "m");
@@ -95,7 +111,9 @@ final class GaitArguments {
                 optional(floor),
                 isMirrored,
                 optional(markerRadius),
-                markerCutoff);
+                markerCutoff,
+                isFlagIgnored,
+                annotate);
     }
 
     private static OptionalDouble optional(@Nullable Double value) {

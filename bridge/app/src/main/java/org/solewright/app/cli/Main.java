@@ -21,6 +21,7 @@ import picocli.CommandLine.ScopeType;
         subcommands = {
             SurveyCommand.class,
             TabulateCommand.class,
+            ConvertCommand.class,
             FitCommand.class,
             AppraiseCommand.class,
             PosturesCommand.class,

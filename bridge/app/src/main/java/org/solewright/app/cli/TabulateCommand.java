@@ -18,6 +18,7 @@ import org.solewright.domain.finding.Severity;
 import org.solewright.formats.io.AtomicOutput;
 import org.solewright.formats.io.FormatException;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
@@ -43,6 +44,9 @@ final class TabulateCommand implements Callable<Integer> {
     @Option(names = "--units-row", description = "A second header row gives the units.")
     private boolean hasUnitsRow;
 
+    @Mixin
+    private WindowArguments window = new WindowArguments();
+
     @Spec
     private CommandSpec spec = CommandSpec.create();
 
@@ -54,7 +58,8 @@ final class TabulateCommand implements Callable<Integer> {
         Tabulation.What table = Tabulation.What.ofWord(what)
                 .orElseThrow(() -> GaitArguments.usage(
                         "--what", "'" + what + "' is unknown", "use points, analog, loads or events"));
-        Tabulation tabulation = Tabulation.of(file, table, hasUnitsRow);
+        Tabulation tabulation =
+                Tabulation.of(file, table, hasUnitsRow, window.from(), window.to(), window.isFlagIgnored());
         List<Finding> findings = tabulation.findings();
         for (Finding f : findings) {
             if (f.severity() == Severity.ERROR) {

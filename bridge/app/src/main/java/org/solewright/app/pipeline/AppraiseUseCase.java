@@ -105,7 +105,8 @@ public final class AppraiseUseCase {
         GaitOptions options = request.gait();
         readModels();
         LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
-        List<Recording> walking = InputFiles.walking(options.walking(), sources, findings);
+        InputFiles.Walking walked = InputFiles.walking(options.walking(), options.isFlagIgnored(), sources, findings);
+        List<Recording> walking = walked.recordings();
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();
@@ -119,6 +120,9 @@ public final class AppraiseUseCase {
                 of.add(row(pass, subject.walking().get(i), step));
             }
             rows.addAll(of);
+        }
+        if (options.annotate().isPresent()) {
+            annotate(options.annotate().get(), walked.files(), subject);
         }
         if (rows.isEmpty()) {
             throw new UseCaseException(
@@ -145,6 +149,26 @@ public final class AppraiseUseCase {
                 .distinct()
                 .toList();
         return new Result(cost, mechanics, postures, ContactOverrides.rows(subject.passes()), curves, failed);
+    }
+
+    private void annotate(Path folder, Map<String, Path> files, GaitSubject subject)
+            throws UseCaseException, FormatException {
+        for (int i = 0; i < subject.passes().size(); i++) {
+            Pass pass = subject.passes().get(i);
+            LandmarkTracks tracks = subject.walking().get(i);
+            Annotation annotation = new Annotation(pass, tracks.recording().frames());
+            for (Map.Entry<Side, ModelLimb> e : models.entrySet()) {
+                ModelLimb limb = e.getValue();
+                limb.shank(tracks).ifPresent(s -> {
+                    annotation.joint(e.getKey(), "KNEE", f -> limb.knee(s, f), "knee centre of the model");
+                    annotation.joint(e.getKey(), "ANKLE", f -> limb.ankle(s, f), "ankle centre of the model");
+                });
+            }
+            Path file = files.get(pass.trial().name());
+            if (file != null) {
+                findings.addAll(annotation.write(file, folder));
+            }
+        }
     }
 
     private List<PostureCost.Setting> settings() {

@@ -119,7 +119,9 @@ public final class DemoUseCase {
                 OptionalDouble.of(0),
                 false,
                 OptionalDouble.empty(),
-                0);
+                0,
+                false,
+                Optional.empty());
         survey(files);
         FitUseCase.Request fit = new FitUseCase.Request(
                 options,

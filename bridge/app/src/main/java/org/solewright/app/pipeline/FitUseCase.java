@@ -1,5 +1,6 @@
 package org.solewright.app.pipeline;
 
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.EnumSet;
@@ -110,8 +111,9 @@ public final class FitUseCase {
     private Result run() throws UseCaseException, FormatException {
         GaitOptions options = request.gait();
         LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
-        List<Recording> standing = InputFiles.standing(options.standing(), sources, findings);
-        List<Recording> walking = InputFiles.walking(options.walking(), sources, findings);
+        List<Recording> standing = InputFiles.standing(options.standing(), options.isFlagIgnored(), sources, findings);
+        InputFiles.Walking walked = InputFiles.walking(options.walking(), options.isFlagIgnored(), sources, findings);
+        List<Recording> walking = walked.recordings();
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();
@@ -140,6 +142,7 @@ public final class FitUseCase {
         Map<Side, StandingLimb> limbs = new EnumMap<>(Side.class);
         Map<Side, WalkingRollOver> rollOvers = new EnumMap<>(Side.class);
         Map<Side, Set<SegmentName>> observed = new EnumMap<>(Side.class);
+        Map<Side, List<LimbMotion>> moved = new EnumMap<>(Side.class);
         for (Side side : sides) {
             StandingLimb limb = built(posture, mass, side, stood);
             requireSound(limb, standing.get(0));
@@ -147,6 +150,7 @@ public final class FitUseCase {
                     .map(tracks -> LimbMotion.of(stood, tracks, side))
                     .toList();
             WalkingRollOver rollOver = rollOver(limb, subject, motions, mass);
+            moved.put(side, motions);
             observed.put(side, observed(motions));
             limbs.put(side, limb);
             rollOvers.put(side, rollOver);
@@ -160,10 +164,38 @@ public final class FitUseCase {
             rollOver.findings().forEach(this::addOnce);
             models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), get(observed, side)));
         }
+        if (options.annotate().isPresent()) {
+            annotate(options.annotate().get(), walked.files(), subject, limbs, moved);
+        }
         List<Finding> shared = List.copyOf(findings);
         models.replaceAll((side, m) -> withFindings(m, shared));
         return new Result(
                 models, limbs, rollOvers, subject, ContactOverrides.rows(subject.passes()), shared, failed(shared));
+    }
+
+    private void annotate(
+            Path folder,
+            Map<String, Path> files,
+            GaitSubject subject,
+            Map<Side, StandingLimb> limbs,
+            Map<Side, List<LimbMotion>> moved)
+            throws UseCaseException, FormatException {
+        for (int i = 0; i < subject.passes().size(); i++) {
+            Pass pass = subject.passes().get(i);
+            Annotation annotation =
+                    new Annotation(pass, subject.walking().get(i).recording().frames());
+            for (Map.Entry<Side, StandingLimb> e : limbs.entrySet()) {
+                StandingLimb limb = e.getValue();
+                LimbMotion motion = get(moved, e.getKey()).get(i);
+                annotation.joint(e.getKey(), "HIP", f -> motion.hip(limb, f), "hip centre, carried by pelvis or thigh");
+                annotation.joint(e.getKey(), "KNEE", f -> motion.knee(limb, f), "knee centre, carried by the shank");
+                annotation.joint(e.getKey(), "ANKLE", f -> motion.ankle(limb, f), "ankle centre, carried by the shank");
+            }
+            Path file = files.get(pass.trial().name());
+            if (file != null) {
+                findings.addAll(annotation.write(file, folder));
+            }
+        }
     }
 
     private static <T> T get(Map<Side, T> map, Side side) {

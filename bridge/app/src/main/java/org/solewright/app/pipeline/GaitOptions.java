@@ -23,6 +23,8 @@ import org.solewright.domain.foot.Sex;
  * @param isMirrored whether the laboratory frame is to be mirrored
  * @param markerRadius m
  * @param markerCutoff low-pass for markers, Hz; 0: none
+ * @param isFlagIgnored whether samples that are flagged missing are taken for seen
+ * @param annotate folder into which the walking recordings are written back with what was found in them
  */
 public record GaitOptions(
         List<Path> standing,
@@ -36,7 +38,9 @@ public record GaitOptions(
         OptionalDouble floor,
         boolean isMirrored,
         OptionalDouble markerRadius,
-        double markerCutoff) {
+        double markerCutoff,
+        boolean isFlagIgnored,
+        Optional<Path> annotate) {
 
     /** Low-pass for markers where none is given, Hz (03 section 2). */
     public static final double DEFAULT_MARKER_CUTOFF = 10;
@@ -61,7 +65,9 @@ public record GaitOptions(
                 floor,
                 isMirrored,
                 markerRadius,
-                markerCutoff);
+                markerCutoff,
+                isFlagIgnored,
+                annotate);
     }
 
     /** All files of the call. */

@@ -9,9 +9,11 @@ import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.HashSet;
 import java.util.HexFormat;
 import java.util.List;
+import java.util.Map;
 import java.util.Set;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.SourceFile;
@@ -19,6 +21,7 @@ import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
+import org.solewright.formats.c3d.C3dReading;
 import org.solewright.formats.footmodel.LandmarkMapFile;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.table.ContactsTable;
@@ -35,11 +38,12 @@ final class InputFiles {
     }
 
     /** Standing recordings: every one of them is needed. */
-    static List<Recording> standing(List<Path> files, List<SourceFile> sources, List<Finding> findings)
+    static List<Recording> standing(
+            List<Path> files, boolean isFlagIgnored, List<SourceFile> sources, List<Finding> findings)
             throws UseCaseException, FormatException {
         List<Recording> recordings = new ArrayList<>();
         for (Path file : files) {
-            recordings.add(recording(file, "standing", sources, findings));
+            recordings.add(recording(file, "standing", isFlagIgnored, sources, findings));
         }
         return recordings;
     }
@@ -48,9 +52,10 @@ final class InputFiles {
      * Walking recordings: one that cannot be used is named in a finding and left out; where none can be used, the first
      * one's reason is thrown. Files of one name in two folders are told apart as {@code walk#2}.
      */
-    static List<Recording> walking(List<Path> files, List<SourceFile> sources, List<Finding> findings)
+    static Walking walking(List<Path> files, boolean isFlagIgnored, List<SourceFile> sources, List<Finding> findings)
             throws UseCaseException, FormatException {
         List<Recording> recordings = new ArrayList<>();
+        Map<String, Path> byTrial = new HashMap<>();
         Set<String> names = new HashSet<>();
         UseCaseException unusable = null;
         FormatException damaged = null;
@@ -58,7 +63,9 @@ final class InputFiles {
             List<SourceFile> read = new ArrayList<>();
             List<Finding> said = new ArrayList<>();
             try {
-                recordings.add(distinct(recording(file, "walking", read, said), names));
+                Recording r = distinct(recording(file, "walking", isFlagIgnored, read, said), names);
+                recordings.add(r);
+                byTrial.put(GaitSubject.trialName(r), file);
                 sources.addAll(read);
                 findings.addAll(said);
             } catch (UseCaseException e) {
@@ -75,8 +82,16 @@ final class InputFiles {
         if (recordings.isEmpty() && damaged != null) {
             throw damaged;
         }
-        return recordings;
+        return new Walking(recordings, byTrial);
     }
+
+    /**
+     * Walking recordings that can be used.
+     *
+     * @param recordings in the user's order
+     * @param files by the name of the trial
+     */
+    record Walking(List<Recording> recordings, Map<String, Path> files) {}
 
     /** An input that could not be used although others of the call were. */
     static Finding failed(String where, String message, String whatToDo) {
@@ -101,9 +116,11 @@ final class InputFiles {
                 r.findings());
     }
 
-    private static Recording recording(Path file, String role, List<SourceFile> sources, List<Finding> findings)
+    private static Recording recording(
+            Path file, String role, boolean isFlagIgnored, List<SourceFile> sources, List<Finding> findings)
             throws UseCaseException, FormatException {
-        Recording r = read(file, f -> C3dFile.read(f).toRecording());
+        C3dReading reading = isFlagIgnored ? C3dReading.everything().ignoringFlags() : C3dReading.everything();
+        Recording r = read(file, f -> C3dFile.read(f, reading).toRecording());
         sources.add(source(role, file));
         for (Finding f : r.findings()) {
             findings.add(new Finding(

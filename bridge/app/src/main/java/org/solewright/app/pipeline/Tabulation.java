@@ -12,6 +12,7 @@ import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
+import org.solewright.formats.c3d.C3dReading;
 import org.solewright.formats.io.FormatException;
 
 /** A C3D file's content as a delimited table (RFC 4180), written line by line. */
@@ -47,11 +48,13 @@ public final class Tabulation {
     }
 
     private final C3dFile file;
+    private final FrameWindow window;
     private final What what;
     private final boolean hasUnitsRow;
 
-    private Tabulation(C3dFile file, What what, boolean hasUnitsRow) {
+    private Tabulation(C3dFile file, FrameWindow window, What what, boolean hasUnitsRow) {
         this.file = file;
+        this.window = window;
         this.what = what;
         this.hasUnitsRow = hasUnitsRow;
     }
@@ -62,12 +65,26 @@ public final class Tabulation {
      * @param path a C3D file
      * @param what which table
      * @param hasUnitsRow whether a second header row gives units
+     * @param from first frame, as FrameWindow names it; empty: from the start
+     * @param to last frame; empty: to the end
+     * @param isFlagIgnored whether samples that are flagged missing are taken for seen
      * @return the table, to be written
      * @throws UseCaseException where it cannot be read
      * @throws FormatException where it is no C3D file
      */
-    public static Tabulation of(Path path, What what, boolean hasUnitsRow) throws UseCaseException, FormatException {
-        return new Tabulation(InputFiles.read(path, C3dFile::read), what, hasUnitsRow);
+    public static Tabulation of(
+            Path path,
+            What what,
+            boolean hasUnitsRow,
+            Optional<String> from,
+            Optional<String> to,
+            boolean isFlagIgnored)
+            throws UseCaseException, FormatException {
+        C3dReading reading = isFlagIgnored ? C3dReading.everything().ignoringFlags() : C3dReading.everything();
+        C3dFile file = InputFiles.read(path, f -> C3dFile.read(f, reading));
+        boolean isWhole = from.isEmpty() && to.isEmpty();
+        FrameWindow window = isWhole ? FrameWindow.whole(file) : FrameWindow.of(path, file, from, to);
+        return new Tabulation(file, window, what, hasUnitsRow);
     }
 
     /**
@@ -127,7 +144,7 @@ public final class Tabulation {
             }
             end(out);
         }
-        for (int frame = 0; frame < file.frames(); frame++) {
+        for (int frame = window.first(); frame <= window.last(); frame++) {
             out.write(Integer.toString(file.firstFrame() + frame));
             cell(out, (file.firstFrame() + frame - 1) / file.rate());
             for (int k = 0; k < n; k++) {
@@ -145,6 +162,11 @@ public final class Tabulation {
         return (file.firstFrame() - 1) / file.rate();
     }
 
+    /** First analog sample of a frame. */
+    private int sample(int frame) {
+        return file.frames() == 0 ? 0 : frame * (file.analog().samples() / file.frames());
+    }
+
     private void analog(Writer out) throws IOException {
         out.write("sample,time_s");
         for (String label : file.analogLabels()) {
@@ -158,7 +180,7 @@ public final class Tabulation {
             }
             end(out);
         }
-        for (int i = 0; i < file.analog().samples(); i++) {
+        for (int i = sample(window.first()); i < sample(window.last() + 1); i++) {
             out.write(Integer.toString(i + 1));
             cell(out, start() + i / file.analog().rate());
             for (int k = 0; k < file.analog().channels(); k++) {
@@ -177,7 +199,7 @@ public final class Tabulation {
             end(out);
         }
         for (PlatformLoads p : recording.platforms()) {
-            for (int i = 0; i < p.samples(); i++) {
+            for (int i = sample(window.first()); i < Math.min(p.samples(), sample(window.last() + 1)); i++) {
                 Vec3 f = p.force(i);
                 boolean isLoaded = p.vertical(i) >= LOADED;
                 Vec3 cop = isLoaded ? p.centreOfPressure(i) : new Vec3(Double.NaN, Double.NaN, Double.NaN);
@@ -203,7 +225,13 @@ public final class Tabulation {
             out.write("s,,,");
             end(out);
         }
+        boolean isWhole = window.equals(FrameWindow.whole(file));
         for (RecordedEvent e : file.events()) {
+            if (!isWhole
+                    && !(e.time() >= FrameWindow.time(file, window.first())
+                            && e.time() <= FrameWindow.time(file, window.last()))) {
+                continue;
+            }
             out.write(Double.toString(e.time()));
             out.write("," + quoted(e.context()) + "," + quoted(e.label()) + ","
                     + e.source().word());

@@ -73,7 +73,9 @@ class RealRecordingTest {
                 OptionalDouble.empty(),
                 false,
                 OptionalDouble.empty(),
-                GaitOptions.DEFAULT_MARKER_CUTOFF);
+                GaitOptions.DEFAULT_MARKER_CUTOFF,
+                false,
+                Optional.empty());
     }
 
     @BeforeAll
@@ -278,7 +280,9 @@ class RealRecordingTest {
                         o.floor(),
                         false,
                         o.markerRadius(),
-                        o.markerCutoff()),
+                        o.markerCutoff(),
+                        false,
+                        Optional.empty()),
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 "test"));
         for (int row = 0; row < 3; row++) {
