@@ -67,19 +67,42 @@ public record CostIndex(
      * @throws LimitException where the limb cannot take the step
      */
     public Rates at(StepFactor factor, double speed, double stepLength) throws LimitException {
-        StepFactor.Value k = factor.at(stepLength);
-        double l = factor.limbLength();
+        return rates(factor.at(stepLength), factor.limbLength(), factor.activations(), speed, stepLength);
+    }
+
+    /**
+     * Rates at a step length where the work of the step is known.
+     *
+     * @param factor work over m v^2/2 and its slope
+     * @param limbLength m, above 0
+     * @param activations pivots that are activated in a step
+     * @param speed m/s, above 0
+     * @param stepLength m, above 0
+     * @return the parts
+     */
+    Rates rates(StepFactor.Value factor, double limbLength, int activations, double speed, double stepLength) {
         double frequency = speed / stepLength;
-        double work = workCost * k.factor() * speed * speed / 2 * frequency;
-        double workSlope = workCost * speed * speed * speed / 2 * (k.slope() - k.factor() / stepLength) / stepLength;
-        double phi2 = frequency * frequency * l / gravity;
+        double work = workCost * factor.factor() * speed * speed / 2 * frequency;
+        double workSlope =
+                workCost * speed * speed * speed / 2 * (factor.slope() - factor.factor() / stepLength) / stepLength;
+        double phi2 = frequency * frequency * limbLength / gravity;
         double natural = naturalFrequency * naturalFrequency;
         double over = naturalFrequency > 0 ? Math.max(phi2 - natural, 0) : phi2;
-        double swingUnit = swingCost * gravity * Math.sqrt(gravity * l) / l;
+        double swingUnit = swingCost * gravity * Math.sqrt(gravity * limbLength) / limbLength;
         double swing = swingUnit * stepLength * phi2 * over;
         double swingSlope = over > 0 ? swingUnit * (phi2 * over - 2 * phi2 * over - 2 * phi2 * phi2) : 0;
-        double activation = activationCost * gravity * l * factor.activations() * frequency;
+        double activation = activationCost * gravity * limbLength * activations * frequency;
         return new Rates(work, swing, activation, workSlope + swingSlope - activation / stepLength);
+    }
+
+    /**
+     * The default coefficients.
+     *
+     * @param gravity m/s2, above 0
+     * @return the index with a swing that grows with the fourth power of the frequency
+     */
+    public static CostIndex standard(double gravity) {
+        return new CostIndex(DEFAULT_WORK_COST, DEFAULT_SWING_COST, DEFAULT_ACTIVATION_COST, 0, gravity);
     }
 
     /**

@@ -157,4 +157,50 @@ public final class EqualCost {
                 * (limbLength - stepLength)
                 / (limbLength * limbLength * (segments + 1) / segments - stepLength * stepLength);
     }
+
+    /**
+     * The limb on which a foot costs a given factor: the longer the foot that suits the step, the shorter may the limb be.
+     *
+     * @param form how the work is counted
+     * @param segments N, not negative
+     * @param stepLength D, m, above 0
+     * @param footLength f, m, 0 to below D; 0 without segments
+     * @param seriesShare share of the foot length that is taken out of the limb, 0 to 1
+     * @param factor k, work over m v^2/2, above 0
+     * @return the step of the limb found
+     * @throws LimitException NO_SOLUTION where no limb has that factor, else as {@link VaultingStep#given}
+     */
+    public static VaultingStep limb(
+            WorkForm form, int segments, double stepLength, double footLength, double seriesShare, double factor)
+            throws LimitException {
+        double inner = segments > 0 ? footLength / segments : 0;
+        double last = stepLength - footLength;
+        double squares = segments * inner * inner + last * last;
+        double radius =
+                switch (form) {
+                    case NO_PUSH_SMALL_ANGLE -> Math.sqrt(squares / factor);
+                    case PUSH_OFF_SMALL_ANGLE -> Math.sqrt(squares / (4 * factor));
+                    case SIMULTANEOUS -> Math.sqrt(squares / (2 * factor));
+                    case PUSH_OFF, NO_PUSH -> radius(form, segments, stepLength, footLength, squares, factor);
+                };
+        return VaultingStep.given(segments, stepLength, radius + seriesShare * footLength, footLength, seriesShare);
+    }
+
+    private static double radius(
+            WorkForm form, int segments, double stepLength, double footLength, double squares, double factor)
+            throws LimitException {
+        double widest = Math.max(segments > 0 ? footLength / segments : 0, stepLength - footLength);
+        double least = widest / TransitionWork.reach(form) * (1 + 1e-12);
+        // At these radii the factor is no more than the wanted one: q(1 - q/4) <= q; every transition its equal share.
+        double part = factor / (segments + 1);
+        double bound =
+                form == WorkForm.NO_PUSH ? Math.sqrt(squares / factor) : widest / Math.sqrt(4 * part / (1 + part));
+        // Wider by more than the rounding, for the bound itself is the root where all transitions are equal.
+        double most = bound * (1 + 1e-9);
+        if (!(most > least) || VaultingStep.unchecked(form, segments, stepLength, footLength, least) < factor) {
+            throw none(factor, VaultingStep.text("no limb makes a step of %s m cost that much", stepLength));
+        }
+        return Root.inBracket(
+                l -> VaultingStep.unchecked(form, segments, stepLength, footLength, l) - factor, least, most);
+    }
 }

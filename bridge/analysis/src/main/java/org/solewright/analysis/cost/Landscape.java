@@ -4,7 +4,9 @@ import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.stream.IntStream;
 import org.solewright.analysis.dynamics.Limit;
 import org.solewright.analysis.dynamics.LimitException;
 import org.solewright.domain.cost.FootRule;
@@ -15,54 +17,88 @@ import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Found;
 
 /**
- * What a limb's feet of 0 to 6 segments cost over step length: given foot, equal-vault foot and optimum foot, in every
- * form of the work.
+ * What a limb's feet cost over step length and speed: given foot, equal-vault foot and optimum foot, in every form of the
+ * work, with the cost index.
  */
 public final class Landscape {
 
+    private static final List<WorkForm> FORMS = List.of(WorkForm.values());
+
+    private final Limb limb;
+    private final CostIndex index;
     private final double leg;
     private final double foot;
     private final double seriesShare;
-    private final double mass;
-    private final double gravity;
-    private final double speed;
     private final Map<Limit, Integer> refused = new EnumMap<>(Limit.class);
 
-    private Landscape(double leg, double foot, double seriesShare, double mass, double gravity, double speed) {
-        this.leg = leg;
-        this.foot = foot;
-        this.seriesShare = seriesShare;
-        this.mass = mass;
-        this.gravity = gravity;
-        this.speed = speed;
+    private Landscape(Limb limb, CostIndex index) {
+        this.limb = limb;
+        this.index = index;
+        this.leg = limb.leg();
+        this.foot = limb.foot();
+        this.seriesShare = limb.seriesShare();
     }
 
     /**
-     * The landscape of a limb.
+     * The limb and the body on it.
      *
      * @param leg total limb length, m, above 0
      * @param foot given foot length along the ground, m, not negative
      * @param seriesShare share of the foot length that is taken out of the limb, 0 to 1
      * @param mass kg, above 0
-     * @param gravity m/s2, above 0
-     * @param speed hip speed before each transition, m/s, above 0
-     * @param steps step lengths, m, above 0, unmodified
-     * @return rows by segments, rule, step and form; a finding says how many have no value and why
      */
-    public static Found<List<LandscapeRow>> of(
-            double leg, double foot, double seriesShare, double mass, double gravity, double speed, double[] steps) {
-        Landscape landscape = new Landscape(leg, foot, seriesShare, mass, gravity, speed);
-        List<LandscapeRow> rows = new ArrayList<>();
-        for (int segments = 0; segments <= Posture.MOST_SEGMENTS; segments++) {
-            for (FootRule rule : FootRule.values()) {
-                Map<WorkForm, OptionalDouble> crossovers = new EnumMap<>(WorkForm.class);
-                for (WorkForm form : WorkForm.values()) {
-                    crossovers.put(form, landscape.crossover(segments, rule, form));
-                }
-                for (double step : steps) {
-                    for (WorkForm form : WorkForm.values()) {
-                        rows.add(landscape.row(
-                                segments, rule, step, form, crossovers.getOrDefault(form, OptionalDouble.empty())));
+    public record Limb(double leg, double foot, double seriesShare, double mass) {}
+
+    /**
+     * What is varied.
+     *
+     * @param segments numbers of foot segments, not negative
+     * @param rules how the foot length is chosen
+     * @param speeds hip speeds before each transition, m/s, above 0
+     * @param steps step lengths, m, above 0
+     */
+    public record Axes(List<Integer> segments, List<FootRule> rules, List<Double> speeds, List<Double> steps) {
+
+        /** Feet of 0 to 6 segments by every rule. */
+        public static final List<Integer> ALL_SEGMENTS =
+                IntStream.rangeClosed(0, Posture.MOST_SEGMENTS).boxed().toList();
+
+        /** Copies the lists. */
+        public Axes {
+            segments = List.copyOf(segments);
+            rules = List.copyOf(rules);
+            speeds = List.copyOf(speeds);
+            steps = List.copyOf(steps);
+        }
+
+        /**
+         * Number of rows of the landscape.
+         *
+         * @return product of the sizes and of the forms of the work
+         */
+        public long rows() {
+            long curves = (long) segments.size() * rules.size() * WorkForm.values().length;
+            return Math.multiplyExact(Math.multiplyExact(curves, (long) speeds.size()), (long) steps.size());
+        }
+    }
+
+    /**
+     * The landscape of a limb.
+     *
+     * @param limb the limb
+     * @param axes what is varied
+     * @param index prices the rows; with the gravity of the costs of transport
+     * @return rows by segments, rule, speed, step and form; a finding says how many have no value and why
+     */
+    public static Found<List<LandscapeRow>> of(Limb limb, Axes axes, CostIndex index) {
+        Landscape landscape = new Landscape(limb, index);
+        List<LandscapeRow> rows = new ArrayList<>(Math.toIntExact(axes.rows()));
+        for (int segments : axes.segments()) {
+            for (FootRule rule : axes.rules()) {
+                Map<WorkForm, OptionalDouble> crossovers = landscape.crossovers(segments, rule);
+                for (double speed : axes.speeds()) {
+                    for (double step : axes.steps()) {
+                        landscape.point(segments, rule, speed, step, crossovers, rows);
                     }
                 }
             }
@@ -73,29 +109,82 @@ public final class Landscape {
         return new Found<>(rows, findings);
     }
 
-    private LandscapeRow row(int segments, FootRule rule, double stepLength, WorkForm form, OptionalDouble crossover) {
-        OptionalDouble length = OptionalDouble.empty();
-        OptionalDouble work = OptionalDouble.empty();
-        OptionalDouble cost = OptionalDouble.empty();
-        try {
-            VaultingStep step =
-                    switch (rule) {
-                        case GIVEN ->
-                            VaultingStep.given(segments, stepLength, leg, segments == 0 ? 0 : foot, seriesShare);
-                        case EQUAL -> VaultingStep.equalVaults(segments, stepLength, leg, seriesShare);
-                        case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, leg, seriesShare);
-                    };
-            length = OptionalDouble.of(step.footLength());
-            double joules = step.factor(form) * mass * speed * speed / 2;
-            work = OptionalDouble.of(joules);
-            cost = OptionalDouble.of(joules / (mass * gravity * stepLength));
-        } catch (LimitException e) {
-            refused.merge(e.limit(), 1, Integer::sum);
+    private Map<WorkForm, OptionalDouble> crossovers(int segments, FootRule rule) {
+        Map<WorkForm, OptionalDouble> crossovers = new EnumMap<>(WorkForm.class);
+        for (WorkForm form : FORMS) {
+            crossovers.put(form, crossover(segments, rule, form));
         }
-        if (length.isEmpty() && rule == FootRule.GIVEN) {
-            length = OptionalDouble.of(segments == 0 ? 0 : foot);
+        return crossovers;
+    }
+
+    /** Rows of all forms; but for the optimum they share one foot. */
+    private void point(
+            int segments,
+            FootRule rule,
+            double speed,
+            double stepLength,
+            Map<WorkForm, OptionalDouble> crossovers,
+            List<LandscapeRow> rows) {
+        OptionalDouble ofRule = rule == FootRule.GIVEN ? OptionalDouble.of(footOf(segments)) : OptionalDouble.empty();
+        Optional<VaultingStep> shared = Optional.empty();
+        if (rule != FootRule.OPTIMUM) {
+            try {
+                shared = Optional.of(step(segments, rule, stepLength, WorkForm.PUSH_OFF));
+                ofRule = OptionalDouble.of(shared.get().footLength());
+            } catch (LimitException e) {
+                refused.merge(e.limit(), FORMS.size(), Integer::sum);
+            }
         }
-        return new LandscapeRow(segments, rule, leg, length, stepLength, speed, form, work, cost, crossover);
+        for (WorkForm form : FORMS) {
+            OptionalDouble length = ofRule;
+            OptionalDouble work = OptionalDouble.empty();
+            OptionalDouble cost = OptionalDouble.empty();
+            Optional<LandscapeRow.Index> priced = Optional.empty();
+            try {
+                if (shared.isPresent() || rule == FootRule.OPTIMUM) {
+                    VaultingStep step = shared.isPresent() ? shared.get() : step(segments, rule, stepLength, form);
+                    length = OptionalDouble.of(step.footLength());
+                    double factor = step.factor(form);
+                    double joules = factor * limb.mass() * speed * speed / 2;
+                    work = OptionalDouble.of(joules);
+                    cost = OptionalDouble.of(joules / (limb.mass() * index.gravity() * stepLength));
+                    priced = Optional.of(priced(step, factor, speed));
+                }
+            } catch (LimitException e) {
+                refused.merge(e.limit(), 1, Integer::sum);
+            }
+            rows.add(new LandscapeRow(
+                    segments,
+                    rule,
+                    leg,
+                    length,
+                    stepLength,
+                    speed,
+                    form,
+                    work,
+                    cost,
+                    priced,
+                    crossovers.getOrDefault(form, OptionalDouble.empty())));
+        }
+    }
+
+    private double footOf(int segments) {
+        return segments == 0 ? 0 : foot;
+    }
+
+    private VaultingStep step(int segments, FootRule rule, double stepLength, WorkForm form) throws LimitException {
+        return switch (rule) {
+            case GIVEN -> VaultingStep.given(segments, stepLength, leg, footOf(segments), seriesShare);
+            case EQUAL -> VaultingStep.equalVaults(segments, stepLength, leg, seriesShare);
+            case OPTIMUM -> OptimumFoot.of(form, segments, stepLength, leg, seriesShare);
+        };
+    }
+
+    private LandscapeRow.Index priced(VaultingStep step, double factor, double speed) {
+        CostIndex.Rates rates =
+                index.rates(new StepFactor.Value(factor, 0), leg, step.segments() + 1, speed, step.stepLength());
+        double unit = index.gravity() * speed;
+        return new LandscapeRow.Index(rates.work() / unit, rates.swing() / unit, rates.activation() / unit);
     }
 
     private OptionalDouble crossover(int segments, FootRule rule, WorkForm form) {

@@ -1,6 +1,5 @@
 package org.solewright.app.pipeline;
 
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumSet;
@@ -175,20 +174,22 @@ public final class DemoUseCase {
 
     private void postures() throws UseCaseException, FormatException {
         DemoStudy.Walk walk = DemoStudy.WALKS.get(0);
-        PostureLandscape.Table table = PostureLandscape.of(new PostureLandscape.Request(
+        PostureTables tables = PostureLandscape.of(new PostureLandscape.Request(
                 Optional.of(folder.resolve("foot-model-right.xml")),
                 OptionalDouble.empty(),
                 OptionalDouble.empty(),
                 OptionalDouble.of(0),
                 OptionalDouble.empty(),
-                walk.speed(),
-                List.of(walk.stepLength()),
+                List.of(Double.toString(walk.speed())),
+                List.of(),
+                List.of(),
+                List.of(Double.toString(walk.stepLength())),
                 OptionalDouble.empty(),
                 OptionalDouble.empty(),
                 OptionalDouble.empty(),
                 GaitSettings.STANDARD_GRAVITY));
         Path file = folder.resolve("landscape.csv");
-        ResultText.write(file, table.csv().getBytes(StandardCharsets.UTF_8));
+        ResultText.write(file, tables.landscape());
         lines.add("5. postures: wrote " + file + ", feet of 0 to 6 segments at " + walk.stepLength() + " m and "
                 + walk.speed() + " m/s");
     }

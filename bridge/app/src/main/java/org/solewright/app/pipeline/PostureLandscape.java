@@ -1,14 +1,16 @@
 package org.solewright.app.pipeline;
 
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.solewright.analysis.cost.CostIndex;
 import org.solewright.analysis.cost.Landscape;
+import org.solewright.domain.cost.FootRule;
 import org.solewright.domain.cost.LandscapeRow;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Found;
@@ -17,13 +19,13 @@ import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Subject;
 import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
-import org.solewright.formats.table.LandscapeTable;
 
-/** The posture landscape of one limb as a table. */
+/** The posture landscape of one limb. */
 public final class PostureLandscape {
 
     private static final double MOST = 1e6;
-    private static final int MOST_STEPS = 10_000;
+    private static final long MOST_ROWS = 2_000_000;
+    private static final int MOST_SEGMENTS = 100;
     /** Default range of step lengths over limb length: from a shuffle to beyond the crossovers. */
     private static final double FIRST_STEP = 0.3;
 
@@ -33,14 +35,16 @@ public final class PostureLandscape {
     private PostureLandscape() {}
 
     /**
-     * What the user gives. Empty values are not given.
+     * What the user gives. Empty values are not given. A word of a list is a number or a range FROM:TO:BY.
      *
      * @param model foot model that gives limb, foot and mass
      * @param leg total limb length, m
      * @param foot foot length along the ground, m
      * @param seriesShare share of the foot length that is taken out of the limb; default 1
      * @param mass kg
-     * @param speed hip speed before each transition, m/s
+     * @param speeds hip speeds before each transition, m/s
+     * @param segments numbers of foot segments; none for 0 to 6
+     * @param rules words of the foot rules; none for all
      * @param steps step lengths, m; none for a range
      * @param from first step length of the range, m
      * @param to last step length of the range, m
@@ -53,53 +57,43 @@ public final class PostureLandscape {
             OptionalDouble foot,
             OptionalDouble seriesShare,
             OptionalDouble mass,
-            double speed,
-            List<Double> steps,
+            List<String> speeds,
+            List<String> segments,
+            List<String> rules,
+            List<String> steps,
             OptionalDouble from,
             OptionalDouble to,
             OptionalDouble by,
             double gravity) {
 
-        /** Copies the list. */
+        /** Copies the lists. */
         public Request {
+            speeds = List.copyOf(speeds);
+            segments = List.copyOf(segments);
+            rules = List.copyOf(rules);
             steps = List.copyOf(steps);
         }
     }
 
-    /**
-     * The table and what has to be said about it.
-     *
-     * @param csv UTF-8 text
-     * @param findings in the order they were made
-     */
-    public record Table(String csv, List<Finding> findings) {
-
-        /** Copies the list. */
-        public Table {
-            findings = List.copyOf(findings);
-        }
-    }
-
-    private record Limb(double leg, double foot, double mass) {}
+    private record Given(Landscape.Limb limb, Optional<FootModel> model) {}
 
     /**
-     * Makes the table.
+     * Makes the landscape.
      *
      * @param request what the user gives
-     * @return the table
+     * @return landscape, with the tables that are made from it
      * @throws UseCaseException where the options contradict one another or a number is out of range
      * @throws FormatException where the model's file is not a foot model
      */
-    public static Table of(Request request) throws UseCaseException, FormatException {
+    public static PostureTables of(Request request) throws UseCaseException, FormatException {
         List<Finding> findings = new ArrayList<>();
-        Limb limb = limb(request, findings);
+        Given given = given(request, findings);
+        Landscape.Limb limb = given.limb();
         check("--leg", limb.leg(), "m");
         check("--mass", limb.mass(), "kg");
-        check("--speed", request.speed(), "m/s");
         check("--gravity", request.gravity(), "m/s2");
-        double share = request.seriesShare().orElse(1);
-        if (!(share >= 0 && share <= 1)) {
-            throw usage("--series-share", share + ", expected 0 to 1");
+        if (!(limb.seriesShare() >= 0 && limb.seriesShare() <= 1)) {
+            throw usage("--series-share", limb.seriesShare() + ", expected 0 to 1");
         }
         if (!(limb.foot() >= 0 && limb.foot() <= MOST)) {
             throw usage("--foot", limb.foot() + " m, expected 0 m or more");
@@ -110,30 +104,29 @@ public final class PostureLandscape {
                     "",
                     "the foot is taken out of the limb length (share 1); --series-share 0 for a foot that lies flat"));
         }
-        findings.add(Finding.note(
-                "postures.index-later",
-                "",
-                "the index_ columns are empty: this version does not compute the cost index"));
-        Found<List<LandscapeRow>> found = Landscape.of(
-                limb.leg(),
-                limb.foot(),
-                share,
-                limb.mass(),
-                request.gravity(),
-                request.speed(),
+        Landscape.Axes axes = new Landscape.Axes(
+                segments(request),
+                rules(request),
+                checked("--speed", request.speeds(), "m/s"),
                 steps(request, limb.leg()));
+        if (axes.rows() > MOST_ROWS) {
+            throw usage("--by", axes.rows() + " rows, expected at most " + MOST_ROWS + ": fewer steps, speeds or feet");
+        }
+        CostIndex index = CostIndex.standard(request.gravity());
+        Found<List<LandscapeRow>> found = Landscape.of(limb, axes, index);
         findings.addAll(found.findings());
-        String csv = new String(LandscapeTable.bytes(found.value()), StandardCharsets.UTF_8);
-        return new Table(csv, findings);
+        return new PostureTables(limb, axes, index, given.model(), found.value(), findings);
     }
 
-    private static Limb limb(Request request, List<Finding> findings) throws UseCaseException, FormatException {
+    private static Given given(Request request, List<Finding> findings) throws UseCaseException, FormatException {
+        double share = request.seriesShare().orElse(1);
         if (request.model().isPresent()) {
             if (request.leg().isPresent() || request.foot().isPresent()) {
                 throw usage("--model", "given beside --leg or --foot, expected one or the other");
             }
             Path file = request.model().get();
-            Subject subject = read(file).subject();
+            FootModel model = read(file);
+            Subject subject = model.subject();
             Optional<Quantity> foot = subject.effectiveFootLength();
             if (foot.isEmpty()) {
                 foot = subject.footLength();
@@ -149,13 +142,18 @@ public final class PostureLandscape {
                         "the model has no foot length",
                         "give --leg and --foot instead");
             }
-            return new Limb(
-                    subject.limbLength().value(),
-                    foot.get().value(),
-                    request.mass().orElse(subject.mass().value()));
+            double mass = request.mass().orElse(subject.mass().value());
+            return new Given(
+                    new Landscape.Limb(subject.limbLength().value(), foot.get().value(), share, mass),
+                    Optional.of(model));
         }
-        return new Limb(
-                needed("--leg", request.leg()), needed("--foot", request.foot()), needed("--mass", request.mass()));
+        return new Given(
+                new Landscape.Limb(
+                        needed("--leg", request.leg()),
+                        needed("--foot", request.foot()),
+                        share,
+                        needed("--mass", request.mass())),
+                Optional.empty());
     }
 
     private static FootModel read(Path file) throws UseCaseException, FormatException {
@@ -178,7 +176,43 @@ public final class PostureLandscape {
         return value.getAsDouble();
     }
 
-    private static double[] steps(Request request, double leg) throws UseCaseException {
+    private static List<Double> checked(String option, List<String> words, String unit) throws UseCaseException {
+        List<Double> values = ValueList.of(option, words);
+        for (double value : values) {
+            check(option, value, unit);
+        }
+        return values;
+    }
+
+    private static List<Integer> segments(Request request) throws UseCaseException {
+        if (request.segments().isEmpty()) {
+            return Landscape.Axes.ALL_SEGMENTS;
+        }
+        List<Integer> segments = new ArrayList<>();
+        for (double value : ValueList.of("--segments", request.segments())) {
+            if (!(value >= 0 && value <= MOST_SEGMENTS) || value != Math.rint(value)) {
+                throw usage("--segments", value + ", expected a whole number from 0 to " + MOST_SEGMENTS);
+            }
+            segments.add((int) value);
+        }
+        return segments.stream().distinct().sorted().toList();
+    }
+
+    private static List<FootRule> rules(Request request) throws UseCaseException {
+        List<FootRule> rules = new ArrayList<>();
+        for (String word : request.rules()) {
+            rules.add(Arrays.stream(FootRule.values())
+                    .filter(r -> r.word().equals(word))
+                    .findFirst()
+                    .orElseThrow(() -> usage(
+                            "--foot-rule", "'" + QuestionInputs.shown(word) + "', expected given, equal or optimum")));
+        }
+        return rules.isEmpty()
+                ? List.of(FootRule.values())
+                : rules.stream().distinct().sorted().toList();
+    }
+
+    private static List<Double> steps(Request request, double leg) throws UseCaseException {
         boolean range = request.from().isPresent()
                 || request.to().isPresent()
                 || request.by().isPresent();
@@ -186,10 +220,7 @@ public final class PostureLandscape {
             if (range) {
                 throw usage("--step", "given beside --from, --to or --by, expected one or the other");
             }
-            for (double step : request.steps()) {
-                check("--step", step, "m");
-            }
-            return request.steps().stream().mapToDouble(Double::doubleValue).toArray();
+            return checked("--step", request.steps(), "m");
         }
         double from = request.from().orElse(FIRST_STEP * leg);
         double to = request.to().orElse(LAST_STEP * leg);
@@ -197,18 +228,7 @@ public final class PostureLandscape {
         check("--from", from, "m");
         check("--to", to, "m");
         check("--by", by, "m");
-        double count = Math.floor((to - from) / by + 1e-9) + 1;
-        if (!(count >= 1 && count <= MOST_STEPS)) {
-            throw usage(
-                    "--by",
-                    "steps from " + from + " m to " + to + " m by " + by + " m, expected 1 to " + MOST_STEPS
-                            + " step lengths");
-        }
-        double[] steps = new double[(int) count];
-        for (int i = 0; i < steps.length; i++) {
-            steps[i] = from + i * by;
-        }
-        return steps;
+        return ValueList.range("--by", from, to, by);
     }
 
     private static void check(String option, double value, String unit) throws UseCaseException {

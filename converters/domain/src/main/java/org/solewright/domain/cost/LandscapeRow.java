@@ -1,6 +1,7 @@
 package org.solewright.domain.cost;
 
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
@@ -15,6 +16,7 @@ import java.util.OptionalDouble;
  * @param workForm how the work is counted
  * @param workPerStep J; empty where the limb cannot take this step
  * @param costOfTransport work per step over m g D; empty likewise
+ * @param index the cost index, empty likewise
  * @param crossover step length at which this foot costs what the compass of the same total limb length does, m; empty
  *     where there is none within reach
  */
@@ -28,7 +30,26 @@ public record LandscapeRow(
         WorkForm workForm,
         OptionalDouble workPerStep,
         OptionalDouble costOfTransport,
+        Optional<Index> index,
         OptionalDouble crossover) {
+
+    /**
+     * Parts of the cost index over g v: dimensionless, an index and not metabolic energy.
+     *
+     * @param work of the transitions
+     * @param swing of the limb's swing
+     * @param activation of the pivots
+     */
+    public record Index(double work, double swing, double activation) {
+        /**
+         * The whole index.
+         *
+         * @return sum of the parts
+         */
+        public double total() {
+            return work + swing + activation;
+        }
+    }
 
     /** The columns of the landscape, in their order. */
     public static final List<String> COLUMNS = List.of(
@@ -63,11 +84,15 @@ public record LandscapeRow(
                 workForm.word(),
                 text(workPerStep),
                 text(costOfTransport),
-                "",
-                "",
-                "",
-                "",
+                text(index.map(Index::work)),
+                text(index.map(Index::swing)),
+                text(index.map(Index::activation)),
+                text(index.map(Index::total)),
                 text(crossover));
+    }
+
+    private static String text(Optional<Double> value) {
+        return value.map(v -> Double.toString(v)).orElse("");
     }
 
     private static String text(OptionalDouble value) {

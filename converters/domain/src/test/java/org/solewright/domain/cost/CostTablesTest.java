@@ -143,7 +143,7 @@ class CostTablesTest {
     }
 
     @Test
-    void landscapeRowLeavesTheIndexForLater() {
+    void landscapeRowSumsItsIndex() {
         LandscapeRow row = new LandscapeRow(
                 2,
                 FootRule.OPTIMUM,
@@ -154,10 +154,13 @@ class CostTablesTest {
                 WorkForm.PUSH_OFF,
                 OptionalDouble.of(3),
                 OptionalDouble.of(0.01),
+                Optional.of(new LandscapeRow.Index(0.5, 0.25, 0.125)),
                 OptionalDouble.empty());
+        // exact: 1/2 + 1/4 + 1/8 = 7/8
         assertThat(row.cells())
                 .containsExactly(
-                        "2", "optimum", "0.9", "0.25", "0.6", "1.25", "pushOff", "3.0", "0.01", "", "", "", "", "");
+                        "2", "optimum", "0.9", "0.25", "0.6", "1.25", "pushOff", "3.0", "0.01", "0.5", "0.25", "0.125",
+                        "0.875", "");
         assertThat(String.join(",", LandscapeRow.COLUMNS))
                 .isEqualTo("segments,foot_rule,leg_m,foot_m,step_length_m,speed_m_s,work_form,work_per_step_J,"
                         + "cost_of_transport,index_work,index_swing,index_activation,index_total,"
