@@ -14,10 +14,14 @@ final class LandscapePlot {
 
     private static final double LEFT = 70;
     private static final double RIGHT = 640;
-    private static final double TOP = 64;
+    private static final double TOP = 104;
     private static final double BOTTOM = 460;
     private static final double LABEL_GAP = 15;
     private static final int TICKS = 6;
+    /** Height of the frame over the cheapest curve's greatest work. */
+    private static final double ROOM = 1.6;
+
+    private static final double NUMERAL_GAP = 20;
 
     /** Dark colours of different lightness that stay apart for the colour-blind [Okabe & Ito 2008]. */
     private static final String[] COLOURS = {"#000000", "#0072b2", "#d55e00", "#009e73", "#7a4a8c", "#8a6d00", "#444444"
@@ -33,13 +37,15 @@ final class LandscapePlot {
 
     private LandscapePlot(List<Curve> curves) {
         this.curves = curves;
-        this.firstX = 0;
+        double shortest = curves.stream().mapToDouble(c -> c.x(0)).min().orElse(0);
         this.lastX =
                 curves.stream().mapToDouble(c -> c.x(c.rows.size() - 1)).max().orElse(1);
-        // Curves that shoot up at the end of the reach would press the others flat.
+        double tick = tick(lastX - shortest);
+        this.firstX = Math.floor(shortest / tick + 1e-9) * tick;
+        // Curves that shoot up at the end of the reach would press the others flat: they leave the frame at its top.
         double most = curves.stream().mapToDouble(Curve::greatest).max().orElse(1);
         double least = curves.stream().mapToDouble(Curve::greatest).min().orElse(1);
-        this.greatest = Math.max(Double.MIN_NORMAL, Math.min(most, Math.max(3 * least, most / 3)));
+        this.greatest = Math.max(Double.MIN_NORMAL, Math.min(most, ROOM * least));
     }
 
     /** Points of one foot that have a work. */
@@ -133,10 +139,10 @@ final class LandscapePlot {
 
     private void axes() {
         double stepX = tick(lastX - firstX);
-        for (int i = 0; i * stepX <= lastX * (1 + 1e-9); i++) {
-            double x = px(i * stepX);
+        for (int i = 0; firstX + i * stepX <= lastX * (1 + 1e-9); i++) {
+            double x = px(firstX + i * stepX);
             rule(x, TOP, x, BOTTOM);
-            text(x, BOTTOM + 19, "middle", number(i * stepX), "");
+            text(x, BOTTOM + 19, "middle", number(firstX + i * stepX), "");
         }
         double stepY = tick(greatest);
         for (int i = 0; i * stepY <= greatest * (1 + 1e-9); i++) {
@@ -195,33 +201,79 @@ final class LandscapePlot {
         }
     }
 
-    /** Names at the ends of the curves, moved apart. */
+    /** A curve's end in the frame. */
+    private record End(int place, double x, double y) {}
+
+    /** Where a curve leaves the frame, or its last point. */
+    private End end(int place) {
+        Curve curve = curves.get(place);
+        for (int i = 0; i < curve.rows.size(); i++) {
+            if (curve.work(i) > greatest) {
+                double share = i == 0 ? 0 : (greatest - curve.work(i - 1)) / (curve.work(i) - curve.work(i - 1));
+                double x = i == 0 ? curve.x(0) : curve.x(i - 1) + share * (curve.x(i) - curve.x(i - 1));
+                return new End(place, px(x), TOP);
+            }
+        }
+        int last = curve.rows.size() - 1;
+        return new End(place, px(curve.x(last)), py(curve.work(last)));
+    }
+
+    /** Names at the ends of the curves: numerals above the frame where they leave it, else at its side. */
     private void labels() {
-        record Label(int place, double x, double y) {}
-        List<Label> labels = new ArrayList<>();
+        List<End> above = new ArrayList<>();
+        List<End> beside = new ArrayList<>();
         for (int i = 0; i < curves.size(); i++) {
-            Curve curve = curves.get(i);
-            int last = curve.rows.size() - 1;
-            labels.add(new Label(i, px(curve.x(last)), Math.max(TOP, py(curve.work(last)))));
+            boolean leaves = curves.get(i).greatest() > greatest;
+            (leaves ? above : beside).add(end(i));
         }
-        labels.sort(Comparator.comparingDouble(Label::y));
-        double[] y = new double[labels.size()];
-        for (int i = 0; i < y.length; i++) {
-            y[i] = Math.max(labels.get(i).y(), i == 0 ? TOP : y[i - 1] + LABEL_GAP);
-        }
-        for (int i = y.length - 1; i >= 0; i--) {
-            y[i] = Math.min(y[i], i == y.length - 1 ? BOTTOM : y[i + 1] - LABEL_GAP);
-        }
-        for (int i = 0; i < y.length; i++) {
-            int place = labels.get(i).place();
-            line("<path d=\"M" + number(labels.get(i).x()) + " "
-                    + number(labels.get(i).y()) + "L" + number(RIGHT + 8) + " " + number(y[i])
-                    + "h28\" fill=\"none\" stroke=\"" + colour(place) + "\"" + dash(place) + "/>");
-            text(RIGHT + 40, y[i] + 4, "start", curves.get(place).name(), " fill=\"" + colour(place) + "\"");
-        }
+        numerals(above);
+        names(beside);
         if (curves.stream().anyMatch(c -> c.rows.get(0).crossover().isPresent())) {
-            text(RIGHT, BOTTOM + 42, "end", "ring: costs what the point foot does", " fill=\"#333333\"");
+            text(LEFT + 10, TOP + 18, "start", "ring: costs what the point foot does", " fill=\"#333333\"");
         }
+    }
+
+    private void numerals(List<End> ends) {
+        ends.sort(Comparator.comparingDouble(End::x));
+        double[] x = apart(ends.stream().mapToDouble(End::x).toArray(), LEFT, RIGHT, NUMERAL_GAP);
+        for (int i = 0; i < x.length; i++) {
+            int place = ends.get(i).place();
+            line("<path d=\"M" + number(ends.get(i).x()) + " " + number(TOP) + "L" + number(x[i]) + " "
+                    + number(TOP - 16) + "\" fill=\"none\" stroke=\"" + colour(place) + "\"/>");
+            text(
+                    x[i],
+                    TOP - 21,
+                    "middle",
+                    Integer.toString(curves.get(place).segments()),
+                    " fill=\"" + colour(place) + "\"");
+        }
+        if (x.length > 0) {
+            text(x[0] - NUMERAL_GAP, TOP - 21, "end", "segments:", " fill=\"#333333\"");
+        }
+    }
+
+    private void names(List<End> ends) {
+        ends.sort(Comparator.comparingDouble(End::y));
+        double[] y = apart(ends.stream().mapToDouble(End::y).toArray(), TOP, BOTTOM, LABEL_GAP);
+        for (int i = 0; i < y.length; i++) {
+            int place = ends.get(i).place();
+            line("<path d=\"M" + number(ends.get(i).x()) + " "
+                    + number(ends.get(i).y()) + "L" + number(RIGHT + 8) + " " + number(y[i])
+                    + "h4\" fill=\"none\" stroke=\"" + colour(place) + "\"/>");
+            text(RIGHT + 16, y[i] + 4, "start", curves.get(place).name(), " fill=\"" + colour(place) + "\"");
+        }
+    }
+
+    /** Sorted places moved apart by a gap, within limits. */
+    private static double[] apart(double[] places, double low, double high, double gap) {
+        double[] out = places.clone();
+        for (int i = 0; i < out.length; i++) {
+            out[i] = Math.max(out[i], i == 0 ? low : out[i - 1] + gap);
+        }
+        for (int i = out.length - 1; i >= 0; i--) {
+            out[i] = Math.min(out[i], i == out.length - 1 ? high : out[i + 1] - gap);
+        }
+        return out;
     }
 
     private static String colour(int place) {
