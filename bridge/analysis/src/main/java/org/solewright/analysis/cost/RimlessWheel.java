@@ -63,8 +63,18 @@ public record RimlessWheel(double halfAngle, double slope, double inertiaRatio, 
      * @return share
      */
     public double rateRatio() {
+        return 1 - lost();
+    }
+
+    /** 1 less the rate ratio, with all its digits. */
+    private double lost() {
         double sine = Math.sin(halfAngle);
-        return 1 - 2 * inertiaRatio * sine * sine;
+        return 2 * inertiaRatio * sine * sine;
+    }
+
+    /** 1 - ratio^2 = 2 inertiaRatio sin^2(halfAngle) (2 - lost), of which the first factors cancel. */
+    private double squaredRateBefore(double onSlope) {
+        return 2 * gravity / spokeLength * Math.sin(onSlope) / (Math.sin(halfAngle) * (2 - lost()));
     }
 
     /**
@@ -73,9 +83,7 @@ public record RimlessWheel(double halfAngle, double slope, double inertiaRatio, 
      * @return rad/s
      */
     public double rateBefore() {
-        double ratio = rateRatio();
-        return Math.sqrt(
-                4 * inertiaRatio * gravity / spokeLength * Math.sin(halfAngle) * Math.sin(slope) / (1 - ratio * ratio));
+        return Math.sqrt(squaredRateBefore(slope));
     }
 
     /**
@@ -125,11 +133,11 @@ public record RimlessWheel(double halfAngle, double slope, double inertiaRatio, 
      * @return rad
      */
     public double leastSlope() {
-        double squared = eigenvalue();
+        double share = eigenvalue() / (2 * Math.sin(halfAngle) * (2 - lost()));
         return Root.inBracket(
                 s -> {
                     double half = Math.sin((halfAngle - s) / 2);
-                    return squared / (1 - squared) * Math.sin(halfAngle) * Math.sin(s) - half * half;
+                    return share * Math.sin(s) - inertiaRatio * half * half;
                 },
                 0,
                 halfAngle);

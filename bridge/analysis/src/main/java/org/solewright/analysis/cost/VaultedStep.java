@@ -75,7 +75,7 @@ final class VaultedStep {
     /** Squared start speed that comes back a step later. */
     double fixedSquare() {
         int n = chain.vaults();
-        return shift[n] / (1 - scale[n]);
+        return shift[n] == 0 ? 0 : shift[n] / (1 - scale[n]);
     }
 
     /** Squared speed that vault k has to spare at its top, by the start's spare over the least. */

@@ -119,11 +119,14 @@ public final class PlasticImpact {
         RealMatrix soft = j.multiply(back);
         double condition = new SingularValueDecomposition(soft).getConditionNumber();
         if (!(condition <= WORST_CONDITION)) {
-            throw redundant(String.format(
-                    Locale.ROOT,
-                    "condition %.3e of the constraints, expected at most %.0e",
-                    condition,
-                    WORST_CONDITION));
+            throw redundant(
+                    Double.isFinite(condition)
+                            ? String.format(
+                                    Locale.ROOT,
+                                    "condition %.3e of the constraints, expected at most %.0e",
+                                    condition,
+                                    WORST_CONDITION)
+                            : "a combination of the constraints moves nothing, expected rows that differ");
         }
         RealVector closing = j.operate(rates);
         RealVector impulses =

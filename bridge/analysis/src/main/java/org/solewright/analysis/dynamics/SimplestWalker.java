@@ -11,6 +11,8 @@ import org.solewright.analysis.numerics.Root;
 public final class SimplestWalker {
 
     private static final int RUNGS = 12;
+    private static final int FINE_RUNGS = 48;
+
     private static final double FIRST_SLOPE = 0.002;
     private static final double SLOPE_FACTOR = 1.15;
     private static final double STEEPEST = 0.6;
@@ -129,26 +131,22 @@ public final class SimplestWalker {
     public static WalkerGait passive(Gait gait, double slope, double rollingRatio, double hipStiffness, double push)
             throws LimitException {
         WalkerModel model = model(slope, rollingRatio, hipStiffness, push);
-        double time = leadingStepTime(gait, rollingRatio, hipStiffness);
-        double angle = startAngle(model, time);
-        WalkerSearch search = WalkerSearch.ofStep(model, angle, startRate(model, angle, time));
-        if (search.converges()) {
-            return search.gait();
+        return ofKind(gait, model, (kind, rungs) -> climb(kind, model, rungs));
+    }
+
+    /** From a small step of the kind up to the wanted one; with one rung, straight from the leading order. */
+    private static WalkerSearch climb(Gait gait, WalkerModel model, int rungs) throws LimitException {
+        double time = leadingStepTime(gait, model.rollingRatio(), model.hipStiffness());
+        WalkerModel part = model.gentler(1.0 / rungs);
+        double angle = startAngle(part, time);
+        WalkerSearch rung = WalkerSearch.ofStep(part, angle, startRate(part, angle, time));
+        boolean holds = rung.converges();
+        for (int k = 2; k <= rungs && holds; k++) {
+            part = model.gentler((double) k / rungs);
+            rung = WalkerSearch.ofStep(part, rung.halfAngle() * k / (k - 1), rung.rate() * k / (k - 1));
+            holds = rung.converges();
         }
-        // From a small step of the same kind up to the wanted one.
-        WalkerSearch rung = search;
-        for (int k = 1; k <= RUNGS; k++) {
-            double share = Math.pow((double) k / RUNGS, 2);
-            WalkerModel part = new WalkerModel(slope * share, rollingRatio, hipStiffness, push * Math.sqrt(share));
-            double start = startAngle(part, time);
-            rung = k == 1
-                    ? WalkerSearch.ofStep(part, start, startRate(part, start, time))
-                    : WalkerSearch.ofStep(part, rung.halfAngle() * k / (k - 1), rung.rate() * k / (k - 1));
-            if (!rung.converges()) {
-                throw rung.failure();
-            }
-        }
-        return rung.gait();
+        return rung;
     }
 
     /**
@@ -166,23 +164,64 @@ public final class SimplestWalker {
             Gait gait, double slope, double rollingRatio, double hipStiffness, double halfAngle) throws LimitException {
         WalkerModel model = model(slope, rollingRatio, hipStiffness, 0);
         requireAngle(halfAngle);
-        double time = leadingStepTime(gait, rollingRatio, hipStiffness);
-        WalkerSearch search = pushed(model, halfAngle, startRate(model, halfAngle, time));
-        if (search.converges()) {
-            return search.gait();
+        return ofKind(gait, model, (kind, rungs) -> climb(kind, model, halfAngle, rungs));
+    }
+
+    private static WalkerSearch climb(Gait gait, WalkerModel model, double halfAngle, int rungs) {
+        double time = leadingStepTime(gait, model.rollingRatio(), model.hipStiffness());
+        WalkerModel part = new WalkerModel(model.slope() / rungs, model.rollingRatio(), model.hipStiffness(), 0);
+        double angle = halfAngle / rungs;
+        WalkerSearch rung = pushed(part, angle, startRate(part, angle, time));
+        boolean holds = rung.converges();
+        for (int k = 2; k <= rungs && holds; k++) {
+            part = new WalkerModel(model.slope() * k / rungs, model.rollingRatio(), model.hipStiffness(), 0);
+            rung = WalkerSearch.ofPush(part, halfAngle * k / rungs, rung.rate() * k / (k - 1), rung.push());
+            holds = rung.converges();
         }
-        WalkerSearch rung = search;
-        for (int k = 1; k <= RUNGS; k++) {
-            double angle = halfAngle * k / RUNGS;
-            WalkerModel part = new WalkerModel(slope * k / RUNGS, rollingRatio, hipStiffness, 0);
-            rung = k == 1
-                    ? pushed(part, angle, startRate(part, angle, time))
-                    : WalkerSearch.ofPush(part, angle, rung.rate() * k / (k - 1), rung.push());
-            if (!rung.converges()) {
-                throw rung.failure();
+        return rung;
+    }
+
+    /** A search for a gait of a kind, in so many rungs from a small step. */
+    @FunctionalInterface
+    private interface Climb {
+        WalkerSearch to(Gait gait, int rungs) throws LimitException;
+    }
+
+    /** The gait of the wanted kind: straight, else by rungs; Newton's method may meet the other kind on the way. */
+    private static WalkerGait ofKind(Gait gait, WalkerModel model, Climb climb) throws LimitException {
+        WalkerSearch straight = straightOrByRungs(gait, climb);
+        if (!straight.converges()) {
+            throw straight.failure();
+        }
+        Gait other = gait == Gait.LONG ? Gait.SHORT : Gait.LONG;
+        double time = straight.stepTime();
+        double own = Math.abs(time - leadingStepTime(gait, model.rollingRatio(), model.hipStiffness()));
+        double others = Math.abs(time - leadingStepTime(other, model.rollingRatio(), model.hipStiffness()));
+        if (2 * own < others || !straight.meets(straightOrByRungs(other, climb))) {
+            return straight.gait();
+        }
+        for (int rungs : new int[] {RUNGS, FINE_RUNGS}) {
+            WalkerSearch climbed = climb.to(gait, rungs);
+            if (climbed.converges() && !straight.meets(climbed)) {
+                return climbed.gait();
             }
         }
-        return rung.gait();
+        if (own <= others) {
+            return straight.gait();
+        }
+        throw new LimitException(
+                Limit.NO_PERIODIC_GAIT,
+                String.format(
+                        Locale.ROOT,
+                        "only the other gait is found at slope %s rad, feet of %s limb lengths, hip stiffness %s",
+                        model.slope(),
+                        model.rollingRatio(),
+                        model.hipStiffness()));
+    }
+
+    private static WalkerSearch straightOrByRungs(Gait gait, Climb climb) throws LimitException {
+        WalkerSearch straight = climb.to(gait, 1);
+        return straight.converges() ? straight : climb.to(gait, RUNGS);
     }
 
     private static WalkerSearch pushed(WalkerModel model, double halfAngle, double rate) {

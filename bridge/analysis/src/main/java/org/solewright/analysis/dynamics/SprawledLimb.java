@@ -16,6 +16,8 @@ public final class SprawledLimb {
 
     private static final double TOLERANCE = 1e-13;
     private static final int QUATERNION = 4;
+    /** Rolled angle, rad, beyond which the integration is neither quick nor exact. */
+    private static final double MOST_ROLLING = 1e4;
 
     private final double sphereRadius;
     private final double speed;
@@ -84,10 +86,6 @@ public final class SprawledLimb {
         return planarRadius;
     }
 
-    private double retraction() {
-        return 2 * protraction / stanceTime;
-    }
-
     /**
      * Speed of the knee about the hip over the speed of the hip: below 1 the track runs forward throughout, at 1 it has a
      * cusp, above 1 it runs backwards at mid-stance.
@@ -95,7 +93,17 @@ public final class SprawledLimb {
      * @return ratio
      */
     public double rateRatio() {
-        return planarRadius * retraction() / speed;
+        return sweep() / advance();
+    }
+
+    /** Way of the hip over stance, m. */
+    private double advance() {
+        return speed * stanceTime;
+    }
+
+    /** Way of the knee about the hip over stance, m. */
+    private double sweep() {
+        return 2 * protraction * planarRadius;
     }
 
     /**
@@ -104,15 +112,14 @@ public final class SprawledLimb {
      * @return m
      */
     public double trackLength() {
-        double w = retraction();
-        double d = Math.abs(speed - planarRadius * w);
-        double product = 4 * speed * planarRadius * w;
+        double d = Math.abs(advance() - sweep());
+        double product = 4 * advance() * sweep();
         double half = protraction / 2;
         double sine = Math.sin(half / 2);
-        // At the cusp the speed is 2 V |sin(phi/2)|.
+        // At the cusp the speed is 2 V |sin(phi/2)|. Advance and sweep in place of the two speeds cannot overflow.
         return d == 0
-                ? 4 / w * Math.sqrt(product) * 2 * sine * sine
-                : 4 * d / w * EllipticIntegral.second(half, -product / (d * d));
+                ? 2 / protraction * Math.sqrt(product) * 2 * sine * sine
+                : 2 * d / protraction * EllipticIntegral.second(half, -product / d / d);
     }
 
     /**
@@ -125,7 +132,7 @@ public final class SprawledLimb {
     }
 
     private double angle(double time) {
-        return protraction - retraction() * time;
+        return protraction * (1 - 2 * time / stanceTime);
     }
 
     /**
@@ -155,10 +162,11 @@ public final class SprawledLimb {
      * @return 1/m; infinite or not a number at a cusp
      */
     public double curvature(double time) {
-        double w = retraction();
-        double cosine = Math.cos(angle(time));
-        double square = speed * speed - 2 * speed * planarRadius * w * cosine + planarRadius * planarRadius * w * w;
-        return planarRadius * w * w * (planarRadius * w - speed * cosine) / (square * Math.sqrt(square));
+        double half = Math.sin(angle(time) / 2);
+        double d = advance() - sweep();
+        double square = d * d + 4 * advance() * sweep() * half * half;
+        double turned = sweep() - advance() * Math.cos(angle(time));
+        return 2 * protraction * sweep() * turned / (square * Math.sqrt(square));
     }
 
     /**
@@ -166,12 +174,25 @@ public final class SprawledLimb {
      *
      * @param time from the start of the stance, s
      * @return {@code [9]} row-major
+     * @throws LimitException NO_SOLUTION where the track is more than ten thousand sphere radii long
      */
-    public double[] rotation(double time) {
+    public double[] rotation(double time) throws LimitException {
         double[] q = {1, 0, 0, 0};
-        if (time > 0) {
-            new DormandPrince853Integrator(1e-12, stanceTime, TOLERANCE, TOLERANCE)
-                    .integrate(new Rolling(), 0, q, time, q);
+        double share = time / stanceTime;
+        if (share > 0) {
+            double turns = trackLength() / sphereRadius;
+            if (!(turns <= MOST_ROLLING)) {
+                throw new LimitException(
+                        Limit.NO_SOLUTION,
+                        String.format(
+                                Locale.ROOT,
+                                "track of %s m on a sphere of %s m, expected up to %s times the radius: longer, the end"
+                                        + " orientation has no digits left",
+                                trackLength(),
+                                sphereRadius,
+                                MOST_ROLLING));
+            }
+            new DormandPrince853Integrator(1e-12, 1, TOLERANCE, TOLERANCE).integrate(new Rolling(), 0, q, share, q);
         }
         double norm = Math.sqrt(q[0] * q[0] + q[1] * q[1] + q[2] * q[2] + q[3] * q[3]);
         return matrix(q[0] / norm, q[1] / norm, q[2] / norm, q[3] / norm);
@@ -196,8 +217,9 @@ public final class SprawledLimb {
      *
      * @param time from the start of the stance, s
      * @return {@code [3]}, m
+     * @throws LimitException as {@link #rotation}
      */
-    public double[] contact(double time) {
+    public double[] contact(double time) throws LimitException {
         double[] r = rotation(time);
         return new double[] {-sphereRadius * r[6], -sphereRadius * r[7], -sphereRadius * r[8]};
     }
@@ -207,8 +229,9 @@ public final class SprawledLimb {
      *
      * @param samples 2 or more, equally spaced in time
      * @return {@code [samples][3]} row-major, m
+     * @throws LimitException as {@link #rotation}
      */
-    public double[] contactCurve(int samples) {
+    public double[] contactCurve(int samples) throws LimitException {
         double[] curve = new double[3 * samples];
         for (int i = 0; i < samples; i++) {
             System.arraycopy(contact(stanceTime * i / (samples - 1)), 0, curve, 3 * i, 3);
@@ -216,7 +239,7 @@ public final class SprawledLimb {
         return curve;
     }
 
-    /** Quaternion of the foot under the angular velocity z x v / r in world axes. */
+    /** Quaternion of the foot over the share of the stance, under the angular velocity z x v / r in world axes. */
     private final class Rolling implements FirstOrderDifferentialEquations {
         @Override
         public int getDimension() {
@@ -224,10 +247,10 @@ public final class SprawledLimb {
         }
 
         @Override
-        public void computeDerivatives(double t, double[] q, double[] out) {
-            double w = retraction();
-            double vx = speed - planarRadius * w * Math.cos(angle(t));
-            double vy = planarRadius * w * Math.sin(angle(t));
+        public void computeDerivatives(double share, double[] q, double[] out) {
+            double angle = protraction * (1 - 2 * share);
+            double vx = advance() - sweep() * Math.cos(angle);
+            double vy = sweep() * Math.sin(angle);
             double ox = -vy / sphereRadius / 2;
             double oy = vx / sphereRadius / 2;
             out[0] = -ox * q[1] - oy * q[2];

@@ -21,6 +21,11 @@ record WalkerModel(double slope, double rollingRatio, double hipStiffness, doubl
         return new WalkerModel(slope, rollingRatio, stiffness, push);
     }
 
+    /** Less of slope and push: by the square of the share, and by the share. */
+    WalkerModel gentler(double share) {
+        return new WalkerModel(slope * share * share, rollingRatio, hipStiffness, pushImpulse * share);
+    }
+
     /** 1 less the rolling ratio. */
     double leg() {
         return 1 - rollingRatio;

@@ -17,6 +17,9 @@ final class WalkerSearch {
     private static final int MOST_HALVINGS = 12;
     private static final double STEP_TOLERANCE = 1e-13;
     private static final double RESIDUAL_TOLERANCE = 1e-13;
+    /** Gaits nearer than this are one. */
+    private static final double SAME = 1e-7;
+
     private static final double SMALL_RESIDUAL = 1e-10;
 
     private final WalkerModel model;
@@ -24,6 +27,11 @@ final class WalkerSearch {
     private final double time;
     /** Half angle, stance rate, push impulse, hip stiffness. */
     private final double[] x;
+
+    /** Begun again at its own end the method may stall on rounding; so it runs once. */
+    private boolean isDone;
+
+    private boolean hasConverged;
 
     private WalkerSearch(WalkerModel model, int[] unknowns, double time, double[] x) {
         this.model = model;
@@ -66,6 +74,16 @@ final class WalkerSearch {
         return x[3];
     }
 
+    /** Time of the step it has come to. */
+    double stepTime() throws LimitException {
+        return step(x).time();
+    }
+
+    /** Whether another search ends at the same gait. */
+    boolean meets(WalkerSearch other) {
+        return other.converges() && Math.abs(x[0] - other.x[0]) < SAME && Math.abs(x[1] - other.x[1]) < SAME;
+    }
+
     private WalkerStep step(double[] at) throws LimitException {
         return WalkerStep.of(model.with(at[2], at[3]), at[0], at[1]);
     }
@@ -82,11 +100,15 @@ final class WalkerSearch {
 
     /** Seeks; x is the gait found, or the last place reached. */
     boolean converges() {
-        try {
-            return newton();
-        } catch (LimitException e) {
-            return false;
+        if (!isDone) {
+            isDone = true;
+            try {
+                hasConverged = newton();
+            } catch (LimitException e) {
+                hasConverged = false;
+            }
         }
+        return hasConverged;
     }
 
     private boolean newton() throws LimitException {

@@ -155,4 +155,14 @@ class VaultingGaitTest {
         double steady = one.factor(org.solewright.domain.cost.WorkForm.PUSH_OFF) * 1.44 / 2;
         assertThat(gait.pushOffWork() / steady).isCloseTo(1.27, within(0.005));
     }
+
+    @Test
+    void wheelsOfManySpokesOrMuchInertiaKeepTheirDigits() throws LimitException {
+        // exact: for k -> 0 the rate before is sqrt(g/l sin(slope)/sin a); the least slope is far below a
+        RimlessWheel heavy = RimlessWheel.of(8, 0.15, 1e-30, 1, 9.81);
+        double rate = Math.sqrt(9.81 * Math.sin(0.15) / Math.sin(Math.PI / 8));
+        assertThat(heavy.rateBefore()).isCloseTo(rate, within(1e-14 * rate));
+        assertThat(heavy.leastSlope()).isBetween(0.0, 1e-12);
+        assertThat(RimlessWheel.of(1e9, 0.05, 1, 0.9, 9.81).leastSlope()).isBetween(0.0, 1e-8);
+    }
 }

@@ -4,6 +4,8 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
+import org.apache.commons.math3.ode.FirstOrderDifferentialEquations;
+import org.apache.commons.math3.ode.nonstiff.DormandPrince853Integrator;
 import org.junit.jupiter.api.Test;
 import org.solewright.analysis.dynamics.SimplestWalker.Gait;
 
@@ -122,5 +124,58 @@ class SimplestWalkerTest {
         assertThatThrownBy(() -> SimplestWalker.powered(Gait.LONG, 0, 0, 0, 2)).hasMessageContaining("half angle 2.0");
         assertThatThrownBy(() -> SimplestWalker.target(0.4, 2.5, 0)).hasMessageContaining("step length 2.5");
         assertThatThrownBy(() -> SimplestWalker.target(0.4, -1, 0)).hasMessageContaining("step length -1.0");
+    }
+
+    @Test
+    void gaitsKeepTheirNamesOnSteepSlopesAndInLongSteps() throws LimitException {
+        // independent: followed from a gentler slope or a shorter step, the step time changes by little, while the
+        // other
+        // gait's differs by more than 0.3; straight from the leading order Newton's method meets the other one here
+        double before =
+                SimplestWalker.passive(SimplestWalker.Gait.SHORT, 0.28, 0, 0, 0).stepTime();
+        assertThat(SimplestWalker.passive(SimplestWalker.Gait.SHORT, 0.2995, 0, 0, 0)
+                        .stepTime())
+                .isCloseTo(before, within(0.1));
+        double shorter =
+                SimplestWalker.powered(SimplestWalker.Gait.LONG, 0, 0, 0, 0.52).stepTime();
+        assertThat(SimplestWalker.powered(SimplestWalker.Gait.LONG, 0, 0, 0, 0.54)
+                        .stepTime())
+                .isCloseTo(shorter, within(0.05));
+        assertThat(SimplestWalker.powered(SimplestWalker.Gait.SHORT, 0, 0, 0, 0.54)
+                        .stepTime())
+                .isLessThan(shorter - 0.3);
+    }
+
+    @Test
+    void integratorIsOfEighthOrder() {
+        // exact: E = (theta'^2)/2 + cos theta of the stance limb (point feet, level) stays; the error of a method of
+        // order 8
+        // falls by 2^8 when the step is halved. Half of that is asked for, since the steps are not yet small
+        WalkerModel model = new WalkerModel(0, 0, 0, 0);
+        double[] error = new double[2];
+        for (int i = 0; i < 2; i++) {
+            double[] y = {-0.5, 0.5, 1.2, 0.3};
+            double energy = y[2] * y[2] / 2 + Math.cos(y[0]);
+            DormandPrince853Integrator fixed = new DormandPrince853Integrator(0.5 / (i + 1), 0.5 / (i + 1), 1e9, 1e9);
+            fixed.setInitialStepSize(0.5 / (i + 1));
+            fixed.integrate(
+                    new FirstOrderDifferentialEquations() {
+                        @Override
+                        public int getDimension() {
+                            return 4;
+                        }
+
+                        @Override
+                        public void computeDerivatives(double t, double[] at, double[] rates) {
+                            model.rates(at, rates);
+                        }
+                    },
+                    0,
+                    y,
+                    2,
+                    y);
+            error[i] = Math.abs(y[2] * y[2] / 2 + Math.cos(y[0]) - energy);
+        }
+        assertThat(error[0] / error[1]).as(error[0] + " " + error[1]).isGreaterThan(128);
     }
 }

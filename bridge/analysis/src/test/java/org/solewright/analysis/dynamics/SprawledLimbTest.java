@@ -107,4 +107,31 @@ class SprawledLimbTest {
         assertThatThrownBy(() -> CircularTrack.of(0, 0.1, 1)).hasMessageContaining("track radius 0.0 m");
         assertThatThrownBy(() -> CircularTrack.of(1, 0, 1)).hasMessageContaining("sphere radius 0.0 m");
     }
+
+    @Test
+    void slowAndFastStancesOfOneTrackAreOne() throws LimitException {
+        // exact: rolling has no time of its own; 1e-300 s once took for ever
+        double[] expected = limb(0.44).rotation(0.8);
+        for (double time : new double[] {1e-250, 1e-9, 1e9}) {
+            SprawledLimb other = SprawledLimb.of(0.3, 0.22, 0.12, 0.44 * 0.8 / time, 0.6, time);
+            assertThat(other.rotation(time)).containsExactly(expected, within(1e-11));
+        }
+    }
+
+    @Test
+    void sizesScaleOut() throws LimitException {
+        // exact: dimensional scaling [Hof 1996], lengths x 7
+        SprawledLimb other = SprawledLimb.of(2.1, 1.54, 0.84, 0.44 * 7, 0.6, 0.8);
+        assertThat(other.trackLength() / 7)
+                .isCloseTo(limb(0.44).trackLength(), within(1e-12 * limb(0.44).trackLength()));
+        assertThat(other.rotation(0.8)).containsExactly(limb(0.44).rotation(0.8), within(1e-12));
+    }
+
+    @Test
+    void endlessRollingIsRefused() throws LimitException {
+        SprawledLimb far = SprawledLimb.of(0.3, 0.22, 0.12, 1e9, 0.6, 0.8);
+        assertThatThrownBy(() -> far.rotation(0.8))
+                .isInstanceOf(LimitException.class)
+                .hasMessageContaining("10000.0 times the radius");
+    }
 }
