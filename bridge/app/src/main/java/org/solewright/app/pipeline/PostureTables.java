@@ -161,7 +161,7 @@ public final class PostureTables {
             findings.add(Finding.note(
                     "postures.out-of-reach",
                     segments + " segments",
-                    "a step of " + stepLength + " m has no work to be matched: " + e.limit()));
+                    "some steps have no work to be matched: " + e.limit()));
             return;
         }
         double work = factor * limb.mass() * speed * speed / 2;
@@ -209,7 +209,10 @@ public final class PostureTables {
                         new ComparedPostures.TakenStep(
                                 "", Integer.toString(number), step, speed, limb.mass(), index.gravity()));
                 all.addAll(compared.rows());
-                findings.addAll(compared.findings());
+                // One of each kind: the steps differ in numbers alone.
+                compared.findings().stream()
+                        .filter(f -> findings.stream().noneMatch(g -> g.code().equals(f.code())))
+                        .forEach(findings::add);
                 number++;
             }
         }

@@ -33,7 +33,9 @@ class C3dFuzzTest {
         }
         for (Path folder : folders) {
             try (Stream<Path> files = Files.list(folder)) {
-                for (Path file : files.filter(f -> f.toString().endsWith(".c3d")).sorted().toList()) {
+                for (Path file : files.filter(f -> f.toString().endsWith(".c3d"))
+                        .sorted()
+                        .toList()) {
                     if (Files.size(file) <= LARGEST_SEED) {
                         seeds.add(Files.readAllBytes(file));
                     }
