@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import org.solewright.analysis.numerics.Series;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.gait.PlatformLoads;
@@ -60,8 +61,11 @@ public final class Pass {
             stances.addAll(finder.stances(platform));
         }
         stances.sort(Comparator.comparingDouble(s -> s.stance().start()));
-        WalkingTrial.Track pelvis_W =
-                new WalkingTrial.Track(FootTracks.turned(trial.pelvis().samples(), R_LW));
+        double[] pelvis = FootTracks.turned(trial.pelvis().samples(), R_LW);
+        for (int i = 0; trial.isOnTreadmill() && i < pelvis.length; i += 3) {
+            pelvis[i] += trial.carried(trial.time(i / 3));
+        }
+        WalkingTrial.Track pelvis_W = new WalkingTrial.Track(pelvis);
         return new Pass(trial, R_LW, settings, pelvis_W, StanceFinder.joined(stances, findings), footfalls, findings);
     }
 
@@ -139,7 +143,7 @@ public final class Pass {
     }
 
     /**
-     * Position of the pelvis in the walking frame.
+     * Position of the pelvis in the walking frame, on a treadmill as the belt sees it.
      *
      * @param time s
      * @return m; empty where it is not tracked
@@ -233,6 +237,38 @@ public final class Pass {
             }
         }
         return Optional.empty();
+    }
+
+    /**
+     * Contact of a stance's foot as kinematics shows it [Zeni et al. 2008].
+     *
+     * @param stance a stance of this pass
+     * @return s; empty where it is not in view
+     */
+    public OptionalDouble kinematicContact(Stance stance) {
+        return footfall(stance)
+                .filter(Footfall::isStartSeen)
+                .map(f -> OptionalDouble.of(f.start()))
+                .orElse(OptionalDouble.empty());
+    }
+
+    /**
+     * Foot-off of a stance as kinematics shows it [Zeni et al. 2008].
+     *
+     * @param stance a stance of this pass
+     * @return s; empty where it is not in view
+     */
+    public OptionalDouble kinematicOff(Stance stance) {
+        return footfall(stance)
+                .filter(Footfall::isEndSeen)
+                .map(f -> OptionalDouble.of(f.end()))
+                .orElse(OptionalDouble.empty());
+    }
+
+    private Optional<Footfall> footfall(Stance stance) {
+        return footfalls.stream()
+                .filter(f -> f.side() == stance.side() && f.overlaps(stance.start(), stance.end()))
+                .findFirst();
     }
 
     /** Footfalls that no platform measured. */

@@ -209,6 +209,7 @@ final class StanceFinder {
             }
             double s = R_LW.inverseVector(platform.centreOfPressure(i))
                     .minus(foot.heel(flat))
+                    .plus(new Vec3(trial.beltSpeed() * (platform.time(i) - trial.time(flat)), 0, 0))
                     .dot(foot.forward(flat));
             low = Math.min(low, s);
             high = Math.max(high, s);

@@ -162,7 +162,8 @@ public final class StepFinder {
         Vec3 a = heel(trailing);
         Vec3 b = heel(leading);
         double width = (b.z() - a.z()) * (leading.side() == Side.RIGHT ? 1 : -1);
-        return new double[] {b.x() - a.x(), width};
+        double carried = pass.trial().beltSpeed() * (leading.start() - trailing.start());
+        return new double[] {b.x() - a.x() + carried, width};
     }
 
     private Vec3 heel(Stance stance) {

@@ -10,9 +10,11 @@ import org.solewright.domain.geometry.Vec3;
 
 /**
  * The walking frame of one pass: x along the straight line fitted to the pelvis over the longest whole number of strides
- * in view (else the whole pass), y up, z to the subject's right ([Wu and Cavanagh 1995]).
+ * in view (else the whole pass), on a treadmill against the belt, y up, z to the subject's right ([Wu and Cavanagh 1995]).
  */
 final class WalkingFrame {
+
+    private static final double NEAR_BELT = 0.2;
 
     private WalkingFrame() {}
 
@@ -25,9 +27,43 @@ final class WalkingFrame {
      * @throws IllegalArgumentException where the pelvis is not tracked in two frames or does not move
      */
     static Rotation of(WalkingTrial trial, double shortestStride) {
+        if (trial.isOnTreadmill()) {
+            return along(trial, againstBelt(trial));
+        }
         Rotation first = along(trial, direction(trial, 0, trial.frames() - 1));
         int[] strides = longestStrides(trial, first, shortestStride);
         return strides.length == 0 ? first : along(trial, direction(trial, strides[0], strides[1]));
+    }
+
+    /**
+     * Forward on a treadmill: against the motion of the heels while the belt carries them, which are the frames whose speed
+     * is near the belt's.
+     */
+    private static Vec3 againstBelt(WalkingTrial trial) {
+        Vec3 facing = Vec3.ZERO;
+        for (FootTracks foot : trial.feet().values()) {
+            for (int i = 0; i < foot.frames(); i++) {
+                if (foot.isTracked(i)) {
+                    facing = facing.plus(foot.headCentre(i).minus(foot.heel(i)));
+                }
+            }
+        }
+        facing = horizontal(trial, facing).unit();
+        Vec3 carried = Vec3.ZERO;
+        for (FootTracks foot : trial.feet().values()) {
+            for (int i = 1; i < foot.frames(); i++) {
+                Vec3 v = horizontal(trial, foot.heel(i).minus(foot.heel(i - 1))).times(trial.rate());
+                double backward = -v.dot(facing) / trial.beltSpeed();
+                if (backward > 1 - NEAR_BELT && backward < 1 + NEAR_BELT) {
+                    carried = carried.minus(v);
+                }
+            }
+        }
+        return carried.norm() > 0 ? carried : facing;
+    }
+
+    private static Vec3 horizontal(WalkingTrial trial, Vec3 v) {
+        return v.minus(trial.up().times(v.dot(trial.up())));
     }
 
     private static Rotation along(WalkingTrial trial, Vec3 direction) {
@@ -57,7 +93,7 @@ final class WalkingFrame {
                 slope = slope.plus(trial.pelvis().at(i).minus(mean).times(i - meanFrame));
             }
         }
-        return slope.minus(trial.up().times(slope.dot(trial.up())));
+        return horizontal(trial, slope);
     }
 
     private static int[] longestStrides(WalkingTrial trial, Rotation R_LW, double shortestStride) {

@@ -17,6 +17,8 @@ import org.solewright.domain.geometry.Vec3;
  * @param pelvis the pelvis's path, {@code [frames][3]}, m
  * @param feet tracks by side
  * @param platforms loads
+ * @param beltSpeed speed of the treadmill's belts, m/s, 0 over ground; platforms are then the belts and the laboratory's
+ *     frame is at rest
  */
 public record WalkingTrial(
         String name,
@@ -25,7 +27,8 @@ public record WalkingTrial(
         Vec3 up,
         Track pelvis,
         Map<Side, FootTracks> feet,
-        List<PlatformLoads> platforms) {
+        List<PlatformLoads> platforms,
+        double beltSpeed) {
 
     /** A path that is shared with its maker and not to be changed. */
     public static final class Track {
@@ -63,8 +66,11 @@ public record WalkingTrial(
         }
     }
 
-    /** Copies the collections. */
+    /** Copies the collections and checks the speed. */
     public WalkingTrial {
+        if (!(beltSpeed >= 0)) {
+            throw new IllegalArgumentException("belt speed " + beltSpeed + " m/s, expected 0 or more");
+        }
         feet = feet.isEmpty() ? Map.of() : Map.copyOf(new EnumMap<>(feet));
         platforms = List.copyOf(platforms);
     }
@@ -82,6 +88,15 @@ public record WalkingTrial(
             throw new IllegalArgumentException(side.word() + " foot asked for, tracked are " + feet.keySet());
         }
         return foot;
+    }
+
+    boolean isOnTreadmill() {
+        return beltSpeed > 0;
+    }
+
+    /** How far the belt has carried a point of it backwards since the recording's start. */
+    double carried(double time) {
+        return beltSpeed * (time - startTime);
     }
 
     int frames() {

@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -109,7 +110,7 @@ class InventedWalkTest {
         }
         WalkingTrial two = trial(walk);
         WalkingTrial four = new WalkingTrial(
-                two.name(), two.rate(), two.startTime(), two.up(), two.pelvis(), two.feet(), platforms);
+                two.name(), two.rate(), two.startTime(), two.up(), two.pelvis(), two.feet(), platforms, 0);
         List<Step> all = StepFinder.steps(
                 Pass.of(four, new GaitSettings(GaitSettings.STANDARD_GRAVITY, 0.95, Double.NaN)), new ArrayList<>());
         assertThat(all).hasSize(3);
@@ -122,6 +123,125 @@ class InventedWalkTest {
                 .isCloseTo(step.trailingPositive(), within(2e-3 * step.trailingPositive()));
         assertThat(value(m, Measure.COLLISION_DOUBLE_SUPPORT))
                 .isCloseTo(step.leadingNegative(), within(-2e-3 * step.leadingNegative()));
+    }
+
+    @Test
+    void walkOnTwoBeltsCostsWhatItCostsOverGround() {
+        SyntheticWalk walk = new SyntheticWalk(PARAMETERS);
+        GaitSettings settings = new GaitSettings(GaitSettings.STANDARD_GRAVITY, 0.95, Double.NaN);
+        WalkingTrial two = trial(walk);
+        int frames = two.pelvis().frames();
+        List<PlatformLoads> ground = new ArrayList<>();
+        for (int foot = 1; foot <= 4; foot++) {
+            ground.add(platform(walk, foot, foot, frames));
+        }
+        WalkingTrial over = new WalkingTrial("ground", RATE, 0, Vec3.Z, two.pelvis(), two.feet(), ground, 0);
+        double belt = 1.2;
+        WalkingTrial onBelts = new WalkingTrial(
+                "belts",
+                RATE,
+                0,
+                Vec3.Z,
+                new WalkingTrial.Track(carried(pelvis(walk, frames), belt)),
+                feet(walk, frames, belt),
+                List.of(belt(walk, 1, -1, belt, frames), belt(walk, 2, 1, belt, frames)),
+                belt);
+        List<Step> expected = StepFinder.steps(Pass.of(over, settings), new ArrayList<>());
+        List<Finding> findings = new ArrayList<>();
+        List<Step> found = StepFinder.steps(Pass.of(onBelts, settings), findings);
+        assertThat(expected).hasSize(3);
+        for (Step step : expected) {
+            Step same = found.stream()
+                    .filter(f -> Math.abs(f.loads().leading().start()
+                                    - step.loads().leading().start())
+                            < 1e-6)
+                    .findFirst()
+                    .orElseThrow(() -> new AssertionError(findings.toString()));
+            StepMechanics a = StepMechanics.of(step);
+            StepMechanics b = StepMechanics.of(same);
+            if (step.loads().isStride() == same.loads().isStride()) {
+                for (Measure m : List.of(
+                        Measure.PUSH_OFF, Measure.COLLISION, Measure.STEP_LENGTH, Measure.SPEED, Measure.MASS)) {
+                    // exact: a frame that moves evenly sees the same forces and the same motion against the ground.
+                    if (a.values().containsKey(m)) {
+                        assertThat(value(b, m)).as(m.column()).isCloseTo(value(a, m), within(1e-6));
+                    }
+                }
+            }
+        }
+    }
+
+    private static double[] pelvis(SyntheticWalk walk, int frames) {
+        double[] pelvis = new double[3 * frames];
+        double[] s = new double[6];
+        for (int i = 0; i < frames; i++) {
+            walk.hip(i / RATE, s);
+            set(pelvis, i, s[0], 0, s[1]);
+        }
+        return pelvis;
+    }
+
+    private static double[] carried(double[] xyz, double belt) {
+        double[] out = xyz.clone();
+        for (int i = 0; i < out.length; i += 3) {
+            out[i] -= belt * (i / 3) / RATE;
+        }
+        return out;
+    }
+
+    private static Map<Side, FootTracks> feet(SyntheticWalk walk, int frames, double belt) {
+        double[][][] tracks = new double[2][3][3 * frames];
+        for (int i = 0; i < frames; i++) {
+            for (int side = 0; side < 2; side++) {
+                double[] at = foot(walk, side, i / RATE);
+                double y = side == 0 ? -0.1 : 0.1;
+                set(tracks[side][0], i, at[0] - 0.02, y, 0.03 + at[1]);
+                set(tracks[side][1], i, at[0] + 0.15, 0.7 * y, 0.01 + at[1]);
+                set(tracks[side][2], i, at[0] + 0.12, 1.4 * y, 0.01 + at[1]);
+            }
+        }
+        Map<Side, FootTracks> feet = new EnumMap<>(Side.class);
+        for (int side = 0; side < 2; side++) {
+            feet.put(
+                    side == 0 ? Side.RIGHT : Side.LEFT,
+                    new FootTracks(
+                            carried(tracks[side][0], belt),
+                            List.of(carried(tracks[side][1], belt), carried(tracks[side][2], belt)),
+                            Optional.empty()));
+        }
+        return feet;
+    }
+
+    /** A belt under the feet of one side, whose loads lie where the belt has carried them. */
+    private static PlatformLoads belt(SyntheticWalk walk, int number, int sign, double belt, int frames) {
+        int samples = (int) Math.round((frames - 1) / RATE * LOAD_RATE) + 1;
+        double[] force = new double[3 * samples];
+        double[] moment = new double[3 * samples];
+        Vec3 centre = new Vec3(0, sign * 0.3, 0);
+        double[] load = new double[3];
+        for (int i = 0; i < samples; i++) {
+            double t = i / LOAD_RATE;
+            Vec3 f = Vec3.ZERO;
+            Vec3 m = Vec3.ZERO;
+            for (int foot = sign < 0 ? 2 : 1; foot <= 4; foot += 2) {
+                walk.load(foot, t, load);
+                if (load[1] != 0) {
+                    Vec3 one = new Vec3(load[0], 0, load[1]);
+                    f = f.plus(one);
+                    m = m.plus(new Vec3(load[2] - belt * t, sign * 0.1, 0)
+                            .minus(centre)
+                            .cross(one));
+                }
+            }
+            set(force, i, f.x(), f.y(), f.z());
+            set(moment, i, m.x(), m.y(), m.z());
+        }
+        List<Vec3> corners = List.of(
+                new Vec3(3, centre.y() + 0.3, 0),
+                new Vec3(-3, centre.y() + 0.3, 0),
+                new Vec3(-3, centre.y() - 0.3, 0),
+                new Vec3(3, centre.y() - 0.3, 0));
+        return new PlatformLoads(number, 2, corners, Vec3.Z, LOAD_RATE, 0, true, force, moment);
     }
 
     private static WalkingTrial trial(SyntheticWalk walk) {
@@ -149,7 +269,7 @@ class InventedWalkTest {
                 Side.RIGHT, new FootTracks(heel[0], List.of(first[0], fifth[0]), Optional.empty()),
                 Side.LEFT, new FootTracks(heel[1], List.of(first[1], fifth[1]), Optional.empty()));
         List<PlatformLoads> platforms = List.of(platform(walk, 1, 2, frames), platform(walk, 2, 3, frames));
-        return new WalkingTrial("invented", RATE, 0, Vec3.Z, new WalkingTrial.Track(pelvis), feet, platforms);
+        return new WalkingTrial("invented", RATE, 0, Vec3.Z, new WalkingTrial.Track(pelvis), feet, platforms, 0);
     }
 
     /** Ground position and height of a foot: at rest in stance, a smooth arc in swing. */

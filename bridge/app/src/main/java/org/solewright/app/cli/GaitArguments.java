@@ -56,8 +56,16 @@ final class GaitArguments {
             names = "--events",
             paramLabel = "KIND",
             defaultValue = "platform",
-            description = "Where contacts come from; this version knows platform.")
+            description =
+                    "Where the times of contacts come from: platform, file or kinematic (default: ${DEFAULT-VALUE}).")
     private String events = "platform";
+
+    @Option(
+            names = "--belt-speed",
+            paramLabel = "M_S",
+            defaultValue = "0",
+            description = "Speed of the treadmill's belts, m/s; the platforms are the belts.")
+    private double beltSpeed;
 
     @Option(names = "--ignore-flags", description = "Take samples for seen that a file flags as missing.")
     private boolean isFlagIgnored;
@@ -85,9 +93,10 @@ final class GaitArguments {
     GaitOptions options(
             List<Path> standing, @Nullable Double stature, @Nullable String population, @Nullable String sex)
             throws UseCaseException {
-        if (!events.equals("platform")) {
-            throw usage("--events", "this version takes contacts from platforms only", "use --events platform");
+        if (!events.equals("platform") && !events.equals("file") && !events.equals("kinematic")) {
+            throw usage("--events", "'" + events + "' is unknown", "use platform, file or kinematic");
         }
+        check("--belt-speed", beltSpeed, 0, 20, "m/s");
         if (isMirrored && annotate.isPresent()) {
             throw usage(
                     "--annotate",
@@ -113,6 +122,8 @@ final class GaitArguments {
                 optional(markerRadius),
                 markerCutoff,
                 isFlagIgnored,
+                beltSpeed,
+                events,
                 annotate);
     }
 

@@ -185,6 +185,9 @@ public final class AppraiseUseCase {
         fixed(settings, "u_v_forward_m_s", "0.02");
         fixed(settings, "u_mass", "0.01");
         settings.add(new PostureCost.Setting(
+                "belt_speed_m_s", Double.toString(o.beltSpeed()), o.beltSpeed() > 0 ? GIVEN : DEFAULT));
+        settings.add(new PostureCost.Setting("events", o.events(), o.events().equals("platform") ? DEFAULT : GIVEN));
+        settings.add(new PostureCost.Setting(
                 "mirrored", Boolean.toString(o.isMirrored()), o.isMirrored() ? GIVEN : DEFAULT));
         o.mass().ifPresent(m -> settings.add(new PostureCost.Setting("mass_kg", Double.toString(m), GIVEN)));
         return settings;

@@ -120,6 +120,8 @@ public final class DemoUseCase {
                 OptionalDouble.empty(),
                 0,
                 false,
+                0,
+                "platform",
                 Optional.empty());
         survey(files);
         FitUseCase.Request fit = new FitUseCase.Request(

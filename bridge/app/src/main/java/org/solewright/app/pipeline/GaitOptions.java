@@ -24,6 +24,8 @@ import org.solewright.domain.foot.Sex;
  * @param markerRadius m
  * @param markerCutoff low-pass for markers, Hz; 0: none
  * @param isFlagIgnored whether samples that are flagged missing are taken for seen
+ * @param beltSpeed speed of a treadmill's belts, m/s; 0 over ground
+ * @param events where the times of contacts come from: platform, file or kinematic
  * @param annotate folder into which the walking recordings are written back with what was found in them
  */
 public record GaitOptions(
@@ -40,6 +42,8 @@ public record GaitOptions(
         OptionalDouble markerRadius,
         double markerCutoff,
         boolean isFlagIgnored,
+        double beltSpeed,
+        String events,
         Optional<Path> annotate) {
 
     /** Low-pass for markers where none is given, Hz (03 section 2). */
@@ -49,6 +53,9 @@ public record GaitOptions(
     public GaitOptions {
         standing = List.copyOf(standing);
         walking = List.copyOf(walking);
+        if (EventTimes.Source.ofWord(events).isEmpty()) {
+            throw new IllegalArgumentException("events from '" + events + "', expected platform, file or kinematic");
+        }
     }
 
     /** The same without standing recordings. */
@@ -67,6 +74,8 @@ public record GaitOptions(
                 markerRadius,
                 markerCutoff,
                 isFlagIgnored,
+                beltSpeed,
+                events,
                 annotate);
     }
 

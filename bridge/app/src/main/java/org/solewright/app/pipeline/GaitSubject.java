@@ -167,6 +167,10 @@ final class GaitSubject {
             found.add(Pass.of(trial, settings));
         }
         passes = new ArrayList<>(ContactReview.of(found));
+        EventTimes.Source events = EventTimes.Source.ofWord(options.events()).orElseThrow();
+        for (int i = 0; i < passes.size(); i++) {
+            passes.set(i, EventTimes.apply(events, passes.get(i), walking.get(i).recording()));
+        }
         if (!contacts.isEmpty()) {
             passes = new ArrayList<>(ContactOverrides.apply(contacts, passes, into));
         }
@@ -235,7 +239,9 @@ final class GaitSubject {
                         r.name(),
                         "the walking recording lacks every pelvic landmark (asis, psis, sacrum, trochanter_major)",
                         "map at least one: the walking direction and speed come from the pelvis"));
-        checkTravel(r, pelvis);
+        if (options.beltSpeed() == 0) {
+            checkTravel(r, pelvis);
+        }
         return new WalkingTrial(
                 trialName(r),
                 r.rate(),
@@ -243,7 +249,8 @@ final class GaitSubject {
                 up(r, standingUp),
                 new WalkingTrial.Track(pelvis),
                 feet,
-                r.platforms());
+                r.platforms(),
+                options.beltSpeed());
     }
 
     /** A walk needs a pelvis that is seen and goes somewhere. */

@@ -75,6 +75,8 @@ class RealRecordingTest {
                 OptionalDouble.empty(),
                 GaitOptions.DEFAULT_MARKER_CUTOFF,
                 false,
+                0,
+                "platform",
                 Optional.empty());
     }
 
@@ -282,6 +284,8 @@ class RealRecordingTest {
                         o.markerRadius(),
                         o.markerCutoff(),
                         false,
+                        0,
+                        "platform",
                         Optional.empty()),
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 "test"));
