@@ -9,6 +9,8 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import org.solewright.analysis.cost.ComparedPostures;
+import org.solewright.analysis.cost.DistalWork;
+import org.solewright.analysis.cost.PowerWork;
 import org.solewright.analysis.cost.StepMechanics;
 import org.solewright.analysis.fitting.FittedArc;
 import org.solewright.analysis.fitting.RollOver;
@@ -31,9 +33,11 @@ import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.CurveRow;
+import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.gait.Stance;
 import org.solewright.domain.gait.Use;
+import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
@@ -134,7 +138,7 @@ public final class AppraiseUseCase {
         findings.add(Finding.note(
                 "columns.not-computed",
                 "",
-                "effective_segments, ankle_foot_work_*, foot_work_* and audit_* are left empty by this version"));
+                "effective_segments, foot_work_* and audit_* are left empty by this version"));
         List<Finding> distinct = List.copyOf(new LinkedHashSet<>(findings));
         PostureCost cost = new PostureCost(
                 request.version(),
@@ -291,6 +295,7 @@ public final class AppraiseUseCase {
             q.sd().ifPresent(sd -> row.number("effective_foot_length_m_sd", sd));
         });
         rollingRadius(row, limb, pass, tracks, step, codes);
+        distalWork(row, limb, pass, tracks, step, codes);
         Double length = m.values().get(Measure.STEP_LENGTH);
         Double before = m.values().get(Measure.SPEED_BEFORE);
         Double mass = m.values().get(Measure.MASS);
@@ -322,6 +327,37 @@ public final class AppraiseUseCase {
         if (value != null) {
             row.number(column, value / by);
         }
+    }
+
+    /** Work distal to the shank of the trailing limb over its stance. */
+    private void distalWork(
+            TransitionRow.Builder row, ModelLimb limb, Pass pass, LandmarkTracks tracks, Step step, Set<String> codes) {
+        Stance trailing = step.loads().trailing();
+        Optional<SegmentTracking> shank = limb.shank(tracks);
+        Optional<PlatformLoads> platform = pass.trial().platforms().stream()
+                .filter(p -> trailing.platforms().equals(List.of(p.number())))
+                .findFirst();
+        Optional<PowerWork> work = Optional.empty();
+        if (shank.isPresent() && platform.isPresent() && trailing.whole()) {
+            SegmentTracking s = shank.get();
+            Vec3 belt = pass.R_LW().x().times(-pass.trial().beltSpeed());
+            work = new DistalWork(s::pose, pass.trial().rate(), pass.trial().startTime(), belt)
+                    .over(platform.get(), request.gait().markerCutoff(), trailing.start(), trailing.end());
+        }
+        if (work.isEmpty()) {
+            addFinding(
+                    codes,
+                    Finding.note(
+                            "distal.unknown",
+                            pass.trial().name() + " step " + step.number(),
+                            "no work distal to the shank: "
+                                    + (!trailing.whole()
+                                            ? trailing.why()
+                                            : "the shank is not tracked throughout the stance on one platform")));
+            return;
+        }
+        row.number("ankle_foot_work_pos_J", work.get().positive());
+        row.number("ankle_foot_work_neg_J", work.get().negative());
     }
 
     private void rollingRadius(
