@@ -20,4 +20,6 @@ module org.solewright.formats {
             jakarta.xml.bind;
     opens org.solewright.formats.footmodel.landmarksxml to
             jakarta.xml.bind;
+    opens org.solewright.formats.footmodel.resultsxml to
+            jakarta.xml.bind;
 }

@@ -53,6 +53,23 @@ public record StepMechanics(
     }
 
     /**
+     * Horizontal force that changes no velocity: over a stride, which repeats itself, the whole mean (design 04 H1); over a
+     * step the platforms' bias alone, since a step may well speed up or slow down.
+     */
+    private static double[] steadyForce(StepLoads loads) {
+        if (!loads.isStride()) {
+            return new double[] {loads.biasForward(), 0, loads.biasRight()};
+        }
+        double from = loads.windowFrom();
+        double to = loads.windowTo();
+        return new double[] {
+            loads.totalForce().forward().mean(from, to),
+            0,
+            loads.totalForce().right().mean(from, to)
+        };
+    }
+
+    /**
      * Computes one transition.
      *
      * @param step the step
@@ -65,7 +82,7 @@ public record StepMechanics(
                 loads.windowFrom(),
                 loads.windowTo(),
                 new double[] {loads.meanForward(), 0, loads.meanRight()},
-                new double[] {loads.biasForward(), 0, loads.biasRight()},
+                steadyForce(loads),
                 loads.gravity());
         List<Finding> findings = new ArrayList<>();
         Map<Measure, Double> values = new EnumMap<>(Measure.class);

@@ -100,7 +100,10 @@ public final class PassChecks {
                         String.format(
                                 Locale.ROOT,
                                 "mean horizontal force %.1f N forward and %.1f N to the right; the pelvis's change of speed"
-                                        + " asks for %.1f N and %.1f N; nothing is removed",
+                                        + " asks for %.1f N and %.1f N; "
+                                        + (loads.isStride()
+                                                ? "the mean is taken off the stride's acceleration"
+                                                : "nothing is removed"),
                                 tenths(loads.totalForce().forward().mean(from, to)),
                                 tenths(loads.totalForce().right().mean(from, to)),
                                 tenths(change.x()),

@@ -3,6 +3,7 @@ package org.solewright.app.cli;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.solewright.app.pipeline.AppraiseReport;
 import org.solewright.app.pipeline.AppraiseUseCase;
@@ -35,6 +36,18 @@ final class AppraiseCommand implements Callable<Integer> {
                     "Foot model; one per side; may be left out where only the work on the centre of mass is asked.")
     private List<Path> models = new ArrayList<>();
 
+    @Option(
+            names = "--results",
+            paramLabel = "R.xml",
+            description = "Column map of simulated or measured results, instead of --walking and --landmarks.")
+    private Optional<Path> results = Optional.empty();
+
+    @Option(
+            names = "--table",
+            paramLabel = "FILE",
+            description = "File for a table of the column map that names none; may be repeated.")
+    private List<Path> tables = new ArrayList<>();
+
     @Mixin
     private GaitArguments gait = new GaitArguments();
 
@@ -53,8 +66,12 @@ final class AppraiseCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws UseCaseException, FormatException {
-        AppraiseUseCase.Request request =
-                new AppraiseUseCase.Request(gait.options(List.of(), null, null, null), models, Version.NUMBER);
+        AppraiseUseCase.Request request = new AppraiseUseCase.Request(
+                gait.options(List.of(), null, null, null, results.isPresent()),
+                results,
+                tables,
+                models,
+                Version.NUMBER);
         AppraiseReport report = AppraiseReport.write(request, out);
         FindingPrinter.print(spec.commandLine().getErr(), report.findings());
         report.lines().forEach(spec.commandLine().getOut()::println);

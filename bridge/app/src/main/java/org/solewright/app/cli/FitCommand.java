@@ -96,7 +96,7 @@ final class FitCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws UseCaseException, FormatException {
-        GaitOptions options = gait.options(standing, stature, population, sex);
+        GaitOptions options = gait.options(standing, stature, population, sex, false);
         if (segments != null && (segments < 1 || segments > 3)) {
             throw GaitArguments.usage(
                     "--segments", segments + " parts of the foot, this version knows 1 to 3", "use 1, 2 or 3");

@@ -16,15 +16,12 @@ import picocli.CommandLine.Option;
 /** Options that fit and appraise have in common. */
 final class GaitArguments {
 
-    @Option(
-            names = "--walking",
-            paramLabel = "W.c3d",
-            required = true,
-            description = "Walking recording; may be repeated.")
+    @Option(names = "--walking", paramLabel = "W.c3d", description = "Walking recording; may be repeated.")
     private List<Path> walking = new ArrayList<>();
 
-    @Option(names = "--landmarks", paramLabel = "MAP.xml", required = true, description = "Landmark map.")
-    private Path landmarks = Path.of("");
+    @Option(names = "--landmarks", paramLabel = "MAP.xml", description = "Landmark map.")
+    @Nullable
+    private Path landmarks;
 
     @Option(names = "--mass", paramLabel = "KG", description = "Body mass, kg; else measured by the platforms.")
     @Nullable
@@ -87,12 +84,18 @@ final class GaitArguments {
      * @param stature m
      * @param population word of the command line
      * @param sex word of the command line
+     * @param hasResults whether a map of results stands in for recordings
      * @return checked options
      * @throws UseCaseException where a value is out of range
      */
     GaitOptions options(
-            List<Path> standing, @Nullable Double stature, @Nullable String population, @Nullable String sex)
+            List<Path> standing,
+            @Nullable Double stature,
+            @Nullable String population,
+            @Nullable String sex,
+            boolean hasResults)
             throws UseCaseException {
+        Path map = inputs(hasResults);
         if (!events.equals("platform") && !events.equals("file") && !events.equals("kinematic")) {
             throw usage("--events", "'" + events + "' is unknown", "use platform, file or kinematic");
         }
@@ -111,7 +114,7 @@ final class GaitArguments {
         return new GaitOptions(
                 standing,
                 walking,
-                landmarks,
+                map,
                 optional(mass),
                 optional(stature),
                 population(population),
@@ -125,6 +128,23 @@ final class GaitArguments {
                 beltSpeed,
                 events,
                 annotate);
+    }
+
+    /** Recordings with a landmark map, or a map of results. */
+    private Path inputs(boolean hasResults) throws UseCaseException {
+        if (hasResults) {
+            if (!walking.isEmpty() || landmarks != null) {
+                throw usage("--results", "is given together with --walking or --landmarks", "give one of them");
+            }
+            return Path.of("");
+        }
+        if (walking.isEmpty()) {
+            throw usage("--walking", "is missing", "give a walking recording");
+        }
+        if (landmarks == null) {
+            throw usage("--landmarks", "is missing", "give a landmark map");
+        }
+        return landmarks;
     }
 
     private static OptionalDouble optional(@Nullable Double value) {

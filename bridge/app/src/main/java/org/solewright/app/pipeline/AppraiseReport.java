@@ -61,6 +61,8 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
         files.put("appraise-curves.csv", CurvesTable.bytes(result.curves()));
         List<Path> inputs = new ArrayList<>(request.gait().inputs());
         inputs.addAll(request.models());
+        inputs.addAll(request.tables());
+        request.results().ifPresent(inputs::add);
         List<Path> written = OutputFolder.of(out, inputs).write(files);
         List<String> lines = new ArrayList<>();
         result.cost().rows().stream()

@@ -49,14 +49,22 @@ public final class AppraiseUseCase {
      * What the user asked for.
      *
      * @param gait walking recordings
+     * @param results a map of results, instead of recordings
+     * @param tables files for tables of the map that name none
      * @param models foot models, at most one per side; may be empty
      * @param version version of the tool
      */
-    public record Request(GaitOptions gait, List<Path> models, String version) {
+    public record Request(
+            GaitOptions gait, Optional<Path> results, List<Path> tables, List<Path> models, String version) {
 
         /** Copies the list. */
         public Request {
+            tables = List.copyOf(tables);
             models = List.copyOf(models);
+        }
+
+        Request with(GaitOptions other) {
+            return new Request(other, results, tables, models, version);
         }
     }
 
@@ -81,7 +89,7 @@ public final class AppraiseUseCase {
     private static final String GIVEN = "given";
     private static final String DEFAULT = "default";
 
-    private final Request request;
+    private Request request;
     private final List<Finding> findings = new ArrayList<>();
     private final List<SourceFile> sources = new ArrayList<>();
     private final Map<Side, ModelLimb> models = new EnumMap<>(Side.class);
@@ -106,10 +114,18 @@ public final class AppraiseUseCase {
     }
 
     private Result run() throws UseCaseException, FormatException {
-        GaitOptions options = request.gait();
         readModels();
-        LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
-        InputFiles.Walking walked = InputFiles.walking(options.walking(), options.isFlagIgnored(), sources, findings);
+        Optional<ResultsRecording.Loaded> results = results();
+        GaitOptions options = request.gait();
+        LandmarkMap map;
+        InputFiles.Walking walked;
+        if (results.isPresent() && results.get().recording().isPresent()) {
+            map = results.get().map();
+            walked = new InputFiles.Walking(List.of(results.get().recording().get()), Map.of());
+        } else {
+            map = InputFiles.landmarkMap(options.landmarks(), sources);
+            walked = InputFiles.walking(options.walking(), options.isFlagIgnored(), sources, findings);
+        }
         List<Recording> walking = walked.recordings();
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
@@ -153,6 +169,17 @@ public final class AppraiseUseCase {
                 .distinct()
                 .toList();
         return new Result(cost, mechanics, postures, ContactOverrides.rows(subject.passes()), curves, failed);
+    }
+
+    /** Reads a map of results; mass and recordings that it states become options of the call. */
+    private Optional<ResultsRecording.Loaded> results() throws UseCaseException, FormatException {
+        if (request.results().isEmpty()) {
+            return Optional.empty();
+        }
+        ResultsRecording.Loaded loaded =
+                ResultsRecording.read(request.results().get(), request.tables(), sources, findings);
+        request = request.with(request.gait().of(loaded.files(), loaded.landmarks(), loaded.mass()));
+        return Optional.of(loaded);
     }
 
     private void annotate(Path folder, Map<String, Path> files, GaitSubject subject)

@@ -139,6 +139,8 @@ public final class DemoUseCase {
         GaitOptions walking = options.withoutStanding();
         AppraiseUseCase.Request appraise = new AppraiseUseCase.Request(
                 walking,
+                Optional.empty(),
+                List.of(),
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 version);
         lines.add("4. appraise");

@@ -79,6 +79,27 @@ public record GaitOptions(
                 annotate);
     }
 
+    /** The same with recordings and landmarks that a map of results names, and its mass where none was given. */
+    GaitOptions of(List<Path> files, Optional<Path> map, OptionalDouble stated) {
+        return new GaitOptions(
+                standing,
+                files,
+                map.orElse(landmarks),
+                mass.isPresent() ? mass : stated,
+                stature,
+                population,
+                sex,
+                contacts,
+                floor,
+                isMirrored,
+                markerRadius,
+                markerCutoff,
+                isFlagIgnored,
+                beltSpeed,
+                events,
+                annotate);
+    }
+
     /** All files of the call. */
     List<Path> inputs() {
         List<Path> all = new ArrayList<>(standing);

@@ -96,6 +96,8 @@ class RealRecordingTest {
         fitted = FitUseCase.run(request);
         AppraiseUseCase.Request cost = new AppraiseUseCase.Request(
                 options(List.of()),
+                Optional.empty(),
+                List.of(),
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 "test");
         appraisal = AppraiseReport.write(cost, folder);
@@ -287,6 +289,8 @@ class RealRecordingTest {
                         0,
                         "platform",
                         Optional.empty()),
+                Optional.empty(),
+                List.of(),
                 List.of(folder.resolve("foot-model-right.xml"), folder.resolve("foot-model-left.xml")),
                 "test"));
         for (int row = 0; row < 3; row++) {

@@ -12,6 +12,9 @@ import org.solewright.domain.geometry.Vec3;
  */
 public final class PlatformLoads {
 
+    /** Type of loads that no platform with borders measured, as those of a simulation. */
+    public static final int BORDERLESS = 0;
+
     private final int number;
     private final int type;
     private final List<Vec3> corners;
@@ -27,7 +30,7 @@ public final class PlatformLoads {
      * Loads of one platform.
      *
      * @param number number of the platform in the file, from 1
-     * @param type platform type of the C3D format
+     * @param type platform type of the C3D format; {@link #BORDERLESS} for loads whose surface has no known borders
      * @param corners four corners in the laboratory frame, m
      * @param up unit normal of the surface, away from the floor
      * @param rate samples per second, Hz, more than 0
@@ -85,9 +88,18 @@ public final class PlatformLoads {
     }
 
     /**
+     * Whether the corners are the platform's own.
+     *
+     * @return false where the surface has no known borders, so that no contact can be over one
+     */
+    public boolean hasBorders() {
+        return type != BORDERLESS;
+    }
+
+    /**
      * Platform type of the C3D format.
      *
-     * @return 1 to 7
+     * @return 1 to 7; {@link #BORDERLESS} for other loads
      */
     public int type() {
         return type;
