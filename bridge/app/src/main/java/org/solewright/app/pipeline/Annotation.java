@@ -1,7 +1,5 @@
 package org.solewright.app.pipeline;
 
-import java.io.IOException;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -85,15 +83,16 @@ final class Annotation {
     }
 
     /**
-     * Writes the file into a folder under its own name.
+     * Writes the file into a folder.
      *
      * @param source the recording
-     * @param folder made where it is missing
+     * @param folder of the annotated recordings
+     * @param trial name of the file there; recordings of one name are told apart
      * @return what has to be said
      * @throws UseCaseException where it cannot be written
      * @throws FormatException where the recording changed meanwhile
      */
-    List<Finding> write(Path source, Path folder) throws UseCaseException, FormatException {
+    List<Finding> write(Path source, OutputFolder folder, String trial) throws UseCaseException, FormatException {
         C3dFile file = InputFiles.read(source, C3dFile::read);
         for (PlatformLoads p : pass.trial().platforms()) {
             pressure(p, file.rate());
@@ -107,16 +106,6 @@ final class Annotation {
         C3dCopy.Wanted like = C3dCopy.Wanted.like(file);
         C3dCopy.Wanted wanted = new C3dCopy.Wanted(
                 like.processor(), like.isReal(), like.first(), like.last(), List.copyOf(points.values()), events);
-        try {
-            Files.createDirectories(folder);
-        } catch (IOException e) {
-            throw new UseCaseException(
-                    UseCaseException.Kind.OUTPUT,
-                    folder.toString(),
-                    "cannot be made a folder (" + e.getMessage() + ")",
-                    "give another --annotate",
-                    e);
-        }
-        return Conversion.copy(source, file, wanted, folder.resolve(file.name()));
+        return Conversion.copy(source, file, wanted, folder.place(trial));
     }
 }

@@ -184,6 +184,7 @@ public final class AppraiseUseCase {
 
     private void annotate(Path folder, Map<String, Path> files, GaitSubject subject)
             throws UseCaseException, FormatException {
+        OutputFolder annotated = OutputFolder.of(folder, request.gait().inputs());
         for (int i = 0; i < subject.passes().size(); i++) {
             Pass pass = subject.passes().get(i);
             LandmarkTracks tracks = subject.walking().get(i);
@@ -197,7 +198,8 @@ public final class AppraiseUseCase {
             }
             Path file = files.get(pass.trial().name());
             if (file != null) {
-                findings.addAll(annotation.write(file, folder));
+                findings.addAll(
+                        annotation.write(file, annotated, tracks.recording().name()));
             }
         }
     }

@@ -71,7 +71,7 @@ public record Conversion(String line, List<Finding> findings) {
                         "get a complete copy of the file");
             }
         }
-        FrameWindow window = file.frames() == 0
+        FrameWindow window = request.from().isEmpty() && request.to().isEmpty()
                 ? FrameWindow.whole(file)
                 : FrameWindow.of(request.file(), file, request.from(), request.to());
         C3dCopy.Wanted wanted = new C3dCopy.Wanted(

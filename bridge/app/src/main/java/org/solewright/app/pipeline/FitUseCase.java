@@ -180,6 +180,7 @@ public final class FitUseCase {
             Map<Side, StandingLimb> limbs,
             Map<Side, List<LimbMotion>> moved)
             throws UseCaseException, FormatException {
+        OutputFolder annotated = OutputFolder.of(folder, request.gait().inputs());
         for (int i = 0; i < subject.passes().size(); i++) {
             Pass pass = subject.passes().get(i);
             Annotation annotation =
@@ -193,7 +194,8 @@ public final class FitUseCase {
             }
             Path file = files.get(pass.trial().name());
             if (file != null) {
-                findings.addAll(annotation.write(file, folder));
+                findings.addAll(annotation.write(
+                        file, annotated, subject.walking().get(i).recording().name()));
             }
         }
     }

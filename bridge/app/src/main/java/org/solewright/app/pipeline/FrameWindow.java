@@ -36,6 +36,13 @@ record FrameWindow(int first, int last) {
      */
     static FrameWindow of(Path path, C3dFile file, Optional<String> from, Optional<String> to) throws UseCaseException {
         FrameWindow whole = whole(file);
+        if (file.frames() == 0 && (from.isPresent() || to.isPresent())) {
+            throw new UseCaseException(
+                    UseCaseException.Kind.USAGE,
+                    path.toString(),
+                    "has no frames to take a part of",
+                    "leave --from and --to out");
+        }
         int first = from.isPresent() ? frame(path, file, "--from", from.get(), whole.first, true) : whole.first;
         int last = to.isPresent() ? frame(path, file, "--to", to.get(), first, false) : whole.last;
         if (last < first) {

@@ -74,6 +74,19 @@ final class OutputFolder {
         return written;
     }
 
+    /**
+     * Where a file of this folder will lie.
+     *
+     * @param name of the file
+     * @return its place, which is no input of the call
+     * @throws UseCaseException where it would replace an input
+     */
+    Path place(String name) throws UseCaseException {
+        Path file = folder.resolve(name);
+        checkNoInput(file);
+        return file;
+    }
+
     private void checkNoInput(Path file) throws UseCaseException {
         for (Path input : inputs) {
             try {

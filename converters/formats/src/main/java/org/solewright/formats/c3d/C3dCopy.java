@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 import org.solewright.domain.finding.Finding;
@@ -112,7 +113,7 @@ public final class C3dCopy {
     }
 
     private ParameterSection section() throws FormatException {
-        ParameterSection s = ParameterSection.of(file.parameters());
+        ParameterSection s = ParameterSection.of(file.name(), file.parameters());
         int point = s.group("POINT", "Points in space");
         int points = file.points().points() + wanted.points().size();
         s.put(ParameterRecord.integers(point, "USED", "Points per frame", List.of(), points));
@@ -124,6 +125,18 @@ public final class C3dCopy {
         analog(s);
         if (wanted.first() > 0 || wanted.last() < file.frames() - 1) {
             baseline(s);
+        }
+        names(s, "POINT", file.points().points(), file.labels());
+        names(s, "ANALOG", file.analog().channels(), file.analogLabels());
+        if (s.find("ROTATION", "USED")
+                .filter(u -> u.numbers().stream().anyMatch(n -> n != 0))
+                .isPresent()) {
+            int rotation = s.group("ROTATION", "Segment orientations");
+            s.put(ParameterRecord.integers(rotation, "USED", "Number of segments", List.of(), 0));
+            findings.add(Finding.warning(
+                    "rotations.dropped",
+                    "ROTATION",
+                    "the segment orientations of the file are not written; their parameters stay, ROTATION:USED is 0"));
         }
         if (!wanted.points().isEmpty() || !wanted.events().isEmpty()) {
             new ComputedGroup(file, wanted, s, findings).add();
@@ -139,14 +152,29 @@ public final class C3dCopy {
         }
         s.put(ParameterRecord.integers(point, "DATA_START", "First block of the data", List.of(), signed(data)));
         requireVax(s);
+        s.requireLinks();
         return s;
+    }
+
+    /** Other readers want names and descriptions of whatever there is. */
+    private static void names(ParameterSection s, String group, int count, List<String> labels) throws FormatException {
+        if (count == 0) {
+            return;
+        }
+        int id = s.group(group, "");
+        if (s.find(group, "LABELS").isEmpty()) {
+            s.putLines(id, "LABELS", "Names", labels);
+        }
+        if (s.find(group, "DESCRIPTIONS").isEmpty()) {
+            s.putLines(id, "DESCRIPTIONS", "What they are", Collections.nCopies(count, ""));
+        }
     }
 
     private static int signed(int unsigned) {
         return (short) unsigned;
     }
 
-    private void frameCounts(ParameterSection s, int point) {
+    private void frameCounts(ParameterSection s, int point) throws FormatException {
         boolean isLong = frames > FIELD - 1;
         s.put(
                 isLong
@@ -173,7 +201,7 @@ public final class C3dCopy {
                 group, name, description, List.of(2), signed((int) (value % FIELD)), signed((int) (value / FIELD)));
     }
 
-    private void analog(ParameterSection s) {
+    private void analog(ParameterSection s) throws FormatException {
         int channels = file.analog().channels();
         if (channels == 0 && s.find("ANALOG", "USED").isEmpty()) {
             return;
@@ -192,6 +220,7 @@ public final class C3dCopy {
             continued(s, analog, "SCALE", "Scale of each channel", form.analogScales(), false);
             continued(s, analog, "OFFSET", "Offset of each channel", new double[channels], true);
             s.replace(ParameterRecord.texts(analog, "FORMAT", "Integers", List.of("SIGNED")));
+            s.replace(ParameterRecord.integers(analog, "BITS", "Bits of a sample", List.of(), 16));
         }
     }
 

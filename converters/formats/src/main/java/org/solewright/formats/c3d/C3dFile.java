@@ -105,6 +105,18 @@ public record C3dFile(
         return read(file, false, C3dReading.everything());
     }
 
+    /** Entries of the group EVENT that the file counts, also those without a time. */
+    int countedEvents() {
+        int stored = parameters.find("EVENT", "TIMES").map(t -> t.count() / 2).orElse(0);
+        return (int) parameters
+                .find("EVENT", "USED")
+                .map(u -> Math.min(u.unsigned(0), stored))
+                .filter(n -> !Double.isNaN(n))
+                .map(n -> Math.max(0, n))
+                .orElse((double) stored)
+                .doubleValue();
+    }
+
     private static C3dFile read(Path file, boolean withData, C3dReading reading) throws IOException, FormatException {
         Path last = file.getFileName();
         String name = last == null ? file.toString() : last.toString();

@@ -66,6 +66,11 @@ public final class C3dPoints {
         return w >= LOWEST && w <= HIGHEST_UNSIGNED ? (short) (int) w : 0;
     }
 
+    /** Whether the sample counts as seen although the file flags it as missing. */
+    boolean isFlagOverridden(int frame, int point) {
+        return !isFlagObeyed && isValid(frame, point) && word(first(frame, point)) < 0;
+    }
+
     /** What a step of the residual byte stands for, in the file's length unit. */
     double residualScale() {
         return residualScale;

@@ -15,7 +15,10 @@ final class FrameCount {
 
     private FrameCount() {}
 
-    /** What the file says, the most explicit statement first. */
+    /**
+     * What the file says, the most explicit statement first. A header whose last frame is the largest that it can name says
+     * nothing beside a parameter that says more.
+     */
     private static List<Long> statements(C3dHeader header, C3dParameters p) {
         List<Long> said = new ArrayList<>();
         Optional<Long> from = field(p, "ACTUAL_START_FIELD");
@@ -25,8 +28,10 @@ final class FrameCount {
         }
         add(said, p.number("POINT", "LONG_FRAMES"));
         p.find("POINT", "FRAMES").ifPresent(f -> add(said, f.unsigned(0)));
-        if (header.lastFrame() >= header.firstFrame()) {
-            said.add((long) header.lastFrame() - header.firstFrame() + 1);
+        long counted = (long) header.lastFrame() - header.firstFrame() + 1;
+        boolean isFull = header.lastFrame() == FIELD - 1 && said.stream().anyMatch(s -> s > counted);
+        if (counted > 0 && !isFull) {
+            said.add(counted);
         }
         return said;
     }
@@ -44,10 +49,11 @@ final class FrameCount {
                 .map(f -> (long) f.unsigned(0) + FIELD * (long) f.unsigned(1));
     }
 
-    /** First frame: TRIAL's where its low word is the header's, else the header's. */
+    /** First frame: TRIAL's where its low word is the header's or the header cannot name it, else the header's. */
     static int first(C3dHeader header, C3dParameters p) {
         Optional<Long> from = field(p, "ACTUAL_START_FIELD");
-        return from.filter(f -> f % FIELD == header.firstFrame() && f < Integer.MAX_VALUE)
+        return from.filter(f -> f < Integer.MAX_VALUE
+                        && (f % FIELD == header.firstFrame() || (f >= FIELD && header.firstFrame() == FIELD - 1)))
                 .map(Long::intValue)
                 .orElse(header.firstFrame());
     }

@@ -3,6 +3,7 @@ package org.solewright.formats.c3d;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 
 /**
@@ -90,12 +91,17 @@ record ParameterRecord(
                 "");
     }
 
+    /** A character for each byte of the text in UTF-8. */
+    static String stored(String text) {
+        return new String(text.getBytes(StandardCharsets.UTF_8), StandardCharsets.ISO_8859_1);
+    }
+
     /** Lines of text in UTF-8, padded to the longest, at most 255 of them. */
     static ParameterRecord texts(int id, String name, String description, List<String> lines) {
         int width = 1;
         List<String> bytes = new ArrayList<>();
         for (String line : lines) {
-            String latin = new String(line.getBytes(StandardCharsets.UTF_8), StandardCharsets.ISO_8859_1);
+            String latin = stored(line);
             latin = latin.length() > LONGEST ? latin.substring(0, LONGEST) : latin;
             bytes.add(latin);
             width = Math.max(width, latin.length());
@@ -106,6 +112,52 @@ record ParameterRecord(
         }
         return new ParameterRecord(
                 id, name, false, description, -1, List.of(width, lines.size()), List.of(), text.toString());
+    }
+
+    /** Lines of a text as stored, a character for each byte. */
+    static List<String> linesOf(C3dParameter p) {
+        int width = p.dimensions().isEmpty() ? 0 : p.dimensions().get(0);
+        if (p.dimensions().size() < 2 || width == 0) {
+            return p.isText() ? List.of(p.storedText()) : List.of();
+        }
+        List<String> lines = new ArrayList<>();
+        for (int at = 0; at + width <= p.storedText().length(); at += width) {
+            lines.add(p.storedText().substring(at, at + width));
+        }
+        return lines;
+    }
+
+    /**
+     * The same text with other lines from one place on.
+     *
+     * @param kept lines that stay
+     * @param added lines behind them, a character for each byte
+     */
+    ParameterRecord withLines(int kept, List<String> added) {
+        int width = dimensions.get(0);
+        List<String> lines = new ArrayList<>();
+        for (int k = 0; k < kept; k++) {
+            lines.add(text.substring(k * width, (k + 1) * width));
+        }
+        lines.addAll(added);
+        int longest = width;
+        for (String line : lines) {
+            longest = Math.max(longest, Math.min(LONGEST, line.length()));
+        }
+        StringBuilder all = new StringBuilder();
+        for (String line : lines) {
+            String fitting = line.substring(0, Math.min(longest, line.length()));
+            all.append(fitting).append(" ".repeat(longest - fitting.length()));
+        }
+        return new ParameterRecord(
+                id, name, isLocked, description, -1, List.of(longest, lines.size()), List.of(), all.toString());
+    }
+
+    /** A list of numbers with zeros behind it. */
+    ParameterRecord withZeros(int count) {
+        List<Double> more = new ArrayList<>(numbers);
+        more.addAll(Collections.nCopies(count, 0.0));
+        return new ParameterRecord(id, name, isLocked, description, width, List.of(more.size()), more, "");
     }
 
     /** The same under a description that the replaced record had. */

@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import org.solewright.formats.io.FormatException;
 
 /**
  * A parameter section to be written: the records of a file that was read, in their order, some of them replaced, some
@@ -21,21 +22,29 @@ final class ParameterSection {
     private static final int BLOCK = 512;
     private static final int MOST_BLOCKS = 255;
     private static final int LARGEST_LINK = 65535;
+    private static final int MOST_LINES = 255;
     private static final int MOST_GROUPS = 127;
 
     private final List<ParameterRecord> records = new ArrayList<>();
     private final Map<String, Integer> groups = new HashMap<>();
+    private final Map<Integer, String> names = new HashMap<>();
+    private final String source;
+
+    private ParameterSection(String source) {
+        this.source = source;
+    }
 
     /** The records of a file; groups that it did not declare are declared. */
-    static ParameterSection of(C3dParameters parameters) {
-        ParameterSection section = new ParameterSection();
-        Map<Integer, String> declared = new HashMap<>();
+    static ParameterSection of(String source, C3dParameters parameters) {
+        ParameterSection section = new ParameterSection(source);
+        Map<Integer, String> declared = section.names;
         for (C3dParameters.Entry e : parameters.entries()) {
             if (e.id() < 0) {
-                declared.put(-e.id(), e.name().trim().toUpperCase(Locale.ROOT));
+                String name = e.name().trim().toUpperCase(Locale.ROOT);
+                declared.put(-e.id(), name);
+                section.groups.putIfAbsent(name, -e.id());
             }
         }
-        declared.forEach((id, name) -> section.groups.putIfAbsent(name, id));
         for (C3dParameters.Entry e : parameters.entries()) {
             if (e.id() > 0 && !declared.containsKey(e.id())) {
                 declared.put(e.id(), "GROUP_" + e.id());
@@ -48,27 +57,30 @@ final class ParameterSection {
     }
 
     /** Makes sure that there is such a group and gives its number. */
-    int group(String name, String description) {
+    int group(String name, String description) throws FormatException {
         Integer known = groups.get(name);
         if (known != null) {
             return known;
         }
         int id = 1;
-        while (groups.containsValue(id)) {
+        while (names.containsKey(id)) {
             id++;
         }
         if (id > MOST_GROUPS) {
-            throw new IllegalArgumentException("the file has " + MOST_GROUPS + " groups already; none can be added");
+            throw new FormatException(
+                    source, "has " + MOST_GROUPS + " groups already and none can be added", "leave --annotate out");
         }
         groups.put(name, id);
+        names.put(id, name);
         records.add(ParameterRecord.group(id, name, description));
         return id;
     }
 
+    /** A group may be declared under two numbers; its parameters are one group's all the same. */
     private int find(int group, String name) {
         for (int i = 0; i < records.size(); i++) {
             ParameterRecord r = records.get(i);
-            if (r.id() == group && r.name().trim().toUpperCase(Locale.ROOT).equals(name)) {
+            if (isOf(r, group) && r.name().trim().toUpperCase(Locale.ROOT).equals(name)) {
                 return i;
             }
         }
@@ -111,6 +123,35 @@ final class ParameterSection {
         return List.copyOf(records);
     }
 
+    /** Lines of text in pieces of 255: NAME, NAME2, ... */
+    void putLines(int group, String name, String description, List<String> all) {
+        for (int from = 0, k = 1; from < all.size(); from += MOST_LINES, k++) {
+            put(ParameterRecord.texts(
+                    group,
+                    k == 1 ? name : name + k,
+                    description,
+                    all.subList(from, Math.min(all.size(), from + MOST_LINES))));
+        }
+    }
+
+    /** Whether a record is a parameter of a group. */
+    boolean isOf(ParameterRecord r, int group) {
+        return r.id() > 0 && names.getOrDefault(r.id(), "").equals(names.getOrDefault(group, ""));
+    }
+
+    /** Refuses what no link reaches over. */
+    void requireLinks() throws FormatException {
+        for (ParameterRecord r : records) {
+            if (r.bytesAfterName() > LARGEST_LINK) {
+                throw new FormatException(
+                        source,
+                        "parameter " + r.name().trim() + " takes " + r.bytesAfterName() + " bytes, more than the "
+                                + LARGEST_LINK + " that a link reaches over",
+                        "");
+            }
+        }
+    }
+
     int blocks() {
         long bytes = 4;
         for (ParameterRecord r : records) {
@@ -136,10 +177,6 @@ final class ParameterSection {
 
     private static void write(ByteArrayOutputStream out, ParameterRecord r, Processor processor, boolean isLast) {
         int next = r.bytesAfterName();
-        if (next > LARGEST_LINK && !isLast) {
-            throw new IllegalArgumentException(
-                    "parameter " + r.name() + " takes " + next + " bytes, expected at most " + LARGEST_LINK);
-        }
         ByteBuffer b = ByteBuffer.allocate(2 + r.name().length() + next)
                 .order(processor == Processor.MIPS ? ByteOrder.BIG_ENDIAN : ByteOrder.LITTLE_ENDIAN);
         b.put((byte) (r.isLocked() ? -r.name().length() : r.name().length()));

@@ -3,7 +3,9 @@ package org.solewright.formats.c3d;
 import java.io.IOException;
 import java.io.OutputStream;
 import java.util.List;
+import java.util.Locale;
 import org.solewright.domain.finding.Finding;
+import org.solewright.domain.geometry.Vec3;
 import org.solewright.formats.io.FormatException;
 
 /**
@@ -59,9 +61,11 @@ final class SampleForm {
         boolean isRescaled = !wanted.isReal() && file.isReal() && !isAnalogWhole(file);
         double stated = file.parameters().number("ANALOG", "GEN_SCALE");
         double general = Double.isNaN(stated) || stated == 0 ? 1 : stated;
-        double[] steps = isRescaled ? steps(file, general, findings) : new double[0];
+        double[] steps = isRescaled ? steps(file, wanted, perFrame, general, findings) : new double[0];
         SampleForm form = new SampleForm(file, wanted, perFrame, scale, 1 / metres, isRescaled, steps, general);
         form.check(findings);
+        form.checkAdded(findings);
+        form.sayStep(findings);
         return form;
     }
 
@@ -70,7 +74,7 @@ final class SampleForm {
         C3dPoints p = file.points();
         double farthest = 0;
         double residual = 0;
-        for (int frame = 0; frame < p.frames(); frame++) {
+        for (int frame = wanted.first(); frame <= wanted.last(); frame++) {
             for (int point = 0; point < p.points(); point++) {
                 if (p.isValid(frame, point)) {
                     for (int c = 0; c < 3; c++) {
@@ -81,16 +85,25 @@ final class SampleForm {
             }
         }
         for (AddedPoint a : wanted.points()) {
-            for (int frame = 0; frame < a.track().frames(); frame++) {
+            for (int frame = wanted.first(); frame <= wanted.last(); frame++) {
                 if (a.track().isValid(frame)) {
-                    var at = a.track().at(frame);
-                    double size = Math.max(Math.abs(at.x()), Math.max(Math.abs(at.y()), Math.abs(at.z())));
-                    farthest = Math.max(farthest, size / metres);
+                    farthest = Math.max(farthest, size(a.track().at(frame)) / metres);
                 }
             }
         }
-        // A float just above the quotient, so that the largest number does not round over the edge.
-        return Math.nextUp((float) Math.max(farthest / LARGEST, residual / LARGEST_BYTE));
+        return step(Math.max(farthest / LARGEST, residual / LARGEST_BYTE));
+    }
+
+    private static double size(Vec3 v) {
+        return Math.max(Math.abs(v.x()), Math.max(Math.abs(v.y()), Math.abs(v.z())));
+    }
+
+    /**
+     * A float just above the quotient, so that the largest number does not round over the edge; 1 where all is 0. A normal
+     * number, which every processor can hold.
+     */
+    private static double step(double quotient) {
+        return quotient == 0 ? 1 : Math.max(Float.MIN_NORMAL, Math.nextUp((float) quotient));
     }
 
     /** Whether all analog words are integers that 16 bits hold, as converters deliver them. */
@@ -114,13 +127,14 @@ final class SampleForm {
     }
 
     /** Quantisation step of each channel in its own unit. */
-    private static double[] steps(C3dFile file, double general, List<Finding> findings) {
+    private static double[] steps(
+            C3dFile file, C3dCopy.Wanted wanted, int perFrame, double general, List<Finding> findings) {
         C3dAnalog a = file.analog();
         double[] steps = new double[a.channels()];
         int lost = 0;
         for (int k = 0; k < steps.length; k++) {
             double largest = 0;
-            for (int i = 0; i < a.samples(); i++) {
+            for (int i = wanted.first() * perFrame; i < (wanted.last() + 1) * perFrame; i++) {
                 double v = Math.abs(a.value(i, k));
                 if (Double.isFinite(v)) {
                     largest = Math.max(largest, v);
@@ -128,8 +142,7 @@ final class SampleForm {
                     lost++;
                 }
             }
-            double step = Math.nextUp((float) (largest / LARGEST / Math.abs(general)));
-            steps[k] = largest == 0 ? 1 : step;
+            steps[k] = step(largest / LARGEST / Math.abs(general));
         }
         if (lost > 0) {
             findings.add(Finding.warning(
@@ -182,6 +195,42 @@ final class SampleForm {
                     "points.place-replaced",
                     "POINT",
                     places + " coordinates are no finite numbers; their samples are written as missing"));
+        }
+    }
+
+    /** A scale of the file that is kept, and VAX numbers, do not reach everywhere. */
+    private void checkAdded(List<Finding> findings) {
+        int out = 0;
+        for (AddedPoint a : wanted.points()) {
+            for (int frame = wanted.first(); frame <= wanted.last(); frame++) {
+                out += a.track().isValid(frame) && !isHeld(a.track().at(frame)) ? 1 : 0;
+            }
+        }
+        if (out > 0) {
+            findings.add(Finding.warning(
+                    "points.added-outside",
+                    "POINT",
+                    out + " computed samples lie farther out than the written numbers reach and are missing"));
+        }
+    }
+
+    private boolean isHeld(Vec3 metres) {
+        double size = size(metres) * unitsPerMetre;
+        return wanted.isReal() ? size < VaxFloat.TOO_LARGE : Math.rint(size / scale) <= LARGEST;
+    }
+
+    private void sayStep(List<Finding> findings) {
+        if (!wanted.isReal() && file.isReal() && file.frames() > 0) {
+            findings.add(Finding.note(
+                    "samples.quantised",
+                    "",
+                    "the points are written in steps of "
+                            + String.format(Locale.ROOT, "%.3g", scale)
+                            + (file.unit().isEmpty() ? "" : " " + file.unit())
+                            + (isAnalogRescaled
+                                    ? ", each analog channel in 32767 steps up to its largest value"
+                                    : ", the analog samples as they are")
+                            + "; half a step is lost at most"));
         }
     }
 
@@ -245,14 +294,15 @@ final class SampleForm {
             out.real(file.isReal() ? x : (float) (x * factor));
             out.real(file.isReal() ? y : (float) (y * factor));
             out.real(file.isReal() ? z : (float) (z * factor));
-            out.real(isVax && !(Math.abs(w) < VaxFloat.TOO_LARGE) ? 0 : w);
+            boolean isReplaced = p.isFlagOverridden(frame, point) || (isVax && !(Math.abs(w) < VaxFloat.TOO_LARGE));
+            out.real(isReplaced ? 0 : w);
             return;
         }
         if (isWordKept) {
             out.integer((int) x);
             out.integer((int) y);
             out.integer((int) z);
-            out.integer((int) w);
+            out.integer(p.isFlagOverridden(frame, point) ? 0 : (int) w);
             return;
         }
         if (!p.isValid(frame, point)) {
@@ -282,9 +332,9 @@ final class SampleForm {
     }
 
     private void added(WordOutput out, AddedPoint a, int frame) throws IOException {
-        boolean isValid = a.track().isValid(frame);
+        Vec3 at = a.track().at(frame);
+        boolean isValid = a.track().isValid(frame) && isHeld(at);
         for (int c = 0; c < 3; c++) {
-            var at = a.track().at(frame);
             double v = isValid ? (c == 0 ? at.x() : c == 1 ? at.y() : at.z()) * unitsPerMetre : 0;
             if (wanted.isReal()) {
                 out.real((float) v);

@@ -44,6 +44,7 @@ class C3dCopyTest {
             "ANALOG:SCALE",
             "ANALOG:OFFSET",
             "ANALOG:FORMAT",
+            "ANALOG:BITS",
             "TRIAL:ACTUAL_START_FIELD",
             "TRIAL:ACTUAL_END_FIELD");
 
@@ -72,6 +73,7 @@ class C3dCopyTest {
                 samePoints(how, file, copy);
                 sameAnalog(how, file, copy);
                 IndependentDecoder.compare(how, folder.resolve("copy.c3d"), copy);
+                IndependentDecoder.compareParameters(how, folder.resolve("copy.c3d"), file, OF_THE_FORM);
             }
         }
     }

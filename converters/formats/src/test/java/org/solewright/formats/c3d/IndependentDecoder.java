@@ -7,9 +7,12 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.HashMap;
+import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Set;
 
 /**
  * A second decoder of well-formed C3D files, written from the public format guide, that shares no code with the reader: byte
@@ -20,6 +23,9 @@ final class IndependentDecoder {
     private final byte[] file;
     private final int key;
     private final Map<String, Integer> values = new HashMap<>();
+    private final Map<String, Boolean> locks = new HashMap<>();
+    private final Map<String, Boolean> locked = new HashMap<>();
+    private final Map<Integer, Integer> shapes = new HashMap<>();
 
     private IndependentDecoder(byte[] file) {
         this.file = file;
@@ -74,7 +80,10 @@ final class IndependentDecoder {
                 groups.putIfAbsent(-id, name.toString().trim().toUpperCase(Locale.ROOT));
             } else {
                 int dimensions = byteAt(link + 3);
-                places.putIfAbsent(id + ":" + name.toString().trim().toUpperCase(Locale.ROOT), link + 4 + dimensions);
+                String key = id + ":" + name.toString().trim().toUpperCase(Locale.ROOT);
+                places.putIfAbsent(key, link + 4 + dimensions);
+                locks.putIfAbsent(key, file[at] < 0);
+                shapes.putIfAbsent(link + 4 + dimensions, link + 2);
             }
             if (word(link) == 0) {
                 break;
@@ -83,7 +92,9 @@ final class IndependentDecoder {
         }
         places.forEach((name, place) -> {
             int colon = name.indexOf(':');
-            values.putIfAbsent(groups.get(Integer.valueOf(name.substring(0, colon))) + name.substring(colon), place);
+            String full = groups.get(Integer.valueOf(name.substring(0, colon))) + name.substring(colon);
+            values.putIfAbsent(full, place);
+            locked.putIfAbsent(full, locks.getOrDefault(name, false));
         });
     }
 
@@ -92,6 +103,64 @@ final class IndependentDecoder {
                 DataInputStream data = new DataInputStream(in)) {
             new IndependentDecoder(data.readAllBytes()).compare(how, read);
         }
+    }
+
+    /**
+     * Holds every parameter of a file against what stands in its copy: width, shape, values, bytes of text, description and
+     * lock.
+     *
+     * @param source what was copied
+     * @param exceptFor names that the form of the copy decides
+     */
+    static void compareParameters(String how, Path copy, C3dFile source, Set<String> exceptFor) throws IOException {
+        IndependentDecoder decoder = new IndependentDecoder(Files.readAllBytes(copy));
+        for (C3dParameters.Entry e : source.parameters().entries()) {
+            if (e.parameter().isPresent()) {
+                C3dParameter p = e.parameter().get();
+                String name = p.group() + ":" + p.name();
+                if (!exceptFor.contains(name)) {
+                    decoder.compare(how + " " + name, name, e, p);
+                }
+            }
+        }
+    }
+
+    private void compare(String how, String name, C3dParameters.Entry e, C3dParameter p) {
+        assertThat(values).as(how).containsKey(name);
+        int at = values.get(name);
+        int shape = shapes.get(at);
+        int width = file[shape];
+        int count = 1;
+        List<Integer> dimensions = new ArrayList<>();
+        for (int k = 0; k < byteAt(shape + 1); k++) {
+            dimensions.add(byteAt(shape + 2 + k));
+            count *= byteAt(shape + 2 + k);
+        }
+        int stored = p.isText() ? p.storedText().length() : p.count();
+        assertThat(width).as(how).isEqualTo(p.width());
+        assertThat(count).as(how).isEqualTo(stored);
+        if (p.dimensions().stream().mapToLong(d -> d).reduce(1, (a, b) -> Math.min(1_000_000, a * b)) == stored) {
+            assertThat(dimensions).as(how).isEqualTo(p.dimensions());
+        }
+        StringBuilder text = new StringBuilder();
+        int wrong = 0;
+        for (int k = 0; k < count; k++) {
+            if (width < 0) {
+                text.append((char) byteAt(at + k));
+            } else {
+                double v = width == 1 ? file[at + k] : width == 2 ? signed(at + 2L * k) : real(at + 4L * k);
+                wrong += v == p.number(k) || Double.isNaN(v) ? 0 : 1;
+            }
+        }
+        assertThat(wrong).as(how).isZero();
+        assertThat(text.toString()).as(how).isEqualTo(p.storedText());
+        int behind = at + count * Math.abs(width);
+        StringBuilder description = new StringBuilder();
+        for (int k = 0; k < byteAt(behind); k++) {
+            description.append((char) byteAt(behind + 1 + k));
+        }
+        assertThat(description.toString()).as(how).isEqualTo(e.description());
+        assertThat(locked.get(name)).as(how).isEqualTo(e.isLocked());
     }
 
     private void compare(String how, C3dFile read) {
