@@ -72,6 +72,7 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
             lines.add("* " + ComparedPostures.THOUGHT_EXPERIMENT);
         }
         written.forEach(f -> lines.add("wrote " + f));
+        request.gait().annotate().ifPresent(d -> lines.add("wrote annotated recordings into " + d));
         lines.addAll(Cautions.LINES);
         return new AppraiseReport(lines, result.cost().findings(), result.failed());
     }

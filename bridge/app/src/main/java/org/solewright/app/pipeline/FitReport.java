@@ -71,6 +71,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
                         c.end(),
                         c.whole() ? "whole" : "not whole: " + c.why())));
         written.forEach(f -> lines.add("wrote " + f));
+        request.gait().annotate().ifPresent(d -> lines.add("wrote annotated recordings into " + d));
         lines.addAll(Cautions.LINES);
         return new FitReport(lines, result.findings(), result.failed());
     }

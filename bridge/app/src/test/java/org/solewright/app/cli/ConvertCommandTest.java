@@ -8,6 +8,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import org.junit.jupiter.api.Test;
+import org.solewright.domain.motion.RecordedEvent;
 import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.io.FormatException;
 
@@ -148,5 +149,64 @@ class ConvertCommandTest extends DemoCalls {
                 "--out",
                 to("annotated").toString());
         assertThat(mirrored.code()).isEqualTo(2);
+    }
+
+    @Test
+    void partFromOneEventToTheNextIsCutAtTheirFrames() throws IOException, FormatException {
+        Path notes = to("events");
+        assertThat(fit("--out", to("fitted").toString(), "--annotate", notes.toString())
+                        .code())
+                .isZero();
+        Path whole = notes.resolve("walking-1.c3d");
+        C3dFile file = C3dFile.read(whole);
+        double strike = first(file, "Right", "Foot Strike", 0);
+        double off = first(file, "Right", "Foot Off", strike);
+        Path part = to("stance.c3d");
+        Called c = call(
+                "convert",
+                whole.toString(),
+                "--out",
+                part.toString(),
+                "--from",
+                "Right:Foot Strike",
+                "--to",
+                "right foot off");
+        assertThat(c.code()).as(c.err()).isZero();
+        C3dFile cut = C3dFile.read(part);
+        // exact: frame n is at (n - 1) / rate.
+        assertThat(cut.firstFrame()).isEqualTo((int) Math.rint(strike * file.rate()) + 1);
+        assertThat(cut.firstFrame() + cut.frames() - 1).isEqualTo((int) Math.rint(off * file.rate()) + 1);
+        assertThat(cut.events()).isEqualTo(file.events());
+    }
+
+    private static double first(C3dFile file, String side, String label, double after) {
+        return file.events().stream()
+                .filter(e -> e.context().equals(side) && e.label().equals(label) && e.time() >= after)
+                .mapToDouble(RecordedEvent::time)
+                .min()
+                .orElseThrow();
+    }
+
+    @Test
+    void annotatedRecordingsOfOneNameStayApartAndNoInputIsReplaced() throws IOException {
+        Path other = Files.createDirectories(to("elsewhere")).resolve("walking-1.c3d");
+        Files.copy(demo.resolve("walking-2.c3d"), other);
+        Path notes = to("both");
+        Called c = fit("--walking", other.toString(), "--out", to("two").toString(), "--annotate", notes.toString());
+        assertThat(c.code()).as(c.err()).isZero();
+        assertThat(c.out()).contains("wrote annotated recordings into " + notes);
+        assertThat(notes.resolve("walking-1.c3d")).isNotEmptyFile();
+        assertThat(notes.resolve("walking-1#2.c3d")).isNotEmptyFile();
+        byte[] before = Files.readAllBytes(other);
+        Called refused = fit(
+                "--walking",
+                other.toString(),
+                "--out",
+                to("two").toString(),
+                "--annotate",
+                to("elsewhere").toString());
+        assertThat(refused.code()).isEqualTo(4);
+        assertThat(refused.err()).contains("is an input of this call and would be replaced");
+        assertThat(Files.readAllBytes(other)).isEqualTo(before);
     }
 }
