@@ -58,7 +58,9 @@ class C3dFuzzTest {
             read.toRecording();
             C3dCopy.write(read, C3dCopy.Wanted.like(read), copy);
             C3dFile again = C3dFile.read(copy);
-            if (again.frames() != read.frames() || !again.labels().equals(read.labels())) {
+            // Of a value that was cut what is left is written, which may have another shape.
+            boolean isCut = read.findings().stream().anyMatch(f -> f.code().equals("parameters.cut"));
+            if (again.frames() != read.frames() || (!isCut && !again.labels().equals(read.labels()))) {
                 throw new IllegalStateException("a written file reads otherwise than the one it was made of");
             }
         } catch (FormatException e) {

@@ -49,17 +49,29 @@ record ParameterRecord(
         for (int d : p.dimensions()) {
             shape = Math.min(shape * d, Integer.MAX_VALUE);
         }
-        // A value that was cut has the shape of what is left.
-        List<Integer> dimensions = shape == stored ? p.dimensions() : cut(p, stored);
+        boolean isCut = shape != stored;
+        // A value that was cut has the shape of what is left; of text the whole lines are left.
+        List<Integer> dimensions = isCut ? cut(p, stored) : p.dimensions();
+        String text = p.storedText();
+        int left = 1;
+        for (int d : isCut ? dimensions : List.<Integer>of()) {
+            left *= d;
+        }
+        if (isCut && p.isText()) {
+            text = text.substring(0, Math.min(left, text.length()));
+        } else if (isCut) {
+            numbers.subList(Math.min(left, numbers.size()), numbers.size()).clear();
+        }
         return new ParameterRecord(
-                e.id(), e.name(), e.isLocked(), e.description(), p.width(), dimensions, numbers, p.storedText());
+                e.id(), e.name(), e.isLocked(), e.description(), p.width(), dimensions, numbers, text);
     }
 
     private static List<Integer> cut(C3dParameter p, int stored) {
-        if (p.dimensions().size() < 2 || stored < p.dimensions().get(0)) {
+        int first = p.dimensions().isEmpty() ? 0 : p.dimensions().get(0);
+        if (p.dimensions().size() < 2 || (!p.isText() && stored < Math.max(1, first))) {
             return List.of(Math.min(stored, LONGEST));
         }
-        return List.of(p.dimensions().get(0), Math.min(stored / p.dimensions().get(0), LONGEST));
+        return List.of(first, first == 0 ? 0 : Math.min(stored / first, LONGEST));
     }
 
     static ParameterRecord group(int id, String name, String description) {

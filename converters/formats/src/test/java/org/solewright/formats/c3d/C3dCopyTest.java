@@ -9,6 +9,7 @@ import com.fasterxml.jackson.databind.JsonNode;
 import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -349,6 +350,22 @@ class C3dCopyTest {
                 .isInstanceOf(FormatException.class)
                 .hasMessageContaining("3.0E38")
                 .hasMessageContaining("no form in VAX numbers");
+    }
+
+    @Test
+    void textThatWasCutWithinALineComesBackWithItsWholeLines() throws IOException, FormatException {
+        byte[] bytes = Files.readAllBytes(Recordings.own("good.c3d"));
+        String all = new String(bytes, StandardCharsets.ISO_8859_1);
+        int at = all.indexOf("LABELS", 512) + 6;
+        // Lines of 255 characters do not fit: none is left whole, so that the points are numbered.
+        bytes[at + 4] = (byte) 255;
+        Path odd = folder.resolve("odd.c3d");
+        Files.write(odd, bytes);
+        C3dFile file = C3dFile.read(odd);
+        assertThat(file.findings()).extracting(Finding::code).contains("parameters.cut");
+        C3dFile copy = copied(file, C3dCopy.Wanted.like(file));
+        assertThat(copy.labels()).isEqualTo(file.labels());
+        assertThat(copy.findings()).extracting(Finding::code).doesNotContain("parameters.cut");
     }
 
     @Test
