@@ -13,6 +13,7 @@ import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Rolling;
+import org.solewright.domain.gait.CurveRow;
 import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.table.ContactsTable;
@@ -53,9 +54,9 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         Map<String, byte[]> files = new LinkedHashMap<>();
         result.models().forEach((side, m) -> files.put("foot-model-" + side.word() + ".xml", FootModelFile.bytes(m)));
         files.put("fit-contacts.csv", ContactsTable.bytes(result.contacts()));
-        files.put(
-                "fit-curves.csv",
-                CurvesTable.bytes(LoadCurves.of(result.subject().passes())));
+        List<CurveRow> curves = new ArrayList<>(LoadCurves.of(result.subject().passes()));
+        result.angles().values().forEach(a -> curves.addAll(a.rows()));
+        files.put("fit-curves.csv", CurvesTable.bytes(curves));
         List<Path> written = OutputFolder.of(out, request.gait().inputs()).write(files);
         List<String> lines = new ArrayList<>();
         result.models().values().forEach(m -> describe(lines, m));

@@ -75,6 +75,7 @@ public final class FitUseCase {
      * @param models by side
      * @param limbs the standing limbs by side
      * @param rollOvers what each side's stances showed
+     * @param angles joint angles over stance by side
      * @param contacts contact table
      * @param findings all findings, once each
      * @param failed names of inputs that failed
@@ -83,6 +84,7 @@ public final class FitUseCase {
             Map<Side, FootModel> models,
             Map<Side, StandingLimb> limbs,
             Map<Side, WalkingRollOver> rollOvers,
+            Map<Side, JointCurves> angles,
             GaitSubject subject,
             List<ContactRow> contacts,
             List<Finding> findings,
@@ -143,17 +145,19 @@ public final class FitUseCase {
         Map<Side, WalkingRollOver> rollOvers = new EnumMap<>(Side.class);
         Map<Side, Set<SegmentName>> observed = new EnumMap<>(Side.class);
         Map<Side, List<LimbMotion>> moved = new EnumMap<>(Side.class);
+        Map<Side, JointCurves> angles = new EnumMap<>(Side.class);
         for (Side side : sides) {
             StandingLimb limb = built(posture, mass, side, stood);
             requireSound(limb, standing.get(0));
             List<LimbMotion> motions = subject.walking().stream()
-                    .map(tracks -> LimbMotion.of(stood, tracks, side))
+                    .map(tracks -> LimbMotion.of(stood, tracks, limb))
                     .toList();
             WalkingRollOver rollOver = rollOver(limb, subject, motions, mass);
             moved.put(side, motions);
             observed.put(side, observed(motions));
             limbs.put(side, limb);
             rollOvers.put(side, rollOver);
+            angles.put(side, JointCurves.of(limb, posture, subject.passes(), motions));
         }
         findings.addAll(subject.findings());
         for (Side side : sides) {
@@ -162,7 +166,9 @@ public final class FitUseCase {
             Rolling rolling = rollOver.rolling();
             limb.findings().forEach(this::addOnce);
             rollOver.findings().forEach(this::addOnce);
-            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), get(observed, side)));
+            JointCurves curves = get(angles, side);
+            curves.findings().forEach(this::addOnce);
+            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), get(observed, side), curves));
         }
         if (options.annotate().isPresent()) {
             annotate(options.annotate().get(), walked.files(), subject, limbs, moved);
@@ -170,7 +176,14 @@ public final class FitUseCase {
         List<Finding> shared = List.copyOf(findings);
         models.replaceAll((side, m) -> withFindings(m, shared));
         return new Result(
-                models, limbs, rollOvers, subject, ContactOverrides.rows(subject.passes()), shared, failed(shared));
+                models,
+                limbs,
+                rollOvers,
+                angles,
+                subject,
+                ContactOverrides.rows(subject.passes()),
+                shared,
+                failed(shared));
     }
 
     private void annotate(
@@ -373,12 +386,17 @@ public final class FitUseCase {
             if (motion.foot().isPresent()) {
                 observed.add(SegmentName.FOOT);
             }
+            observed.addAll(motion.chain().observed());
         }
         return observed;
     }
 
     private FootModel model(
-            StandingLimb limb, Rolling rolling, Optional<Quantity> effectiveFootLength, Set<SegmentName> observed) {
+            StandingLimb limb,
+            Rolling rolling,
+            Optional<Quantity> effectiveFootLength,
+            Set<SegmentName> observed,
+            JointCurves curves) {
         FootModel standing = limb.model(request.version(), sources, Cautions.LINES);
         return new FootModel(
                 standing.side(),
@@ -396,7 +414,9 @@ public final class FitUseCase {
                                 g.length(),
                                 observed.contains(g.name())))
                         .toList(),
-                standing.joints(),
+                standing.joints().stream()
+                        .map(j -> j.withMotion(curves.range(j), curves.lock(j)))
+                        .toList(),
                 standing.landmarks(),
                 rolling,
                 standing.pads(),

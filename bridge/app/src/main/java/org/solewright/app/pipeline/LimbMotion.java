@@ -7,22 +7,30 @@ import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.domain.foot.Landmark;
+import org.solewright.domain.foot.Segment;
+import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.Side;
+import org.solewright.domain.geometry.Pose;
 import org.solewright.domain.geometry.Vec3;
 
 /**
- * The segments of one limb over one walking recording, by separate rigid fits to the standing trial.
+ * The segments of one limb over one walking recording: the chain fit gives their poses, separate rigid fits to the
+ * standing trial are its check and stand in where the chain is not known. The thigh is in the chain only where the shank
+ * alone has too few points, the pelvis never: a cluster that is rigid in itself but slides on the thigh as a whole has a
+ * small rms, and its weight 1/rms^2 would turn the shank after the skin of the thigh.
  *
  * @param shank knee to ankle; empty where fewer than three of its points are tracked
  * @param foot one rigid foot
  * @param pelvis carries the hip
  * @param thigh carries the hip where the pelvis is not tracked
+ * @param chain poses of the segments that hang together
  */
 record LimbMotion(
         Optional<SegmentTracking> shank,
         Optional<SegmentTracking> foot,
         Optional<SegmentTracking> pelvis,
-        Optional<SegmentTracking> thigh) {
+        Optional<SegmentTracking> thigh,
+        LimbChain chain) {
 
     private static final int FEWEST = 3;
     private static final List<Landmark> SHANK = List.of(
@@ -49,15 +57,49 @@ record LimbMotion(
             List.of(Landmark.ASIS, Landmark.PSIS, Landmark.SACRUM, Landmark.PELVIS_CLUSTER);
     private static final List<Landmark> THIGH = List.of(Landmark.THIGH_CLUSTER, Landmark.TROCHANTER_MAJOR);
 
-    static LimbMotion of(StandingTrial standing, LandmarkTracks walking, Side side) {
+    static LimbMotion of(StandingTrial standing, LandmarkTracks walking, StandingLimb limb) {
+        List<Side> own = List.of(limb.side());
+        Optional<SegmentTracking> pelvis = track(standing, walking, PELVIS, List.of(Side.LEFT, Side.RIGHT));
+        Optional<SegmentTracking> thigh = track(standing, walking, THIGH, own);
+        LimbChain chain = new LimbChain(limb, walking.recording().frames());
+        Points shank = points(standing, walking, SHANK, own);
+        if (thigh.isPresent() && shank.reference().size() < FEWEST) {
+            chain.add(LimbChain.THIGH, points(standing, walking, THIGH, own));
+        }
+        chain.add(SegmentName.SHANK.word(), shank);
+        for (Segment segment : limb.segments()) {
+            if (segment.name() != SegmentName.SHANK) {
+                chain.add(segment.name().word(), points(standing, walking, carried(limb, segment.name()), own));
+            }
+        }
+        chain.fit();
         return new LimbMotion(
-                track(standing, walking, SHANK, List.of(side)),
-                track(standing, walking, FOOT, List.of(side)),
-                track(standing, walking, PELVIS, List.of(Side.LEFT, Side.RIGHT)),
-                track(standing, walking, THIGH, List.of(side)));
+                track(standing, walking, SHANK, own), track(standing, walking, FOOT, own), pelvis, thigh, chain);
     }
 
-    private static Optional<SegmentTracking> track(
+    /** Landmarks that a segment of the foot carries; those of toes only where the toes are a segment of their own. */
+    private static List<Landmark> carried(StandingLimb limb, SegmentName segment) {
+        List<Landmark> landmarks = new ArrayList<>();
+        for (Landmark landmark : Landmark.values()) {
+            boolean isCarried = limb.landmarks().stream()
+                    .anyMatch(l -> l.segment() == segment
+                            && (l.name().equals(landmark.word()) || l.name().startsWith(landmark.word() + ".")));
+            if (isCarried && (FOOT.contains(landmark) || segment == SegmentName.TOES)) {
+                landmarks.add(landmark);
+            }
+        }
+        return landmarks;
+    }
+
+    /**
+     * Points of one segment that are both in the standing and in the walking recording.
+     *
+     * @param reference standing positions, m
+     * @param tracks walking positions, each {@code [frames][3]}, m
+     */
+    record Points(List<Vec3> reference, List<double[]> tracks) {}
+
+    private static Points points(
             StandingTrial standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
         List<Vec3> reference = new ArrayList<>();
         List<double[]> tracks = new ArrayList<>();
@@ -66,31 +108,52 @@ record LimbMotion(
             for (Side side : sides) {
                 for (String label : walking.labels(landmark, side)) {
                     Optional<Vec3> stood = standing.label(label);
-                    if (stood.isPresent() && !used.contains(label)) {
+                    Optional<double[]> track = walking.labelled(label);
+                    if (stood.isPresent() && track.isPresent() && !used.contains(label)) {
                         used.add(label);
                         reference.add(stood.get());
-                        walking.labelled(label).ifPresent(tracks::add);
+                        tracks.add(track.get());
                     }
                 }
             }
         }
-        if (reference.size() < FEWEST) {
+        return new Points(reference, tracks);
+    }
+
+    private static Optional<SegmentTracking> track(
+            StandingTrial standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
+        Points points = points(standing, walking, landmarks, sides);
+        if (points.reference().size() < FEWEST) {
             return Optional.empty();
         }
-        SegmentTracking tracking =
-                SegmentTracking.of(reference, tracks, walking.recording().frames());
+        SegmentTracking tracking = SegmentTracking.of(
+                points.reference(), points.tracks(), walking.recording().frames());
         return tracking.fitted() == 0 ? Optional.empty() : Optional.of(tracking);
     }
 
+    private static Optional<Vec3> at(Optional<Pose> chain, Optional<SegmentTracking> rigid, Vec3 standing, int frame) {
+        return chain.or(() -> rigid.flatMap(r -> r.pose(frame))).map(x -> x.transformPosition(standing));
+    }
+
+    /** Ankle centre in a frame. */
     Optional<Vec3> ankle(StandingLimb limb, int frame) {
-        return shank.flatMap(s -> s.at(limb.ankle().position(), frame));
+        return at(
+                chain.pose(SegmentName.SHANK.word(), frame), shank, limb.ankle().position(), frame);
     }
 
+    /** Knee centre in a frame. */
     Optional<Vec3> knee(StandingLimb limb, int frame) {
-        return shank.flatMap(s -> s.at(limb.knee().position(), frame));
+        return at(
+                chain.pose(SegmentName.SHANK.word(), frame), shank, limb.knee().position(), frame);
     }
 
+    /** Hip centre in a frame, carried by the pelvis, else by the thigh. */
     Optional<Vec3> hip(StandingLimb limb, int frame) {
         return pelvis.or(() -> thigh).flatMap(s -> s.at(limb.hip().position(), frame));
+    }
+
+    /** Pose of the foot, or of its rearmost segment, from standing to a frame. */
+    Optional<Pose> rearfoot(StandingLimb limb, int frame) {
+        return chain.pose(limb.segments().get(1).name().word(), frame).or(() -> foot.flatMap(f -> f.pose(frame)));
     }
 }

@@ -108,7 +108,8 @@ final class PoseChecks {
         double sum = 0;
         int n = 0;
         for (int at : stanceFrames(pass, limb.side())) {
-            Optional<Vec3> byShank = motion.ankle(limb, at);
+            Optional<Vec3> byShank =
+                    motion.shank().flatMap(s -> s.at(limb.ankle().position(), at));
             Optional<Vec3> byFoot = motion.foot().flatMap(f -> f.at(limb.ankle().position(), at));
             if (byShank.isPresent() && byFoot.isPresent()) {
                 double d = byShank.get().distance(byFoot.get());

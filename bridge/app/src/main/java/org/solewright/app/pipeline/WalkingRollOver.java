@@ -87,8 +87,7 @@ final class WalkingRollOver {
                 break;
             }
             if (load.get().vertical() > leastLoad) {
-                motion.foot()
-                        .flatMap(f -> f.pose(at))
+                motion.rearfoot(limb, at)
                         .map(x -> inFoot(x.inversePosition(load.get().centreOfPressure())))
                         .ifPresent(track::add);
             }

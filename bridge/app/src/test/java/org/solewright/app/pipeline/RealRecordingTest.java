@@ -17,12 +17,14 @@ import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.solewright.analysis.fitting.InertiaTable;
+import org.solewright.analysis.fitting.RollOver;
 import org.solewright.domain.cost.TransitionRow;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.gait.ContactRow;
+import org.solewright.domain.gait.CurveRow;
 import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.gait.Use;
@@ -228,11 +230,55 @@ class RealRecordingTest {
             FootModel model = FootModelFile.read(folder.resolve("foot-model-" + side.word() + ".xml"));
             for (Rolling.Frame frame : Rolling.Frame.values()) {
                 Rolling.Arc arc = model.rolling().arc(frame).orElseThrow();
-                assertThat(arc.radius()).isFinite().isPositive();
+                assertThat(arc.radius())
+                        .as(side + " " + frame)
+                        .isBetween(
+                                frame == Rolling.Frame.SHANK ? 0.24 : 0.21, frame == Rolling.Frame.SHANK ? 0.36 : 0.31);
                 assertThat(arc.radiusSd()).isPresent();
                 assertThat(arc.radiusSd().getAsDouble()).isFinite();
             }
             assertThat(model.cautions()).isNotEmpty();
+        }
+    }
+
+    @Test
+    void everyStanceHasItsRadiiByTheChainPose() {
+        for (Side side : Side.values()) {
+            List<WalkingRollOver.Shapes> shapes = Optional.ofNullable(
+                            fitted.rollOvers().get(side))
+                    .orElseThrow()
+                    .shapes();
+            assertThat(shapes).hasSize(2);
+            for (WalkingRollOver.Shapes s : shapes) {
+                assertThat(RollOver.common(Rolling.Frame.SHANK, List.of(s.shank()))
+                                .radius())
+                        .as(side + " shank")
+                        .isBetween(0.24, 0.36);
+                assertThat(RollOver.common(Rolling.Frame.LIMB, List.of(s.limb().orElseThrow()))
+                                .radius())
+                        .as(side + " limb")
+                        .isBetween(0.21, 0.31);
+            }
+        }
+    }
+
+    @Test
+    void ankleAnglesOfStanceAreThoseOfWalking() throws IOException, FormatException {
+        // common practice, ankle in stance, from memory: some 5-10 deg plantarflexed after contact, 10 deg
+        // dorsiflexed before heel rise, 20 deg plantarflexed at toe-off; 12 deg wide for barefoot and for one person.
+        for (Side side : Side.values()) {
+            List<CurveRow> mean = Optional.ofNullable(fitted.angles().get(side)).orElseThrow().rows().stream()
+                    .filter(r ->
+                            r.curve().equals("ankle-dorsiflexion") && r.step().equals("mean"))
+                    .toList();
+            assertThat(mean).hasSize(101);
+            double most = mean.stream().mapToDouble(CurveRow::mean).max().orElseThrow();
+            double least = mean.stream().mapToDouble(CurveRow::mean).min().orElseThrow();
+            assertThat(most).isBetween(0.0, 22.0);
+            assertThat(least).isBetween(-32.0, -5.0);
+            FootModel model = FootModelFile.read(folder.resolve("foot-model-" + side.word() + ".xml"));
+            assertThat(model.joints().get(0).range().orElseThrow().max())
+                    .isCloseTo(Math.toRadians(most), org.assertj.core.api.Assertions.within(1e-12));
         }
     }
 
