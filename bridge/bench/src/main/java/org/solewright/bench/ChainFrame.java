@@ -37,8 +37,8 @@ public class ChainFrame {
             Vec3 joint = new Vec3(0.02 * s, 1 - 0.3 * s, 0);
             List<Vec3> points = new ArrayList<>();
             for (int k = 0; k < POINTS; k++) {
-                points.add(joint.plus(new Vec3(
-                        0.1 * random.nextGaussian(), 0.3 * random.nextDouble(), 0.1 * random.nextGaussian())));
+                points.add(joint.plus(
+                        new Vec3(0.1 * random.nextGaussian(), 0.3 * random.nextDouble(), 0.1 * random.nextGaussian())));
             }
             segments.add(new ChainModel.Segment(s - 1, joint, Optional.empty(), points, 1e5));
         }

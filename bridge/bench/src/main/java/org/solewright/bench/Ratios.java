@@ -51,6 +51,9 @@ public final class Ratios {
                 "TransitionStep.bare",
                 "transition step over bare formula, at most 3");
         ratio(out, times, "SolveFile.jackson", "SolveFile.solve", "JSON alone over solve, at least 0.3");
+        ratio(out, times, "C3dDecode.plain", "C3dDecode.read", "plainest loop over reading C3D, at least 0.5");
+        ratio(out, times, "C3dDecode.copy", "C3dDecode.read", "bytes alone over reading C3D");
+        limit(out, times, "C3dDecode.header", 50_000, "header of a large file over 50 ms, at most 1");
         limit(out, times, "Models.landscape", 1e6, "million rows of a landscape over 1 s, at most 1");
         limit(out, times, "Models.levelGait", 50, "level gait over 50 us, at most 1");
         limit(out, times, "Models.walker", 5000, "walker with eigenvalues over 5 ms, at most 1");
