@@ -269,7 +269,7 @@ public final class C3dCopy {
                 if (r.width() == 4 && !(Math.abs(v) < VaxFloat.TOO_LARGE)) {
                     throw new FormatException(
                             file.name(),
-                            "parameter " + r.name() + " holds " + v + ", which has no form in VAX numbers",
+                            "parameter " + r.plainName() + " holds " + v + ", which has no form in VAX numbers",
                             "write it for another processor");
                 }
             }

@@ -49,29 +49,49 @@ record ParameterRecord(
         for (int d : p.dimensions()) {
             shape = Math.min(shape * d, Integer.MAX_VALUE);
         }
-        boolean isCut = shape != stored;
-        // A value that was cut has the shape of what is left; of text the whole lines are left.
-        List<Integer> dimensions = isCut ? cut(p, stored) : p.dimensions();
-        String text = p.storedText();
-        int left = 1;
-        for (int d : isCut ? dimensions : List.<Integer>of()) {
-            left *= d;
+        if (shape == stored) {
+            return new ParameterRecord(
+                    e.id(),
+                    e.name(),
+                    e.isLocked(),
+                    e.description(),
+                    p.width(),
+                    p.dimensions(),
+                    numbers,
+                    p.storedText());
         }
-        if (isCut && p.isText()) {
-            text = text.substring(0, Math.min(left, text.length()));
-        } else if (isCut) {
-            numbers.subList(Math.min(left, numbers.size()), numbers.size()).clear();
-        }
+        List<Integer> dimensions = cut(p, stored);
+        int kept = dimensions.stream().reduce(1, (a, b) -> a * b);
         return new ParameterRecord(
-                e.id(), e.name(), e.isLocked(), e.description(), p.width(), dimensions, numbers, text);
+                e.id(),
+                e.name(),
+                e.isLocked(),
+                e.description(),
+                p.width(),
+                dimensions,
+                numbers.subList(0, Math.min(kept, numbers.size())),
+                p.storedText().substring(0, Math.min(kept, p.storedText().length())));
     }
 
+    /** The shape of a value that was cut: whole lines of it, of numbers a plain list where that holds more. */
     private static List<Integer> cut(C3dParameter p, int stored) {
-        int first = p.dimensions().isEmpty() ? 0 : p.dimensions().get(0);
-        if (p.dimensions().size() < 2 || (!p.isText() && stored < Math.max(1, first))) {
-            return List.of(Math.min(stored, LONGEST));
+        boolean isLines = p.isText() && p.dimensions().size() > 1;
+        List<Integer> best = isLines ? List.of(p.dimensions().get(0), 0) : List.of(Math.min(stored, LONGEST));
+        long most = isLines ? 0 : best.get(0);
+        long leading = 1;
+        for (int k = 1; k < p.dimensions().size(); k++) {
+            leading *= p.dimensions().get(k - 1);
+            if (leading == 0 || leading > stored) {
+                break;
+            }
+            long last = Math.min(LONGEST, stored / leading);
+            if (leading * last >= most) {
+                most = leading * last;
+                best = new ArrayList<>(p.dimensions().subList(0, k));
+                best.add((int) last);
+            }
         }
-        return List.of(first, first == 0 ? 0 : Math.min(stored / first, LONGEST));
+        return best;
     }
 
     static ParameterRecord group(int id, String name, String description) {
@@ -176,6 +196,11 @@ record ParameterRecord(
     ParameterRecord like(ParameterRecord replaced) {
         return new ParameterRecord(
                 replaced.id, replaced.name, replaced.isLocked, replaced.description, width, dimensions, numbers, text);
+    }
+
+    /** The name for a message: one line, whatever the file holds. */
+    String plainName() {
+        return name.trim().replaceAll("\\p{Cntrl}", "?");
     }
 
     /** Bytes from the link word on: link, value, description. */

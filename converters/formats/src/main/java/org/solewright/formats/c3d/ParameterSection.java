@@ -145,7 +145,7 @@ final class ParameterSection {
             if (r.bytesAfterName() > LARGEST_LINK) {
                 throw new FormatException(
                         source,
-                        "parameter " + r.name().trim() + " takes " + r.bytesAfterName() + " bytes, more than the "
+                        "parameter " + r.plainName() + " takes " + r.bytesAfterName() + " bytes, more than the "
                                 + LARGEST_LINK + " that a link reaches over",
                         "");
             }

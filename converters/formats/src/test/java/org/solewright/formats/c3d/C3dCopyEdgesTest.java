@@ -12,6 +12,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
 import org.junit.jupiter.api.Test;
@@ -418,5 +419,26 @@ class C3dCopyEdgesTest {
         assertThatThrownBy(() -> copied(large, C3dCopy.Wanted.like(large)))
                 .isInstanceOf(FormatException.class)
                 .hasMessageContaining("parameter LARGE takes 8001");
+    }
+
+    private static ParameterRecord record(int width, List<Integer> shape, double[] numbers, String text) {
+        C3dParameter p = new C3dParameter("G", "CUT", width, shape, numbers, List.of(), text);
+        return ParameterRecord.of(new C3dParameters.Entry(1, "CUT\n", false, "", Optional.of(p)));
+    }
+
+    @Test
+    void valueThatWasCutIsWrittenWithAShapeThatHoldsIt() {
+        // exact: ten characters are two whole lines of four; 7 numbers are no whole rows of 2, 8 are four.
+        ParameterRecord lines = record(-1, List.of(4, 3), new double[0], "abcdefghij");
+        assertThat(lines.dimensions()).containsExactly(4, 2);
+        assertThat(lines.text()).isEqualTo("abcdefgh");
+        assertThat(record(-1, List.of(21, 5), new double[0], "abc").dimensions())
+                .containsExactly(21, 0);
+        assertThat(record(2, List.of(2, 5), new double[7], "").dimensions()).containsExactly(7);
+        assertThat(record(2, List.of(2, 5), new double[8], "").dimensions()).containsExactly(2, 4);
+        ParameterRecord deep = record(4, List.of(2, 200, 3), new double[1100], "");
+        assertThat(deep.dimensions()).containsExactly(2, 200, 2);
+        assertThat(deep.numbers()).hasSize(800);
+        assertThat(deep.plainName()).isEqualTo("CUT");
     }
 }
