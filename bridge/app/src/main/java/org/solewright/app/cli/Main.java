@@ -26,6 +26,7 @@ import picocli.CommandLine.ScopeType;
             AppraiseCommand.class,
             PosturesCommand.class,
             SolveCommand.class,
+            SprawlCommand.class,
             DemoCommand.class,
         })
 public final class Main {

@@ -3,7 +3,6 @@ package org.solewright.app.pipeline;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
 import org.solewright.domain.cost.LandscapeRow;
 
 /**
@@ -33,7 +32,7 @@ final class LandscapePlot {
     private final double lastX;
     private final double firstX;
     private final double greatest;
-    private final StringBuilder svg = new StringBuilder();
+    private final SvgText svg = new SvgText();
 
     private LandscapePlot(List<Curve> curves) {
         this.curves = curves;
@@ -299,17 +298,14 @@ final class LandscapePlot {
     }
 
     private void text(double x, double y, String anchor, String content, String more) {
-        line("<text x=\"" + number(x) + "\" y=\"" + number(y) + "\" text-anchor=\"" + anchor + "\"" + more + ">"
-                + content + "</text>");
+        svg.text(x, y, anchor, content, more);
     }
 
     private void line(String text) {
-        svg.append(text).append('\n');
+        svg.line(text);
     }
 
-    /** Four significant decimals are finer than a pixel and than a reader needs. */
     private static String number(double value) {
-        String text = String.format(Locale.ROOT, "%.4f", value);
-        return text.replaceAll("\\.?0+$", "");
+        return SvgText.number(value);
     }
 }
