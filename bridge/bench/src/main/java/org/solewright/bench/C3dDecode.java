@@ -4,11 +4,10 @@ import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.FloatBuffer;
+import java.nio.ShortBuffer;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
-import java.util.Arrays;
-import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.TimeUnit;
 import org.openjdk.jmh.annotations.Benchmark;
@@ -16,130 +15,153 @@ import org.openjdk.jmh.annotations.BenchmarkMode;
 import org.openjdk.jmh.annotations.Level;
 import org.openjdk.jmh.annotations.Mode;
 import org.openjdk.jmh.annotations.OutputTimeUnit;
+import org.openjdk.jmh.annotations.Param;
 import org.openjdk.jmh.annotations.Scope;
 import org.openjdk.jmh.annotations.Setup;
 import org.openjdk.jmh.annotations.State;
 import org.openjdk.jmh.annotations.TearDown;
-import org.solewright.domain.gait.PlatformLoads;
-import org.solewright.domain.geometry.Vec3;
-import org.solewright.domain.motion.PointTrack;
-import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.c3d.C3dReading;
-import org.solewright.formats.c3d.C3dWriter;
 import org.solewright.formats.io.FormatException;
 
-/** A real file of 170 MB (60 points, 42 channels at 10 samples a frame) against the plainest loop over the same bytes. */
+/** Reading C3D files against the plainest loop over the same bytes and against a plain copy of them. */
 @State(Scope.Benchmark)
 @BenchmarkMode(Mode.AverageTime)
 @OutputTimeUnit(TimeUnit.MICROSECONDS)
 public class C3dDecode {
 
-    private static final int FRAMES = 65_000;
-    private static final int POINTS = 60;
-    private static final int PLATFORMS = 7;
-    private static final int PER_FRAME = 10;
+    /** Stands for the generated file of 200 MiB. */
+    static final String GENERATED = "generated";
 
-    private Path file = Path.of("");
+    /** Recordings of the shared folder: large and small reals, integers. */
+    static final String[] SHARED = {"s00-human-sample.c3d", "s34-albertoreal.c3d", "s34-albertoint.c3d"};
 
-    /**
-     * Writes the file.
-     *
-     * @throws IOException where the folder for temporary files cannot be used
-     */
-    @Setup(Level.Trial)
-    public void write() throws IOException {
-        List<PointTrack> points = new ArrayList<>();
-        double[] xyz = new double[3 * FRAMES];
-        for (int k = 0; k < POINTS; k++) {
-            double start = k;
-            Arrays.setAll(xyz, i -> Math.sin(0.001 * i + start));
-            points.add(PointTrack.of("P" + k, xyz));
+    /** Which file: the generated one or a recording of the shared folder. */
+    @Param(GENERATED)
+    public String file = GENERATED;
+
+    private Path folder = Path.of("");
+    private Path path = Path.of("");
+    private boolean isReal;
+    private String label = "";
+
+    /** A recording beside the checkout; empty where it is absent. */
+    static Optional<Path> shared(String name) {
+        String named = System.getProperty("solewright.shared", "");
+        if (!named.isEmpty()) {
+            return Optional.of(Path.of(named, "c3d", "files", name)).filter(Files::isRegularFile);
         }
-        List<PlatformLoads> platforms = new ArrayList<>();
-        double[] load = new double[3 * FRAMES * PER_FRAME];
-        Arrays.setAll(load, i -> 400 + 300 * Math.sin(0.0003 * i));
-        for (int k = 0; k < PLATFORMS; k++) {
-            List<Vec3> corners =
-                    List.of(new Vec3(k + 0.9, 0.5, 0), new Vec3(k, 0.5, 0), new Vec3(k, 0, 0), new Vec3(k + 0.9, 0, 0));
-            platforms.add(new PlatformLoads(k + 1, 2, corners, Vec3.Z, 1000, 0, true, load, new double[load.length]));
+        for (Path p = Path.of("").toAbsolutePath(); p != null; p = p.getParent()) {
+            Path found = p.resolve(Path.of("shared", "c3d", "files", name));
+            if (Files.isRegularFile(found)) {
+                return Optional.of(found);
+            }
         }
-        file = Files.createTempFile("solewright-bench", ".c3d");
-        C3dWriter.write(file, new Recording("bench.c3d", 100, 1, FRAMES, points, platforms, List.of(), List.of()));
+        return Optional.empty();
     }
 
     /**
-     * Removes the file.
+     * Finds or writes the file.
+     *
+     * @throws IOException where the folder for temporary files cannot be used
+     * @throws FormatException where the file is broken
+     */
+    @Setup(Level.Trial)
+    public void find() throws IOException, FormatException {
+        if (file.equals(GENERATED)) {
+            folder = Files.createTempDirectory("solewright-bench");
+            path = folder.resolve("generated.c3d");
+            GeneratedRecording.write(path);
+        } else {
+            path = shared(file).orElseThrow(() -> new IllegalStateException(file + " is not there"));
+        }
+        C3dFile header = C3dFile.readHeader(path);
+        isReal = header.isReal();
+        label = header.labels().get(0);
+    }
+
+    /**
+     * Removes what was written.
      *
      * @throws IOException where it cannot be removed
      */
     @TearDown(Level.Trial)
     public void remove() throws IOException {
-        Files.deleteIfExists(file);
+        if (file.equals(GENERATED)) {
+            Files.deleteIfExists(path);
+            Files.deleteIfExists(folder);
+        }
     }
 
     /**
      * The reader.
      *
-     * @return the file's content
-     * @throws IOException where it cannot be read
-     * @throws FormatException never
+     * @return the file
+     * @throws IOException where it fails
+     * @throws FormatException where the file is broken
      */
     @Benchmark
     public C3dFile read() throws IOException, FormatException {
-        return C3dFile.read(file);
+        return C3dFile.read(path);
     }
 
     /**
-     * The plainest loop: all bytes read, every real widened.
+     * One point without analog samples.
      *
-     * @return the reals
-     * @throws IOException where the file cannot be read
+     * @return the file
+     * @throws IOException where it fails
+     * @throws FormatException where the file is broken
      */
     @Benchmark
-    public double[] plain() throws IOException {
-        FloatBuffer reals = ByteBuffer.wrap(Files.readAllBytes(file))
-                .order(ByteOrder.LITTLE_ENDIAN)
-                .asFloatBuffer();
-        double[] all = new double[reals.remaining()];
-        for (int i = 0; i < all.length; i++) {
-            all[i] = reals.get(i);
-        }
-        return all;
-    }
-
-    /**
-     * The bytes alone.
-     *
-     * @return the bytes
-     * @throws IOException where the file cannot be read
-     */
-    @Benchmark
-    public byte[] copy() throws IOException {
-        return Files.readAllBytes(file);
+    public C3dFile readOnePoint() throws IOException, FormatException {
+        return C3dFile.read(path, C3dReading.only(Set.of(label)));
     }
 
     /**
      * Header and parameters.
      *
      * @return the file without samples
-     * @throws IOException where it cannot be read
-     * @throws FormatException never
+     * @throws IOException where it fails
+     * @throws FormatException where the file is broken
      */
     @Benchmark
-    public C3dFile header() throws IOException, FormatException {
-        return C3dFile.readHeader(file);
+    public C3dFile readHeader() throws IOException, FormatException {
+        return C3dFile.readHeader(path);
     }
 
     /**
-     * Two of the sixty points.
+     * All bytes, every word of them widened.
      *
-     * @return the file with these points
-     * @throws IOException where it cannot be read
-     * @throws FormatException never
+     * @return the words
+     * @throws IOException where it fails
      */
     @Benchmark
-    public C3dFile twoPoints() throws IOException, FormatException {
-        return C3dFile.read(file, C3dReading.only(Set.of("P3", "P40")));
+    public double[] plain() throws IOException {
+        ByteBuffer bytes = ByteBuffer.wrap(Files.readAllBytes(path)).order(ByteOrder.LITTLE_ENDIAN);
+        if (!isReal) {
+            ShortBuffer words = bytes.asShortBuffer();
+            double[] wide = new double[words.remaining()];
+            for (int i = 0; i < wide.length; i++) {
+                wide[i] = words.get(i);
+            }
+            return wide;
+        }
+        FloatBuffer words = bytes.asFloatBuffer();
+        double[] wide = new double[words.remaining()];
+        for (int i = 0; i < wide.length; i++) {
+            wide[i] = words.get(i);
+        }
+        return wide;
+    }
+
+    /**
+     * All bytes, copied once in memory.
+     *
+     * @return the copy
+     * @throws IOException where it fails
+     */
+    @Benchmark
+    public byte[] copy() throws IOException {
+        return Files.readAllBytes(path).clone();
     }
 }
