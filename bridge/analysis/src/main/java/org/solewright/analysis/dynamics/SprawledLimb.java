@@ -14,6 +14,9 @@ import org.solewright.analysis.numerics.EllipticIntegral;
  */
 public final class SprawledLimb {
 
+    /** Square of the knee's speed over that of the hip that is rounding alone: (8 units in the last place)^2. */
+    private static final double REST = 3e-30;
+
     private static final double TOLERANCE = 1e-13;
     private static final int QUATERNION = 4;
     /** Rolled angle, rad, beyond which the integration is neither quick nor exact. */
@@ -159,13 +162,16 @@ public final class SprawledLimb {
      * Curvature of the track, to the left positive.
      *
      * @param time from the start of the stance, s
-     * @return 1/m; infinite or not a number at a cusp
+     * @return 1/m; not a number at a cusp, where the knee stands still within rounding
      */
     public double curvature(double time) {
         double half = Math.sin(angle(time) / 2);
         double d = advance() - sweep();
         double square = d * d + 4 * advance() * sweep() * half * half;
         double turned = sweep() - advance() * Math.cos(angle(time));
+        if (square <= REST * advance() * advance()) {
+            return Double.NaN;
+        }
         return 2 * protraction * sweep() * turned / (square * Math.sqrt(square));
     }
 

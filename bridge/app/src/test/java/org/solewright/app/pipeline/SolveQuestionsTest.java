@@ -4,9 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import com.fasterxml.jackson.databind.JsonNode;
-import com.fasterxml.jackson.databind.json.JsonMapper;
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -22,19 +20,11 @@ class SolveQuestionsTest {
     private static final double ROUNDING = 1e-13;
 
     private static JsonNode ask(String question, String inputs) throws IOException, FormatException {
-        String json =
-                "{\"id\": 1, \"question\": \"" + question + "\", \"inputs\": {" + inputs.replace('\'', '"') + "}}";
-        String answers = new SolveQuestions()
-                .answer("questions", json.getBytes(StandardCharsets.UTF_8))
-                .json();
-        return new JsonMapper().readTree(answers).get(0).get("outputs");
+        return Asked.ask(question, inputs);
     }
 
     private static void is(JsonNode outputs, String name, double expected) {
-        assertThat(outputs.at(name).isNumber())
-                .as(name + " is " + outputs.at(name))
-                .isTrue();
-        assertThat(outputs.at(name).doubleValue()).as(name).isCloseTo(expected, within(ROUNDING));
+        Asked.is(outputs, name, expected, ROUNDING);
     }
 
     @Test
