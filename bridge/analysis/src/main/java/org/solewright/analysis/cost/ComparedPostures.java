@@ -189,7 +189,7 @@ public record ComparedPostures(
                     "postures.arc-outside",
                     place(step),
                     VaultingStep.text(
-                            "the limb arc has curvature %s 1/m, expected at least 1/limb length = %s 1/m: no rolling"
+                            "the limb arc has curvature %.3f 1/m, expected at least 1/limb length = %.3f 1/m: no rolling"
                                     + " posture",
                             curvature, 1 / l)));
             return Optional.empty();

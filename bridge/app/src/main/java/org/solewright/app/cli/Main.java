@@ -64,7 +64,12 @@ public final class Main {
         CommandLine line = new CommandLine(main).setOut(out).setErr(err);
         line.setParameterExceptionHandler((e, a) -> usage(e));
         line.setExecutionExceptionHandler((e, l, parsed) -> main.failed(e, err));
-        int code = line.execute(args);
+        int code;
+        try {
+            code = line.execute(args);
+        } catch (OutOfMemoryError e) {
+            code = main.failed(new IllegalStateException(e), err);
+        }
         out.flush();
         err.flush();
         return code;
@@ -91,6 +96,10 @@ public final class Main {
         } else if (e instanceof FormatException f) {
             text = f.source() + ": " + f.getMessage() + ": " + f.whatToDo();
             code = ExitCode.INPUT;
+        } else if (isOutOfMemory(e)) {
+            text = "the input needs more memory than this run may take: allow more, for example by"
+                    + " JAVA_OPTS=-Xmx4g, or give less at once";
+            code = ExitCode.INPUT;
         } else {
             text = "a defect of ours (" + e + "): please report it with the output of --trace";
             code = ExitCode.DEFECT;
@@ -100,6 +109,15 @@ public final class Main {
             e.printStackTrace(err);
         }
         return code;
+    }
+
+    /** The tasks of a pool hand errors of the machine over as the cause of an exception. */
+    private static boolean isOutOfMemory(Throwable e) {
+        Throwable cause = e;
+        while (cause != null && !(cause instanceof OutOfMemoryError)) {
+            cause = cause.getCause();
+        }
+        return cause != null;
     }
 
     private static String oneLine(String text) {

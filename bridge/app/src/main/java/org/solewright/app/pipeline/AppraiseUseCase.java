@@ -8,14 +8,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import org.solewright.analysis.cost.ComparedPostures;
-import org.solewright.analysis.cost.DistalWork;
-import org.solewright.analysis.cost.PowerWork;
 import org.solewright.analysis.cost.StepMechanics;
-import org.solewright.analysis.fitting.FittedArc;
-import org.solewright.analysis.fitting.RollOver;
-import org.solewright.analysis.fitting.RollOverPath;
-import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.analysis.gait.Pass;
@@ -30,14 +23,10 @@ import org.solewright.domain.finding.Severity;
 import org.solewright.domain.finding.SourceFile;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.LandmarkMap;
-import org.solewright.domain.foot.Population;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.CurveRow;
-import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.gait.Stance;
-import org.solewright.domain.gait.Use;
-import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
@@ -89,16 +78,24 @@ public final class AppraiseUseCase {
     private static final String GIVEN = "given";
     private static final String DEFAULT = "default";
 
-    private Request request;
-    private final List<Finding> findings = new ArrayList<>();
-    private final List<SourceFile> sources = new ArrayList<>();
+    private final Request request;
+    private final Optional<ResultsRecording.Loaded> results;
+    private final List<Finding> findings;
+    private final List<SourceFile> sources;
     private final Map<Side, ModelLimb> models = new EnumMap<>(Side.class);
     private final List<StepMechanics> mechanics = new ArrayList<>();
     private final List<PostureRow> postures = new ArrayList<>();
     private final List<CurveRow> curves = new ArrayList<>();
 
-    private AppraiseUseCase(Request request) {
+    private AppraiseUseCase(
+            Request request,
+            Optional<ResultsRecording.Loaded> results,
+            List<SourceFile> sources,
+            List<Finding> findings) {
         this.request = request;
+        this.results = results;
+        this.sources = sources;
+        this.findings = findings;
     }
 
     /**
@@ -110,12 +107,20 @@ public final class AppraiseUseCase {
      * @throws FormatException where a file is not as its format says
      */
     static Result run(Request request) throws UseCaseException, FormatException {
-        return new AppraiseUseCase(request).run();
+        List<SourceFile> sources = new ArrayList<>();
+        List<Finding> findings = new ArrayList<>();
+        if (request.results().isEmpty()) {
+            return new AppraiseUseCase(request, Optional.empty(), sources, findings).run();
+        }
+        ResultsRecording.Loaded loaded =
+                ResultsRecording.read(request.results().get(), request.tables(), sources, findings);
+        // Mass and recordings that the map of results states become options of the call.
+        Request stated = request.with(request.gait().of(loaded.files(), loaded.landmarks(), loaded.mass()));
+        return new AppraiseUseCase(stated, Optional.of(loaded), sources, findings).run();
     }
 
     private Result run() throws UseCaseException, FormatException {
         readModels();
-        Optional<ResultsRecording.Loaded> results = results();
         GaitOptions options = request.gait();
         LandmarkMap map;
         InputFiles.Walking walked;
@@ -141,15 +146,15 @@ public final class AppraiseUseCase {
             }
             rows.addAll(of);
         }
-        if (options.annotate().isPresent()) {
-            annotate(options.annotate().get(), walked.files(), subject);
-        }
         if (rows.isEmpty()) {
             throw new UseCaseException(
                     UseCaseException.Kind.INPUT,
                     walking.get(0).name(),
                     "no recording of this call has a step from one foot to the other on its platforms",
                     "give a recording with two consecutive platform contacts");
+        }
+        if (options.annotate().isPresent()) {
+            annotate(options.annotate().get(), walked.files(), subject);
         }
         findings.add(Finding.note(
                 "columns.not-computed",
@@ -169,17 +174,6 @@ public final class AppraiseUseCase {
                 .distinct()
                 .toList();
         return new Result(cost, mechanics, postures, ContactOverrides.rows(subject.passes()), curves, failed);
-    }
-
-    /** Reads a map of results; mass and recordings that it states become options of the call. */
-    private Optional<ResultsRecording.Loaded> results() throws UseCaseException, FormatException {
-        if (request.results().isEmpty()) {
-            return Optional.empty();
-        }
-        ResultsRecording.Loaded loaded =
-                ResultsRecording.read(request.results().get(), request.tables(), sources, findings);
-        request = request.with(request.gait().of(loaded.files(), loaded.landmarks(), loaded.mass()));
-        return Optional.of(loaded);
     }
 
     private void annotate(Path folder, Map<String, Path> files, GaitSubject subject)
@@ -292,7 +286,14 @@ public final class AppraiseUseCase {
                             "no model of the " + trailing.side().word() + " side was given: the model columns of this"
                                     + " step are empty"));
         }
-        limb.ifPresent(l -> modelColumns(row, l, pass, tracks, step, m, codes));
+        if (limb.isPresent()) {
+            ModelColumns columns =
+                    new ModelColumns(pass, tracks, step, request.gait().markerCutoff());
+            columns.fill(row, limb.get(), m);
+            postures.addAll(columns.postures());
+            columns.findings().forEach(f -> addFinding(codes, f));
+            findings.addAll(columns.unlisted());
+        }
         curves.addAll(PowerCurves.of(step, m));
         row.text("findings", String.join(";", codes));
         return row.build();
@@ -301,137 +302,5 @@ public final class AppraiseUseCase {
     private void addFinding(Set<String> codes, Finding finding) {
         findings.add(finding);
         codes.add(finding.code());
-    }
-
-    private void modelColumns(
-            TransitionRow.Builder row,
-            ModelLimb limb,
-            Pass pass,
-            LandmarkTracks tracks,
-            Step step,
-            StepMechanics m,
-            Set<String> codes) {
-        var subject = limb.model().subject();
-        double l = subject.limbLength().value();
-        row.number("limb_length_m", l);
-        subject.limbLength().sd().ifPresent(sd -> row.number("limb_length_m_sd", sd));
-        subject.footLength().ifPresent(q -> {
-            row.number("foot_length_m", q.value());
-            q.sd().ifPresent(sd -> row.number("foot_length_m_sd", sd));
-        });
-        subject.effectiveFootLength().ifPresent(q -> {
-            row.number("effective_foot_length_m", q.value());
-            q.sd().ifPresent(sd -> row.number("effective_foot_length_m_sd", sd));
-        });
-        rollingRadius(row, limb, pass, tracks, step, codes);
-        distalWork(row, limb, pass, tracks, step, codes);
-        Double length = m.values().get(Measure.STEP_LENGTH);
-        Double before = m.values().get(Measure.SPEED_BEFORE);
-        Double mass = m.values().get(Measure.MASS);
-        Double speed = m.values().get(Measure.SPEED);
-        double gravity = step.loads().gravity();
-        if (length != null && before != null && mass != null && length > 0 && before > 0 && mass > 0) {
-            ComparedPostures compared = ComparedPostures.of(
-                    limb.compared(),
-                    new ComparedPostures.TakenStep(
-                            pass.trial().name(), Integer.toString(step.number()), length, before, mass, gravity));
-            compared.fill(row);
-            postures.addAll(compared.rows());
-            compared.findings().forEach(f -> addFinding(codes, f));
-            if (subject.population() != Population.OTHER) {
-                findings.add(Finding.note(
-                        "postures.thought-experiment",
-                        "digitigrade, unguligrade",
-                        ComparedPostures.THOUGHT_EXPERIMENT));
-            }
-            row.number("step_length_nd", length / l);
-            scaled(row, "push_off_nd", m.values().get(Measure.PUSH_OFF), mass * gravity * l);
-            scaled(row, "collision_nd", m.values().get(Measure.COLLISION), mass * gravity * l);
-        }
-        scaled(row, "speed_nd", speed, Math.sqrt(gravity * l));
-    }
-
-    private static void scaled(
-            TransitionRow.Builder row, String column, @org.jspecify.annotations.Nullable Double value, double by) {
-        if (value != null) {
-            row.number(column, value / by);
-        }
-    }
-
-    /** Work distal to the shank of the trailing limb over its stance. */
-    private void distalWork(
-            TransitionRow.Builder row, ModelLimb limb, Pass pass, LandmarkTracks tracks, Step step, Set<String> codes) {
-        Stance trailing = step.loads().trailing();
-        Optional<SegmentTracking> shank = limb.shank(tracks);
-        Optional<PlatformLoads> platform = pass.trial().platforms().stream()
-                .filter(p -> trailing.platforms().equals(List.of(p.number())))
-                .findFirst();
-        Optional<PowerWork> work = Optional.empty();
-        if (shank.isPresent() && platform.isPresent() && trailing.whole()) {
-            SegmentTracking s = shank.get();
-            Vec3 belt = pass.R_LW().x().times(-pass.trial().beltSpeed());
-            work = new DistalWork(s::pose, pass.trial().rate(), pass.trial().startTime(), belt)
-                    .over(platform.get(), request.gait().markerCutoff(), trailing.start(), trailing.end());
-        }
-        if (work.isEmpty()) {
-            addFinding(
-                    codes,
-                    Finding.note(
-                            "distal.unknown",
-                            pass.trial().name() + " step " + step.number(),
-                            "no work distal to the shank: "
-                                    + (!trailing.whole()
-                                            ? trailing.why()
-                                            : "the shank is not tracked throughout the stance on one platform")));
-            return;
-        }
-        row.number("ankle_foot_work_pos_J", work.get().positive());
-        row.number("ankle_foot_work_neg_J", work.get().negative());
-    }
-
-    private void rollingRadius(
-            TransitionRow.Builder row, ModelLimb limb, Pass pass, LandmarkTracks tracks, Step step, Set<String> codes) {
-        Stance trailing = step.loads().trailing();
-        String where = pass.trial().name() + " step " + step.number();
-        Optional<SegmentTracking> shank = limb.shank(tracks);
-        if (!trailing.allows(Use.ROLL_OVER) || shank.isEmpty()) {
-            addFinding(
-                    codes,
-                    Finding.note(
-                            "rolling.stance-unused",
-                            where,
-                            shank.isEmpty()
-                                    ? "the points of the model's shank are not tracked: no rolling radius"
-                                    : "no rolling radius: " + trailing.why()));
-            return;
-        }
-        SegmentTracking s = shank.get();
-        double weight = limb.model().subject().mass().value() * step.loads().gravity();
-        Optional<RollOverPath> path = RollOverShapes.of(
-                        pass,
-                        trailing,
-                        f -> limb.ankle(s, f),
-                        f -> limb.knee(s, f),
-                        RollOverShapes.leastLoad(weight, limb.model().subject().population() != Population.OTHER))
-                .filter(RollOver::isLongEnough);
-        if (path.isEmpty()) {
-            addFinding(
-                    codes,
-                    Finding.note(
-                            "rolling.stance-unused",
-                            where,
-                            "the roll-over of the trailing stance has too few samples"));
-            return;
-        }
-        FittedArc arc = RollOver.arc(path.get());
-        if (!(arc.curvature() > 0)) {
-            addFinding(
-                    codes,
-                    Finding.note("rolling.flat", where, "the roll-over shape is flat or hollow: no rolling radius"));
-            return;
-        }
-        row.number("rolling_radius_m", 1 / arc.curvature());
-        RollOver.blockSd(arc, path.get().rate())
-                .ifPresent(sd -> row.number("rolling_radius_m_sd", sd / (arc.curvature() * arc.curvature())));
     }
 }

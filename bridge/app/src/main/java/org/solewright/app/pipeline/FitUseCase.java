@@ -1,9 +1,7 @@
 package org.solewright.app.pipeline;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumMap;
-import java.util.EnumSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -20,7 +18,6 @@ import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.domain.finding.Basis;
-import org.solewright.domain.finding.Cautions;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.finding.Severity;
@@ -29,7 +26,6 @@ import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
-import org.solewright.domain.foot.Segment;
 import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
@@ -154,7 +150,7 @@ public final class FitUseCase {
                     .toList();
             WalkingRollOver rollOver = rollOver(limb, subject, motions, mass);
             moved.put(side, motions);
-            observed.put(side, observed(motions));
+            observed.put(side, FittedModel.observed(motions));
             limbs.put(side, limb);
             rollOvers.put(side, rollOver);
             angles.put(side, JointCurves.of(limb, posture, subject.passes(), motions));
@@ -168,13 +164,23 @@ public final class FitUseCase {
             rollOver.findings().forEach(this::addOnce);
             JointCurves curves = get(angles, side);
             curves.findings().forEach(this::addOnce);
-            models.put(side, model(limb, rolling, rollOver.effectiveFootLength(), get(observed, side), curves));
+            models.put(
+                    side,
+                    FittedModel.of(
+                            limb,
+                            rolling,
+                            rollOver.effectiveFootLength(),
+                            get(observed, side),
+                            curves,
+                            request.version(),
+                            sources));
         }
         if (options.annotate().isPresent()) {
-            annotate(options.annotate().get(), walked.files(), subject, limbs, moved);
+            OutputFolder folder = OutputFolder.of(options.annotate().get(), options.inputs());
+            findings.addAll(FitAnnotations.write(folder, walked.files(), subject, limbs, moved));
         }
         List<Finding> shared = List.copyOf(findings);
-        models.replaceAll((side, m) -> withFindings(m, shared));
+        models.replaceAll((side, m) -> FittedModel.withFindings(m, shared));
         return new Result(
                 models,
                 limbs,
@@ -184,33 +190,6 @@ public final class FitUseCase {
                 ContactOverrides.rows(subject.passes()),
                 shared,
                 failed(shared));
-    }
-
-    private void annotate(
-            Path folder,
-            Map<String, Path> files,
-            GaitSubject subject,
-            Map<Side, StandingLimb> limbs,
-            Map<Side, List<LimbMotion>> moved)
-            throws UseCaseException, FormatException {
-        OutputFolder annotated = OutputFolder.of(folder, request.gait().inputs());
-        for (int i = 0; i < subject.passes().size(); i++) {
-            Pass pass = subject.passes().get(i);
-            Annotation annotation =
-                    new Annotation(pass, subject.walking().get(i).recording().frames());
-            for (Map.Entry<Side, StandingLimb> e : limbs.entrySet()) {
-                StandingLimb limb = e.getValue();
-                LimbMotion motion = get(moved, e.getKey()).get(i);
-                annotation.joint(e.getKey(), "HIP", f -> motion.hip(limb, f), "hip centre, carried by pelvis or thigh");
-                annotation.joint(e.getKey(), "KNEE", f -> motion.knee(limb, f), "knee centre, carried by the shank");
-                annotation.joint(e.getKey(), "ANKLE", f -> motion.ankle(limb, f), "ankle centre, carried by the shank");
-            }
-            Path file = files.get(pass.trial().name());
-            if (file != null) {
-                findings.addAll(annotation.write(
-                        file, annotated, subject.walking().get(i).recording().name()));
-            }
-        }
     }
 
     private static <T> T get(Map<Side, T> map, Side side) {
@@ -374,68 +353,5 @@ public final class FitUseCase {
         }
         findings.addAll(checks.findings());
         return rollOver;
-    }
-
-    /** Segments whose points were tracked in walking: the shank, and the foot's first segment where it holds the heads. */
-    private static Set<SegmentName> observed(List<LimbMotion> motions) {
-        Set<SegmentName> observed = EnumSet.noneOf(SegmentName.class);
-        for (LimbMotion motion : motions) {
-            if (motion.shank().isPresent()) {
-                observed.add(SegmentName.SHANK);
-            }
-            if (motion.foot().isPresent()) {
-                observed.add(SegmentName.FOOT);
-            }
-            observed.addAll(motion.chain().observed());
-        }
-        return observed;
-    }
-
-    private FootModel model(
-            StandingLimb limb,
-            Rolling rolling,
-            Optional<Quantity> effectiveFootLength,
-            Set<SegmentName> observed,
-            JointCurves curves) {
-        FootModel standing = limb.model(request.version(), sources, Cautions.LINES);
-        return new FootModel(
-                standing.side(),
-                standing.version(),
-                limb.subject(effectiveFootLength),
-                standing.sources(),
-                standing.segments().stream()
-                        .map(g -> new Segment(
-                                g.name(),
-                                g.parent(),
-                                g.mass(),
-                                g.centreOfMass(),
-                                g.inertia(),
-                                g.inertiaBasis(),
-                                g.length(),
-                                observed.contains(g.name())))
-                        .toList(),
-                standing.joints().stream()
-                        .map(j -> j.withMotion(curves.range(j), curves.lock(j)))
-                        .toList(),
-                standing.landmarks(),
-                rolling,
-                standing.pads(),
-                standing.findings(),
-                standing.cautions());
-    }
-
-    private static FootModel withFindings(FootModel m, List<Finding> findings) {
-        return new FootModel(
-                m.side(),
-                m.version(),
-                m.subject(),
-                m.sources(),
-                m.segments(),
-                m.joints(),
-                m.landmarks(),
-                m.rolling(),
-                m.pads(),
-                findings,
-                m.cautions());
     }
 }
