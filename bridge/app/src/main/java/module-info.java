@@ -6,6 +6,9 @@ module org.solewright.app {
     requires static transitive org.jspecify;
     requires info.picocli;
     requires com.fasterxml.jackson.databind;
+    requires java.sql;
+    requires org.xerial.sqlitejdbc;
+    requires me.tongfei.progressbar;
 
     exports org.solewright.app.cli;
 

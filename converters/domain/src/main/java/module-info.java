@@ -14,4 +14,5 @@ module org.solewright.domain {
     exports org.solewright.domain.gait;
     exports org.solewright.domain.foot;
     exports org.solewright.domain.cost;
+    exports org.solewright.domain.study;
 }

@@ -22,4 +22,6 @@ module org.solewright.formats {
             jakarta.xml.bind;
     opens org.solewright.formats.footmodel.resultsxml to
             jakarta.xml.bind;
+    opens org.solewright.formats.footmodel.studyxml to
+            jakarta.xml.bind;
 }

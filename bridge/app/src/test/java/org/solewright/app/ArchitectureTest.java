@@ -32,6 +32,7 @@ class ArchitectureTest {
     private static final String[] GENERATED = {
         ROOT + "formats.footmodel.landmarksxml..",
         ROOT + "formats.footmodel.resultsxml..",
+        ROOT + "formats.footmodel.studyxml..",
         ROOT + "formats.footmodel.footxml..",
         ROOT + "formats.footmodel.costxml.."
     };

@@ -27,6 +27,7 @@ import picocli.CommandLine.ScopeType;
             PosturesCommand.class,
             SolveCommand.class,
             SprawlCommand.class,
+            StudyCommand.class,
             DemoCommand.class,
         })
 public final class Main {

@@ -48,7 +48,7 @@ final class DemoStudy {
     private static final double PLATFORM_WIDTH = 0.6;
     private static final double ANKLE_X = -0.05;
     private static final double ANKLE_Z = -(RADIUS - 0.08);
-    private static final int STANDING_FRAMES = 100;
+    static final int STANDING_FRAMES = 100;
     private static final double STEP_SHARE = 0.4;
 
     /**
@@ -73,7 +73,7 @@ final class DemoStudy {
                     GaitSettings.STANDARD_GRAVITY));
         }
 
-        private WalkRecorder recorder() {
+        WalkRecorder recorder() {
             // The laboratory's x runs against the walk and its y to the right, as any laboratory's may.
             Rotation turned = new Rotation(Vec3.X.times(-1), Vec3.Y.times(-1), Vec3.Z);
             return new WalkRecorder(
@@ -151,7 +151,7 @@ final class DemoStudy {
         {0.02, 0.13, -0.5}, {-0.07, 0.13, -0.55}, {0.01, 0.12, -0.66}, {-0.08, 0.12, -0.62}
     };
 
-    private static List<BodyPoint> points(boolean isStanding) {
+    static List<BodyPoint> points(boolean isStanding) {
         List<BodyPoint> points = new ArrayList<>();
         points.add(new BodyPoint("SACR", Side.RIGHT, Carrier.PELVIS, new Vec3(-0.12, 0, 0.05)));
         for (Side side : Side.values()) {
@@ -207,7 +207,7 @@ final class DemoStudy {
                 };
     }
 
-    private static LandmarkMap map() {
+    static LandmarkMap map() {
         List<LandmarkMap.Entry> entries = new ArrayList<>();
         entries.add(entry(Landmark.SACRUM, Optional.empty(), "SACR"));
         for (Side side : Side.values()) {

@@ -33,8 +33,9 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
      * @param number line in the file, from 1
      * @param columns names in the header
      * @param cells as many as columns
+     * @param hasDecimalComma whether one comma in a number is its decimal mark, as it separates no cells
      */
-    record Line(String source, long number, List<String> columns, List<String> cells) {
+    record Line(String source, long number, List<String> columns, List<String> cells, boolean hasDecimalComma) {
 
         /** What stands in a column, without spaces around; empty where the table has no such column. */
         String text(String column) {
@@ -47,7 +48,8 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
             String text = text(column);
             double value;
             try {
-                value = Double.parseDouble(text);
+                value = Double.parseDouble(
+                        hasDecimalComma && text.matches("[+-]?[0-9]+,[0-9]+") ? text.replace(',', '.') : text);
             } catch (NumberFormatException e) {
                 throw wrong(
                         column + " '" + text + "', expected a number in " + unit,
@@ -70,6 +72,16 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
     }
 
     static CsvTable read(Path file) throws IOException, FormatException {
+        List<FormatException> wrong = new ArrayList<>();
+        CsvTable table = read(file, wrong);
+        if (!wrong.isEmpty()) {
+            throw wrong.get(0);
+        }
+        return table;
+    }
+
+    /** Reads a table whose wrong lines are named and left out. */
+    static CsvTable read(Path file, List<FormatException> wrong) throws IOException, FormatException {
         byte[] bytes;
         try (InputStream in = Files.newInputStream(file)) {
             bytes = in.readNBytes(LARGEST_BYTES + 1);
@@ -77,9 +89,9 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
         String source = file.toString();
         if (bytes.length > LARGEST_BYTES) {
             throw new FormatException(
-                    source, "the file is larger than " + LARGEST_BYTES + " bytes", "give a table of contacts");
+                    source, "the file is larger than " + LARGEST_BYTES + " bytes", "give a table of that kind");
         }
-        return parse(source, text(source, bytes));
+        return parse(source, text(source, bytes), wrong);
     }
 
     private static String text(String source, byte[] bytes) throws FormatException {
@@ -96,10 +108,28 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
         }
     }
 
-    private static CsvTable parse(String source, String text) throws FormatException {
+    /** What stands between the cells: the one of comma, semicolon and tab that is commonest in the header. */
+    private static char separator(String text) {
+        int end = text.indexOf('\n');
+        String header = end < 0 ? text : text.substring(0, end);
+        char best = ',';
+        long most = header.chars().filter(c -> c == ',').count();
+        for (char c : new char[] {';', '\t'}) {
+            long count = header.chars().filter(h -> h == c).count();
+            if (count > most) {
+                most = count;
+                best = c;
+            }
+        }
+        return best;
+    }
+
+    private static CsvTable parse(String source, String text, List<FormatException> wrong) throws FormatException {
+        char separator = separator(text);
         List<String> columns = List.of();
         List<Line> lines = new ArrayList<>();
         try (CsvReader<CsvRecord> reader = CsvReader.builder()
+                .fieldSeparator(separator)
                 .skipEmptyLines(true)
                 .missingFieldStrategy(FieldMismatchStrategy.IGNORE)
                 .extraFieldStrategy(FieldMismatchStrategy.IGNORE)
@@ -108,7 +138,11 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
                 if (columns.isEmpty()) {
                     columns = r.getFields().stream().map(String::strip).toList();
                 } else {
-                    lines.add(line(source, columns, r));
+                    try {
+                        lines.add(line(source, columns, r, separator != ','));
+                    } catch (FormatException e) {
+                        wrong.add(e);
+                    }
                 }
             }
         } catch (CsvParseException e) {
@@ -123,8 +157,9 @@ record CsvTable(List<String> columns, List<CsvTable.Line> lines) {
         return new CsvTable(columns, lines);
     }
 
-    private static Line line(String source, List<String> columns, CsvRecord r) throws FormatException {
-        Line line = new Line(source, r.getStartingLineNumber(), columns, r.getFields());
+    private static Line line(String source, List<String> columns, CsvRecord r, boolean hasDecimalComma)
+            throws FormatException {
+        Line line = new Line(source, r.getStartingLineNumber(), columns, r.getFields(), hasDecimalComma);
         if (r.getFieldCount() != columns.size()) {
             throw line.wrong(
                     r.getFieldCount() + " cells, expected " + columns.size() + " as in the header",
