@@ -23,6 +23,9 @@ import org.solewright.formats.io.FormatException;
 /** Everything that is wrong with a study before anything runs, each with its file and line. */
 public final class StudyCheck {
 
+    /** Code of the finding that keeps a trial from being done. */
+    static final String AIDED = "study.walking-aid";
+
     private final List<Finding> findings = new ArrayList<>();
 
     private StudyCheck() {}

@@ -207,7 +207,7 @@ final class StudyPlan {
     private static Optional<Finding> refusal(StudyTrial trial, FitUnit unit, Optional<String> failure) {
         if (trial.isAided()) {
             return StudyCheck.conditions(trial, "").stream()
-                    .filter(f -> f.code().equals("study.walking-aid"))
+                    .filter(f -> f.code().equals(StudyCheck.AIDED))
                     .findFirst();
         }
         return failure.map(

@@ -122,7 +122,13 @@ record StudyTask(
         if (refusal.isPresent()) {
             Finding f = refusal.get();
             remove(study, former, Set.of());
-            return new Outcome(Outcome.State.REFUSED, f.message(), digested, List.of(f), List.of());
+            boolean isRefused = f.code().equals(StudyCheck.AIDED);
+            return new Outcome(
+                    isRefused ? Outcome.State.REFUSED : Outcome.State.FAILED,
+                    f.message(),
+                    digested,
+                    List.of(f),
+                    List.of());
         }
         try {
             List<Finding> findings = work.run(working);

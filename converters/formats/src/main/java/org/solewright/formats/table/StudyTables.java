@@ -79,7 +79,12 @@ public final class StudyTables {
         Map<String, Long> seen = new HashMap<>();
         return read(file, SUBJECTS, List.of("id"), line -> {
             StudySubject s = subject(line);
-            once(line, seen, "subject '" + s.id() + "'", s.id(), "give every subject one line");
+            once(
+                    line,
+                    seen,
+                    "subject '" + s.id() + "'",
+                    s.id().toLowerCase(Locale.ROOT),
+                    "give every subject one line");
             return s;
         });
     }
