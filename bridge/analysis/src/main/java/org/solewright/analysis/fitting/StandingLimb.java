@@ -19,6 +19,7 @@ import org.solewright.domain.foot.Sex;
 import org.solewright.domain.foot.Subject;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.geometry.Pose;
+import org.solewright.domain.geometry.Vec3;
 
 /**
  * One limb as it stood: the static parts of a foot model and where they were in the laboratory.
@@ -70,6 +71,35 @@ public record StandingLimb(
         landmarks = List.copyOf(landmarks);
         pads = List.copyOf(pads);
         findings = List.copyOf(findings);
+    }
+
+    /**
+     * The limb with its hip elsewhere; what hangs on the hip follows, the segments stay.
+     *
+     * @param by m, laboratory frame L
+     * @param up unit vector
+     * @return the limb
+     */
+    public StandingLimb withHipMoved(Vec3 by, Vec3 up) {
+        return new StandingLimb(
+                side,
+                subjectId,
+                mass,
+                stature,
+                population,
+                sex,
+                new Located(hip.position().plus(by), hip.basis(), hip.sd()),
+                knee,
+                ankle,
+                floor,
+                new Quantity(limbLength.value() + by.dot(up), limbLength.basis(), limbLength.sd()),
+                footLength,
+                poses,
+                segments,
+                joints,
+                landmarks,
+                pads,
+                findings);
     }
 
     /**

@@ -31,9 +31,12 @@ import picocli.CommandLine.Spec;
             "Example:",
             "  solewright fit --standing standing.c3d --walking walk-1.c3d --walking walk-2.c3d \\",
             "    --landmarks map.xml --mass 71.5 --population adult --sex female --out model",
-            "Writes foot-model-right.xml, foot-model-left.xml, fit-contacts.csv and fit-curves.csv to the folder model."
+            "Writes foot-model-right.xml, foot-model-left.xml, fit-contacts.csv, fit-curves.csv and",
+            "fit-uncertainty.csv to the folder model."
         })
 final class FitCommand implements Callable<Integer> {
+
+    private static final int MOST_RUNS = 100_000;
 
     @Option(
             names = "--standing",
@@ -78,6 +81,20 @@ final class FitCommand implements Callable<Integer> {
             description = "deleva or dempster (default: ${DEFAULT-VALUE}).")
     private String inertia = "deleva";
 
+    @Option(
+            names = "--runs",
+            paramLabel = "N",
+            defaultValue = "200",
+            description = "Monte Carlo runs behind the uncertainties, 0 for none (default: ${DEFAULT-VALUE}).")
+    private int runs = FitUseCase.Request.DEFAULT_RUNS;
+
+    @Option(
+            names = "--seed",
+            paramLabel = "N",
+            defaultValue = "1",
+            description = "Seed of the Monte Carlo runs (default: ${DEFAULT-VALUE}).")
+    private long seed = FitUseCase.Request.DEFAULT_SEED;
+
     @Option(names = "--subject", paramLabel = "ID", defaultValue = "", description = "Identifier for the model.")
     private String subject = "";
 
@@ -101,6 +118,10 @@ final class FitCommand implements Callable<Integer> {
             throw GaitArguments.usage(
                     "--segments", segments + " parts of the foot, this version knows 1 to 3", "use 1, 2 or 3");
         }
+        if (runs < 0 || runs > MOST_RUNS) {
+            throw GaitArguments.usage(
+                    "--runs", runs + " Monte Carlo runs, expected 0 to " + MOST_RUNS, "use 200, or 0 for none");
+        }
         FitUseCase.Request request = new FitUseCase.Request(
                 options,
                 sides(),
@@ -108,7 +129,9 @@ final class FitCommand implements Callable<Integer> {
                 segments == null ? OptionalInt.empty() : OptionalInt.of(segments),
                 table(),
                 subject,
-                Version.NUMBER);
+                Version.NUMBER,
+                runs,
+                seed);
         FitReport report = FitReport.write(request, out);
         PrintWriter stderr = spec.commandLine().getErr();
         FindingPrinter.print(stderr, report.findings());

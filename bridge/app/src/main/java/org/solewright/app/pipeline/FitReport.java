@@ -18,6 +18,7 @@ import org.solewright.formats.footmodel.FootModelFile;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.table.ContactsTable;
 import org.solewright.formats.table.CurvesTable;
+import org.solewright.formats.table.UncertaintyTable;
 
 /**
  * A fit, written: what the command prints about it.
@@ -36,8 +37,8 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
     }
 
     /**
-     * Fits and writes {@code foot-model-right.xml}, {@code foot-model-left.xml}, {@code fit-contacts.csv} and {@code
-     * fit-curves.csv}.
+     * Fits and writes {@code foot-model-right.xml}, {@code foot-model-left.xml}, {@code fit-contacts.csv}, {@code
+     * fit-curves.csv} and {@code fit-uncertainty.csv}.
      *
      * @param request what is asked
      * @param out folder, made where it is missing
@@ -57,6 +58,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         List<CurveRow> curves = new ArrayList<>(LoadCurves.of(result.subject().passes()));
         result.angles().values().forEach(a -> curves.addAll(a.rows()));
         files.put("fit-curves.csv", CurvesTable.bytes(curves));
+        files.put("fit-uncertainty.csv", UncertaintyTable.bytes(result.numbers()));
         List<Path> written = OutputFolder.of(out, request.gait().inputs()).write(files);
         List<String> lines = new ArrayList<>();
         result.models().values().forEach(m -> describe(lines, m));

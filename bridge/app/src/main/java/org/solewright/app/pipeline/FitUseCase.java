@@ -22,6 +22,7 @@ import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.finding.Severity;
 import org.solewright.domain.finding.SourceFile;
+import org.solewright.domain.foot.FittedNumber;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
@@ -29,6 +30,7 @@ import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
+import org.solewright.domain.gait.Stance;
 import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.io.FormatException;
@@ -49,6 +51,8 @@ public final class FitUseCase {
      * @param inertia table of masses and moments of inertia
      * @param subjectId identifier without personal data
      * @param version version of the tool
+     * @param runs Monte Carlo runs behind the uncertainties; 0: none
+     * @param seed of these runs
      */
     public record Request(
             GaitOptions gait,
@@ -57,11 +61,34 @@ public final class FitUseCase {
             OptionalInt segments,
             InertiaTable inertia,
             String subjectId,
-            String version) {
+            String version,
+            int runs,
+            long seed) {
+
+        /** Runs where none are asked for (design 03 section 7). */
+        public static final int DEFAULT_RUNS = 200;
+
+        /** Seed where none is given. */
+        public static final long DEFAULT_SEED = 1;
 
         /** Copies the set. */
         public Request {
             sides = Set.copyOf(sides);
+            if (runs < 0) {
+                throw new IllegalArgumentException(runs + " Monte Carlo runs, expected 0 or more");
+            }
+        }
+
+        /** A request with the default number of runs. */
+        Request(
+                GaitOptions gait,
+                Set<Side> sides,
+                boolean isBothAsked,
+                OptionalInt segments,
+                InertiaTable inertia,
+                String subjectId,
+                String version) {
+            this(gait, sides, isBothAsked, segments, inertia, subjectId, version, DEFAULT_RUNS, DEFAULT_SEED);
         }
     }
 
@@ -73,6 +100,7 @@ public final class FitUseCase {
      * @param rollOvers what each side's stances showed
      * @param angles joint angles over stance by side
      * @param contacts contact table
+     * @param numbers what is known of the uncertainty of the models
      * @param findings all findings, once each
      * @param failed names of inputs that failed
      */
@@ -83,6 +111,7 @@ public final class FitUseCase {
             Map<Side, JointCurves> angles,
             GaitSubject subject,
             List<ContactRow> contacts,
+            List<FittedNumber> numbers,
             List<Finding> findings,
             List<String> failed) {}
 
@@ -156,6 +185,7 @@ public final class FitUseCase {
             angles.put(side, JointCurves.of(limb, posture, subject.passes(), motions));
         }
         findings.addAll(subject.findings());
+        List<FittedNumber> numbers = new ArrayList<>();
         for (Side side : sides) {
             StandingLimb limb = get(limbs, side);
             WalkingRollOver rollOver = get(rollOvers, side);
@@ -164,16 +194,18 @@ public final class FitUseCase {
             rollOver.findings().forEach(this::addOnce);
             JointCurves curves = get(angles, side);
             curves.findings().forEach(this::addOnce);
-            models.put(
-                    side,
-                    FittedModel.of(
-                            limb,
-                            rolling,
-                            rollOver.effectiveFootLength(),
-                            get(observed, side),
-                            curves,
-                            request.version(),
-                            sources));
+            FootModel model = FittedModel.of(
+                    limb,
+                    rolling,
+                    rollOver.effectiveFootLength(),
+                    get(observed, side),
+                    curves,
+                    request.version(),
+                    sources);
+            UncertainModel uncertain =
+                    new UncertainModel(model, uncertainty(posture, limb, subject, get(moved, side), mass));
+            models.put(side, uncertain.model());
+            numbers.addAll(uncertain.rows());
         }
         if (options.annotate().isPresent()) {
             OutputFolder folder = OutputFolder.of(options.annotate().get(), options.inputs());
@@ -188,6 +220,7 @@ public final class FitUseCase {
                 angles,
                 subject,
                 ContactOverrides.rows(subject.passes()),
+                numbers,
                 shared,
                 failed(shared));
     }
@@ -332,6 +365,31 @@ public final class FitUseCase {
                     refused.whatToDo());
         }
         return ((StandingOutcome.Built) outcome).limb();
+    }
+
+    private FitUncertainty uncertainty(
+            StandingPosture posture, StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {
+        double leastLoad = RollOverShapes.leastLoad(
+                mass.value() * GaitSettings.STANDARD_GRAVITY, request.gait().population() != Population.OTHER);
+        List<StanceMotion> stances = new ArrayList<>();
+        for (int i = 0; i < motions.size(); i++) {
+            Pass pass = subject.passes().get(i);
+            for (Stance stance : pass.stances()) {
+                if (stance.side() == limb.side()) {
+                    stances.add(new StanceMotion(pass, stance, limb, motions.get(i), leastLoad));
+                }
+            }
+        }
+        StandingSettings settings = settings(mass);
+        return FitUncertainty.of(
+                limb,
+                posture,
+                p -> StandingModel.build(p, settings, limb.side()) instanceof StandingOutcome.Built built
+                        ? Optional.of(built.limb())
+                        : Optional.empty(),
+                stances,
+                request.runs(),
+                request.seed());
     }
 
     private WalkingRollOver rollOver(StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {

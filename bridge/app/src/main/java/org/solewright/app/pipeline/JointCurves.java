@@ -44,13 +44,13 @@ final class JointCurves {
     static JointCurves of(StandingLimb limb, StandingPosture posture, List<Pass> passes, List<LimbMotion> motions) {
         JointCurves curves = new JointCurves(limb);
         for (Joint joint : limb.joints()) {
-            curves.add(joint, curves.axes(joint, posture), passes, motions);
+            curves.add(joint, axes(limb, joint, posture), passes, motions);
         }
         return curves;
     }
 
     /** R_LB of a joint: z across it, of the ankle along the malleoli, y up the shank [Wu 2002]. */
-    private Rotation axes(Joint joint, StandingPosture posture) {
+    static Rotation axes(StandingLimb limb, Joint joint, StandingPosture posture) {
         Pose proximal = Optional.ofNullable(limb.poses().get(joint.proximal())).orElseThrow();
         Vec3 across = proximal.transformVector(joint.axes().get(0).direction());
         Vec3 upwards = joint.proximal() == SegmentName.SHANK

@@ -55,11 +55,12 @@ final class LimbChain {
             return;
         }
         int parent = segments.size() - 1;
-        Optional<Vec3> hinge =
-                points.reference().size() < FEWEST && parent >= 0 ? joint(name).flatMap(this::hinge) : Optional.empty();
+        Optional<Vec3> hinge = points.reference().size() < FEWEST && parent >= 0
+                ? joint(limb, name).flatMap(j -> hinge(limb, j))
+                : Optional.empty();
         double rms = rms(points);
         names.add(name);
-        segments.add(new ChainModel.Segment(parent, centre(name), hinge, points.reference(), 1 / (rms * rms)));
+        segments.add(new ChainModel.Segment(parent, centre(limb, name), hinge, points.reference(), 1 / (rms * rms)));
         tracks.addAll(points.tracks());
     }
 
@@ -81,13 +82,13 @@ final class LimbChain {
         return free > 0 ? Math.max(LEAST_RMS, Math.sqrt(sum / free)) : UNKNOWN_RMS;
     }
 
-    private Optional<Joint> joint(String name) {
+    private static Optional<Joint> joint(StandingLimb limb, String name) {
         return limb.joints().stream()
                 .filter(j -> j.distal().word().equals(name))
                 .findFirst();
     }
 
-    private Optional<Vec3> hinge(Joint joint) {
+    private static Optional<Vec3> hinge(StandingLimb limb, Joint joint) {
         return joint.kind() == Joint.Kind.HINGE
                 ? Optional.ofNullable(limb.poses().get(joint.proximal()))
                         .map(x -> x.transformVector(joint.axes().get(0).direction()))
@@ -95,16 +96,42 @@ final class LimbChain {
     }
 
     /** Centre of the joint with the segment above in the standing trial. */
-    private Vec3 centre(String name) {
+    private static Vec3 centre(StandingLimb limb, String name) {
         return switch (name) {
             case THIGH -> limb.hip().position();
             case "shank" -> limb.knee().position();
             default ->
-                joint(name)
+                joint(limb, name)
                         .flatMap(j -> Optional.ofNullable(limb.poses().get(j.proximal()))
                                 .map(x -> x.transformPosition(j.centre().position())))
                         .orElse(limb.ankle().position());
         };
+    }
+
+    /** Names of the segments, as {@link #pose} takes them, parents first. */
+    List<String> names() {
+        return names;
+    }
+
+    /** Walking positions of the points, segment by segment, each {@code [frames][3]}, m. */
+    List<double[]> tracks() {
+        return tracks;
+    }
+
+    /** The same points and weights on joints of another estimate of the limb; not for a chain without segments. */
+    ChainModel model(StandingLimb other) {
+        List<ChainModel.Segment> moved = new ArrayList<>();
+        for (int s = 0; s < segments.size(); s++) {
+            ChainModel.Segment own = segments.get(s);
+            String name = names.get(s);
+            moved.add(new ChainModel.Segment(
+                    own.parent(),
+                    centre(other, name),
+                    own.hinge().isPresent() ? joint(other, name).flatMap(j -> hinge(other, j)) : Optional.empty(),
+                    own.points(),
+                    own.weight()));
+        }
+        return new ChainModel(moved);
     }
 
     /** Fits all frames. */

@@ -24,13 +24,15 @@ import org.solewright.domain.geometry.Vec3;
  * @param pelvis carries the hip
  * @param thigh carries the hip where the pelvis is not tracked
  * @param chain poses of the segments that hang together
+ * @param hipCarrier points of the segment that carries the hip, pelvis or thigh; none where neither is tracked
  */
 record LimbMotion(
         Optional<SegmentTracking> shank,
         Optional<SegmentTracking> foot,
         Optional<SegmentTracking> pelvis,
         Optional<SegmentTracking> thigh,
-        LimbChain chain) {
+        LimbChain chain,
+        Points hipCarrier) {
 
     private static final int FEWEST = 3;
     private static final List<Landmark> SHANK = List.of(
@@ -73,8 +75,16 @@ record LimbMotion(
             }
         }
         chain.fit();
+        Points carrier = pelvis.isPresent()
+                ? points(standing, walking, PELVIS, List.of(Side.LEFT, Side.RIGHT))
+                : points(standing, walking, THIGH, own);
         return new LimbMotion(
-                track(standing, walking, SHANK, own), track(standing, walking, FOOT, own), pelvis, thigh, chain);
+                track(standing, walking, SHANK, own),
+                track(standing, walking, FOOT, own),
+                pelvis,
+                thigh,
+                chain,
+                carrier);
     }
 
     /** Landmarks that a segment of the foot carries; those of toes only where the toes are a segment of their own. */
@@ -150,6 +160,16 @@ record LimbMotion(
     /** Hip centre in a frame, carried by the pelvis, else by the thigh. */
     Optional<Vec3> hip(StandingLimb limb, int frame) {
         return pelvis.or(() -> thigh).flatMap(s -> s.at(limb.hip().position(), frame));
+    }
+
+    /** Pose of the shank from standing to a frame. */
+    Optional<Pose> shankPose(int frame) {
+        return chain.pose(SegmentName.SHANK.word(), frame).or(() -> shank.flatMap(s -> s.pose(frame)));
+    }
+
+    /** Pose of the segment that carries the hip from standing to a frame. */
+    Optional<Pose> hipPose(int frame) {
+        return pelvis.or(() -> thigh).flatMap(s -> s.pose(frame));
     }
 
     /** Pose of the foot, or of its rearmost segment, from standing to a frame. */

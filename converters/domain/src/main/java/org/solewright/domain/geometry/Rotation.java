@@ -52,6 +52,39 @@ public record Rotation(Vec3 x, Vec3 y, Vec3 z) {
     }
 
     /**
+     * Rotation about an axis.
+     *
+     * @param w along the axis, as long as the angle, rad
+     * @return the rotation [Rodrigues 1840]; the identity for a vector of length 0
+     */
+    public static Rotation ofVector(Vec3 w) {
+        double angle = w.norm();
+        if (angle == 0) {
+            return IDENTITY;
+        }
+        Vec3 k = w.times(1 / angle);
+        return new Rotation(turned(Vec3.X, k, angle), turned(Vec3.Y, k, angle), turned(Vec3.Z, k, angle));
+    }
+
+    private static Vec3 turned(Vec3 v, Vec3 axis, double angle) {
+        return v.times(Math.cos(angle))
+                .plus(axis.cross(v).times(Math.sin(angle)))
+                .plus(axis.times(axis.dot(v) * (1 - Math.cos(angle))));
+    }
+
+    /**
+     * Axis and angle of this rotation.
+     *
+     * @return along the axis, as long as the angle, 0 to pi rad; accurate for angles well below pi
+     */
+    public Vec3 vector() {
+        Vec3 twice = new Vec3(y.z() - z.y(), z.x() - x.z(), x.y() - y.x());
+        double sine = twice.norm() / 2;
+        double angle = Math.atan2(sine, (x.x() + y.y() + z.z() - 1) / 2);
+        return sine == 0 ? Vec3.ZERO : twice.times(angle / (2 * sine));
+    }
+
+    /**
      * Turns components in B into components in A.
      *
      * @param v vector in B
