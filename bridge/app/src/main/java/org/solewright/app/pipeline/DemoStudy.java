@@ -191,7 +191,7 @@ final class DemoStudy {
         return side == Side.LEFT ? "L" : "R";
     }
 
-    private static String label(Landmark landmark, Side side) {
+    static String label(Landmark landmark, Side side) {
         return letter(side)
                 + switch (landmark) {
                     case TROCHANTER_MAJOR -> "TRO";

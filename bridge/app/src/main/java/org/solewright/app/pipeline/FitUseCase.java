@@ -15,7 +15,6 @@ import org.solewright.analysis.fitting.StandingOutcome;
 import org.solewright.analysis.fitting.StandingPosture;
 import org.solewright.analysis.fitting.StandingSettings;
 import org.solewright.analysis.gait.GaitSettings;
-import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
@@ -140,15 +139,46 @@ public final class FitUseCase {
         LandmarkMap map = InputFiles.landmarkMap(options.landmarks(), sources);
         List<Recording> standing = InputFiles.standing(options.standing(), options.isFlagIgnored(), sources, findings);
         InputFiles.Walking walked = InputFiles.walking(options.walking(), options.isFlagIgnored(), sources, findings);
-        List<Recording> walking = walked.recordings();
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();
+        return fitted(map, standing, walked, contacts);
+    }
+
+    /**
+     * Fits recordings that are in memory.
+     *
+     * @param request what is asked; its files are not read
+     * @param map landmarks
+     * @param standing standing recordings, at least one
+     * @param walking walking recordings, at least one
+     * @return models and findings
+     * @throws UseCaseException where the recordings lack what is needed
+     */
+    static Result of(Request request, LandmarkMap map, List<Recording> standing, List<Recording> walking)
+            throws UseCaseException {
+        try {
+            return new FitUseCase(request).fitted(map, standing, new InputFiles.Walking(walking, Map.of()), List.of());
+        } catch (FormatException e) {
+            throw new IllegalStateException("no file is read", e);
+        }
+    }
+
+    private Result fitted(
+            LandmarkMap map, List<Recording> standing, InputFiles.Walking walked, List<ContactRow> contacts)
+            throws UseCaseException, FormatException {
+        GaitOptions options = request.gait();
+        List<Recording> walking = walked.recordings();
         List<Recording> all = new ArrayList<>(standing);
         all.addAll(walking);
         findings.addAll(LandmarkCoverage.missingLabels(map, all));
-        StandingTrial stood = stood(map, standing, options);
-        Vec3 up = up(stood, walking);
+        StandingTrial stood = StandingTrial.of(map, standing, options.isMirrored(), findings);
+        Vec3 up = stood.up(walking)
+                .orElseThrow(() -> new UseCaseException(
+                        UseCaseException.Kind.INPUT,
+                        options.standing().get(0).toString(),
+                        "neither platforms nor the landmarks of hips and malleoli say where up is",
+                        "map malleolus_lateral and trochanter_major or asis of both sides"));
         StandingPosture posture = stood.posture(up, options.floor());
         Set<Side> sides = sides(map, stood);
         OptionalDouble limbLength = provisionalLimbLength(posture, sides);
@@ -202,8 +232,17 @@ public final class FitUseCase {
                     curves,
                     request.version(),
                     sources);
-            UncertainModel uncertain =
-                    new UncertainModel(model, uncertainty(posture, limb, subject, get(moved, side), mass));
+            UncertainModel uncertain = new UncertainModel(
+                    model,
+                    FitUncertainty.of(
+                            limb,
+                            posture,
+                            p -> StandingModel.build(p, settings(mass), side) instanceof StandingOutcome.Built built
+                                    ? Optional.of(built.limb())
+                                    : Optional.empty(),
+                            stances(limb, subject, get(moved, side), mass),
+                            request.runs(),
+                            request.seed()));
             models.put(side, uncertain.model());
             numbers.addAll(uncertain.rows());
         }
@@ -258,42 +297,6 @@ public final class FitUseCase {
                 .map(Finding::where)
                 .distinct()
                 .toList();
-    }
-
-    private StandingTrial stood(LandmarkMap map, List<Recording> standing, GaitOptions options) {
-        List<LandmarkTracks> tracks = new ArrayList<>();
-        for (Recording r : standing) {
-            Recording seen = r;
-            if (options.isMirrored()) {
-                Vec3 up = new StandingTrial(List.of(LandmarkTracks.of(r, map, 0, new ArrayList<>())))
-                        .up()
-                        .orElse(Vec3.Z);
-                seen = org.solewright.analysis.gait.Mirror.of(r, up);
-            }
-            tracks.add(LandmarkTracks.of(seen, map, 0, findings));
-        }
-        return new StandingTrial(tracks);
-    }
-
-    private Vec3 up(StandingTrial stood, List<Recording> walking) throws UseCaseException {
-        Vec3 sum = Vec3.ZERO;
-        for (Recording r : walking) {
-            for (var p : r.platforms()) {
-                sum = sum.plus(p.up());
-            }
-        }
-        Optional<Vec3> platforms = sum.norm() > 0.5 ? Optional.of(sum.unit()) : stood.platformUp();
-        // The standing trial's floor is level in its own laboratory axes: small tilts of platform corners are not up.
-        return platforms
-                .map(p -> stood.up()
-                        .filter(s -> s.dot(p) > Math.cos(Math.toRadians(2)))
-                        .orElse(p))
-                .or(stood::up)
-                .orElseThrow(() -> new UseCaseException(
-                        UseCaseException.Kind.INPUT,
-                        request.gait().standing().get(0).toString(),
-                        "neither platforms nor the landmarks of hips and malleoli say where up is",
-                        "map malleolus_lateral and trochanter_major or asis of both sides"));
     }
 
     /** Sides that are asked for and have what standing needs. */
@@ -367,8 +370,8 @@ public final class FitUseCase {
         return ((StandingOutcome.Built) outcome).limb();
     }
 
-    private FitUncertainty uncertainty(
-            StandingPosture posture, StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {
+    private List<StanceMotion> stances(
+            StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {
         double leastLoad = RollOverShapes.leastLoad(
                 mass.value() * GaitSettings.STANDARD_GRAVITY, request.gait().population() != Population.OTHER);
         List<StanceMotion> stances = new ArrayList<>();
@@ -380,16 +383,7 @@ public final class FitUseCase {
                 }
             }
         }
-        StandingSettings settings = settings(mass);
-        return FitUncertainty.of(
-                limb,
-                posture,
-                p -> StandingModel.build(p, settings, limb.side()) instanceof StandingOutcome.Built built
-                        ? Optional.of(built.limb())
-                        : Optional.empty(),
-                stances,
-                request.runs(),
-                request.seed());
+        return stances;
     }
 
     private WalkingRollOver rollOver(StandingLimb limb, GaitSubject subject, List<LimbMotion> motions, Quantity mass) {

@@ -8,21 +8,43 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import org.solewright.analysis.fitting.StandingPosture;
 import org.solewright.analysis.gait.LandmarkTracks;
+import org.solewright.analysis.gait.Mirror;
+import org.solewright.domain.finding.Finding;
 import org.solewright.domain.foot.Landmark;
+import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.SidedLandmark;
 import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.geometry.Vec3;
+import org.solewright.domain.motion.Recording;
 
 /** One or several standing recordings, pooled: where labels and landmarks were on the mean. Laboratory frame, m. */
 final class StandingTrial {
 
     private static final double SNAP = Math.cos(Math.toRadians(20));
 
+    private static final double LEVEL = Math.cos(Math.toRadians(2));
+
     private final List<LandmarkTracks> tracks;
 
     StandingTrial(List<LandmarkTracks> tracks) {
         this.tracks = List.copyOf(tracks);
+    }
+
+    /** The landmarks of standing recordings; mirrored, if asked for, across a plane through up. */
+    static StandingTrial of(LandmarkMap map, List<Recording> standing, boolean isMirrored, List<Finding> findings) {
+        List<LandmarkTracks> tracks = new ArrayList<>();
+        for (Recording r : standing) {
+            Recording seen = r;
+            if (isMirrored) {
+                Vec3 up = new StandingTrial(List.of(LandmarkTracks.of(r, map, 0, new ArrayList<>())))
+                        .up()
+                        .orElse(Vec3.Z);
+                seen = Mirror.of(r, up);
+            }
+            tracks.add(LandmarkTracks.of(seen, map, 0, findings));
+        }
+        return new StandingTrial(tracks);
     }
 
     List<LandmarkTracks> tracks() {
@@ -93,6 +115,19 @@ final class StandingTrial {
             }
         }
         return sum.norm() > 0.5 ? Optional.of(sum.unit()) : Optional.empty();
+    }
+
+    /** Up from the platforms of walking, else of standing, else from the subject; empty where none says. */
+    Optional<Vec3> up(List<Recording> walking) {
+        Vec3 sum = Vec3.ZERO;
+        for (Recording r : walking) {
+            for (PlatformLoads p : r.platforms()) {
+                sum = sum.plus(p.up());
+            }
+        }
+        Optional<Vec3> platforms = sum.norm() > 0.5 ? Optional.of(sum.unit()) : platformUp();
+        // The standing trial's floor is level in its own laboratory axes: small tilts of platform corners are not up.
+        return platforms.map(p -> up().filter(s -> s.dot(p) > LEVEL).orElse(p)).or(this::up);
     }
 
     /**

@@ -52,6 +52,10 @@ abstract class DemoCalls {
                 "--landmarks",
                 at("landmarks.xml")));
         args.addAll(Arrays.asList(more));
+        if (!args.contains("--runs")) {
+            // Few Monte Carlo runs: their number is not what these calls are about.
+            args.addAll(List.of("--runs", "3"));
+        }
         return call(args.toArray(String[]::new));
     }
 }

@@ -55,7 +55,7 @@ public record Rotation(Vec3 x, Vec3 y, Vec3 z) {
      * Rotation about an axis.
      *
      * @param w along the axis, as long as the angle, rad
-     * @return the rotation [Rodrigues 1840]; the identity for a vector of length 0
+     * @return the rotation, by the formula of Rodrigues; the identity for a vector of length 0
      */
     public static Rotation ofVector(Vec3 w) {
         double angle = w.norm();

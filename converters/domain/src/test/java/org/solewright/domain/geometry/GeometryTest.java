@@ -84,4 +84,17 @@ class GeometryTest {
         assertThat(twice.transformPosition(p).distance(x_AB.transformPosition(x_AB.transformPosition(p))))
                 .isCloseTo(0, within(ROUNDING));
     }
+
+    @Test
+    void rotationVectorTurnsByItsLength() {
+        // exact: a quarter turn about z carries x to y; the vector of a rotation is the one it was made of.
+        Rotation quarter = Rotation.ofVector(new Vec3(0, 0, Math.PI / 2));
+        assertThat(quarter.transformVector(Vec3.X).distance(Vec3.Y)).isLessThan(1e-15);
+        Vec3 w = new Vec3(0.3, -0.7, 1.1);
+        assertThat(Rotation.ofVector(w).vector().distance(w)).isLessThan(1e-14);
+        assertThat(Rotation.ofVector(Vec3.ZERO)).isEqualTo(Rotation.IDENTITY);
+        assertThat(Rotation.IDENTITY.vector()).isEqualTo(Vec3.ZERO);
+        Vec3 tiny = new Vec3(1e-9, 0, -2e-9);
+        assertThat(Rotation.ofVector(tiny).vector().distance(tiny)).isLessThan(1e-20);
+    }
 }
