@@ -78,8 +78,18 @@ public final class FitUseCase {
             }
         }
 
-        /** A request with the default number of runs. */
-        Request(
+        /**
+         * A request with the default number of Monte Carlo runs.
+         *
+         * @param gait recordings and subject; at least one standing recording
+         * @param sides sides to be fitted
+         * @param isBothAsked whether a side without landmarks is left out with a warning instead of an error
+         * @param segments parts of the foot; empty: as many as the landmarks allow
+         * @param inertia table of masses and moments of inertia
+         * @param subjectId identifier without personal data
+         * @param version version of the tool
+         */
+        public Request(
                 GaitOptions gait,
                 Set<Side> sides,
                 boolean isBothAsked,
