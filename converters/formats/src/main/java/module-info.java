@@ -18,6 +18,8 @@ module org.solewright.formats {
             jakarta.xml.bind;
     opens org.solewright.formats.footmodel.footxml to
             jakarta.xml.bind;
+    opens org.solewright.formats.footmodel.planxml to
+            jakarta.xml.bind;
     opens org.solewright.formats.footmodel.landmarksxml to
             jakarta.xml.bind;
     opens org.solewright.formats.footmodel.resultsxml to

@@ -31,6 +31,7 @@ class ArchitectureTest {
     private static final String ROOT = "org.solewright.";
     private static final String[] GENERATED = {
         ROOT + "formats.footmodel.landmarksxml..",
+        ROOT + "formats.footmodel.planxml..",
         ROOT + "formats.footmodel.resultsxml..",
         ROOT + "formats.footmodel.studyxml..",
         ROOT + "formats.footmodel.footxml..",

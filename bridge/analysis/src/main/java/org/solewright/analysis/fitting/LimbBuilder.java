@@ -1,6 +1,7 @@
 package org.solewright.analysis.fitting;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
@@ -8,6 +9,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Quantity;
+import org.solewright.domain.foot.ChainPlan;
 import org.solewright.domain.foot.InertiaTensor;
 import org.solewright.domain.foot.Joint;
 import org.solewright.domain.foot.Landmark;
@@ -36,7 +38,7 @@ final class LimbBuilder {
     private final double floorHeight;
     private final Located knee;
     private final Located toeTip;
-    private final Located midtarsal;
+    private final List<FootJoints.Between> joints;
     private final Map<SegmentName, Vec3> origins = new EnumMap<>(SegmentName.class);
     private Optional<FootSplit> split = Optional.empty();
 
@@ -47,19 +49,15 @@ final class LimbBuilder {
         this.plan = plan;
         this.floorHeight = floorHeight;
         knee = centres.knee();
-        toeTip = limb.toeTip(
+        Located tip = limb.toeTip(
                 settings.adultRegression(), floorHeight, settings.markerRadius().value());
-        midtarsal = limb.midtarsal(settings.adultRegression());
+        FootJoints foot = new FootJoints(settings, limb, tip);
+        Optional<ChainPlan> own = settings.choices().plan();
+        toeTip = own.flatMap(p -> foot.place(p.tip())).orElse(tip);
+        joints = own.flatMap(foot::of).orElseGet(() -> foot.of(plan));
         origins.put(SegmentName.SHANK, knee.position());
-        for (SegmentName name : plan.foot()) {
-            origins.put(
-                    name,
-                    switch (name) {
-                        case TOES -> limb.heads();
-                        case FOREFOOT -> midtarsal.position();
-                        default -> Vec3.ZERO;
-                    });
-        }
+        origins.put(plan.rear(), Vec3.ZERO);
+        joints.forEach(j -> origins.put(j.distal(), j.centre().position()));
     }
 
     /** Origins of the segments in A. */
@@ -84,26 +82,54 @@ final class LimbBuilder {
     Optional<List<Segment>> segments() {
         List<Segment> segments = new ArrayList<>();
         segments.add(segment(
-                SegmentName.SHANK, Optional.empty(), shank(), knee.position().norm()));
-        BodyMoments whole = foot();
-        List<BodyMoments> parts = List.of(whole);
-        if (plan.foot().size() > 1) {
+                SegmentName.SHANK, Optional.empty(), shank(), knee.position().norm(), tableBasis(), knee.basis()));
+        List<Basis> bases = Collections.nCopies(plan.foot().size(), Basis.ASSUMED);
+        List<BodyMoments> parts;
+        Optional<ChainPlan> own = settings.choices().plan();
+        if (own.isPresent()) {
+            PlannedMasses masses =
+                    PlannedMasses.of(own.get(), ends(), settings.mass().value());
+            parts = masses.moments();
+            bases = masses.bases();
+        } else if (plan.foot().size() == 1) {
+            parts = List.of(foot());
+            bases = List.of(tableBasis());
+        } else {
             split = FootSplit.of(
-                    whole, limb, floorHeight, settings.markerRadius().value(), toeTip.position(), planes());
+                    foot(), limb, floorHeight, settings.markerRadius().value(), toeTip.position(), planes());
             if (split.isEmpty()) {
                 return Optional.empty();
             }
             parts = split.get().parts();
         }
+        List<Vec3> ends = ends();
         SegmentName parent = SegmentName.SHANK;
         for (int i = 0; i < parts.size(); i++) {
             SegmentName name = plan.foot().get(i);
-            boolean last = i == parts.size() - 1;
-            Vec3 end = last ? toeTip.position() : origin(plan.foot().get(i + 1));
-            segments.add(segment(name, Optional.of(parent), parts.get(i), end.distance(origin(name))));
+            double length = ends.get(i).distance(ends.get(i + 1));
+            segments.add(segment(name, Optional.of(parent), parts.get(i), length, bases.get(i), lengthBasis(i)));
             parent = name;
         }
         return Optional.of(List.copyOf(segments));
+    }
+
+    /** Ankle, joints and tip in A. */
+    private List<Vec3> ends() {
+        List<Vec3> ends = new ArrayList<>();
+        ends.add(Vec3.ZERO);
+        joints.forEach(j -> ends.add(j.centre().position()));
+        ends.add(toeTip.position());
+        return ends;
+    }
+
+    /** The weaker of the bases of a segment's two ends. */
+    private Basis lengthBasis(int segment) {
+        Basis rear =
+                segment == 0 ? Basis.MEASURED : joints.get(segment - 1).centre().basis();
+        Basis front = segment == joints.size()
+                ? toeTip.basis()
+                : joints.get(segment).centre().basis();
+        return rear.compareTo(front) > 0 ? rear : front;
     }
 
     private Vec3 origin(SegmentName name) {
@@ -114,26 +140,29 @@ final class LimbBuilder {
      * One segment. How a foot's mass falls to its slices is an assumption, though their sum is not; of a table with one
      * radius of gyration (Dempster) so is the tensor.
      */
-    private Segment segment(SegmentName name, Optional<SegmentName> parent, BodyMoments moments, double length) {
-        boolean sliced = split.isPresent() && name != SegmentName.SHANK;
-        Basis basis = sliced ? Basis.ASSUMED : tableBasis();
-        Basis tensorBasis = settings.inertia() == InertiaTable.DEMPSTER ? Basis.ASSUMED : basis;
+    private Segment segment(
+            SegmentName name,
+            Optional<SegmentName> parent,
+            BodyMoments moments,
+            double length,
+            Basis basis,
+            Basis lengthBasis) {
+        boolean isDistorted = settings.inertia() == InertiaTable.DEMPSTER
+                || (settings.choices().plan().isPresent() && name != SegmentName.SHANK);
         double share = moments.mass() / settings.mass().value();
         OptionalDouble bodySd = settings.mass().sd();
         OptionalDouble sd =
                 bodySd.isPresent() ? OptionalDouble.of(share * bodySd.getAsDouble()) : OptionalDouble.empty();
-        Basis lengthBasis = name == SegmentName.SHANK
-                ? knee.basis()
-                : name == plan.toes()
-                        ? toeTip.basis()
-                        : name == SegmentName.HINDFOOT ? midtarsal.basis() : Basis.MEASURED;
+        Basis within = isDistorted ? Basis.ASSUMED : basis;
         return new Segment(
                 name,
                 parent,
                 new Quantity(moments.mass(), basis, sd),
-                Located.of(moments.centre().minus(origin(name)), basis),
+                Located.of(
+                        moments.centre().minus(origin(name)),
+                        settings.choices().plan().isPresent() ? within : basis),
                 moments.inertia(),
-                tensorBasis,
+                within,
                 Quantity.of(length, lengthBasis),
                 false);
     }
@@ -171,39 +200,7 @@ final class LimbBuilder {
     }
 
     private List<FootSplit.Plane> planes() {
-        List<FootSplit.Plane> planes = new ArrayList<>();
-        if (plan.foot().contains(SegmentName.FOREFOOT)) {
-            planes.add(new FootSplit.Plane(midtarsal.position(), forward(midtarsalAxis())));
-        }
-        planes.add(new FootSplit.Plane(limb.heads(), forward(headAxis())));
-        return planes;
-    }
-
-    /** Horizontal normal of a vertical plane through a line across the foot, pointing to the toes. */
-    private static Vec3 forward(Joint.Axis across) {
-        return Vec3.Y.cross(across.direction()).unit();
-    }
-
-    private Joint.Axis headAxis() {
-        Vec3 first = limb.required(Landmark.METATARSAL_1_HEAD);
-        Vec3 fifth = limb.required(Landmark.METATARSAL_5_HEAD);
-        return axis("metatarsophalangeal", first, fifth, Basis.MEASURED);
-    }
-
-    private Joint.Axis midtarsalAxis() {
-        if (limb.hasMidtarsalLandmarks()) {
-            return axis(
-                    "midtarsal",
-                    limb.required(Landmark.NAVICULAR_TUBEROSITY),
-                    limb.required(Landmark.CUBOID),
-                    Basis.MEASURED);
-        }
-        return new Joint.Axis("midtarsal", Vec3.Z, Basis.ASSUMED, OptionalDouble.empty());
-    }
-
-    private static Joint.Axis axis(String name, Vec3 a, Vec3 b, Basis basis) {
-        double sd = Math.sqrt(2) * LimbGeometry.FOOT_PLACEMENT_SD / a.distance(b);
-        return new Joint.Axis(name, LimbGeometry.acrossToTheRight(a, b), basis, OptionalDouble.of(sd));
+        return joints.stream().map(FootJoints.Between::plane).toList();
     }
 
     /**
@@ -213,28 +210,22 @@ final class LimbBuilder {
      */
     List<Joint> joints() {
         double middleSd = LimbGeometry.FOOT_PLACEMENT_SD / Math.sqrt(2);
-        List<Joint> joints = new ArrayList<>();
-        joints.add(ankle(new Located(knee.position().times(-1), Basis.MEASURED, OptionalDouble.of(middleSd))));
-        if (plan.foot().contains(SegmentName.FOREFOOT)) {
-            joints.add(hinge(midtarsalAxis(), SegmentName.HINDFOOT, SegmentName.FOREFOOT, midtarsal));
+        List<Joint> all = new ArrayList<>();
+        all.add(ankle(new Located(knee.position().times(-1), Basis.MEASURED, OptionalDouble.of(middleSd))));
+        for (FootJoints.Between j : joints) {
+            SegmentName proximal = plan.before(j.distal());
+            Located centre = new Located(
+                    j.centre().position().minus(origin(proximal)),
+                    j.centre().basis(),
+                    j.centre().sd());
+            all.add(hinge(j.axis(), proximal, j.distal(), centre));
         }
-        if (plan.foot().size() > 1) {
-            Vec3 centre = limb.heads().minus(origin(plan.heads()));
-            joints.add(hinge(
-                    headAxis(),
-                    plan.heads(),
-                    SegmentName.TOES,
-                    new Located(centre, Basis.MEASURED, OptionalDouble.of(middleSd))));
-        }
-        return List.copyOf(joints);
+        return List.copyOf(all);
     }
 
     private Joint ankle(Located centre) {
-        Joint.Axis talocrural = axis(
-                "talocrural",
-                limb.required(Landmark.MALLEOLUS_MEDIAL),
-                limb.required(Landmark.MALLEOLUS_LATERAL),
-                Basis.MEASURED);
+        Joint.Axis talocrural = FootJoints.through(
+                "talocrural", limb.required(Landmark.MALLEOLUS_MEDIAL), limb.required(Landmark.MALLEOLUS_LATERAL));
         if (!settings.isHuman()) {
             return new Joint(
                     "ankle",
@@ -282,15 +273,16 @@ final class LimbBuilder {
     List<LandmarkPosition> landmarks(StandingPosture posture) {
         List<LandmarkPosition> out = new ArrayList<>();
         for (Landmark landmark : Landmark.values()) {
-            if (SegmentPlan.carries(landmark)) {
-                SegmentName carrier = plan.carrier(landmark);
+            Optional<SegmentName> carrier = plan.carrier(landmark);
+            if (carrier.isPresent()) {
+                SegmentName segment = carrier.get();
                 limb.point(landmark)
                         .ifPresent(
-                                p -> out.add(new LandmarkPosition(landmark.word(), carrier, p.minus(origin(carrier)))));
+                                p -> out.add(new LandmarkPosition(landmark.word(), segment, p.minus(origin(segment)))));
                 List<Vec3> cluster = posture.cluster(landmark, limb.side());
                 for (int i = 0; i < cluster.size(); i++) {
                     Vec3 p = limb.ankleFrame().inversePosition(cluster.get(i));
-                    out.add(new LandmarkPosition(landmark.word() + "." + (i + 1), carrier, p.minus(origin(carrier))));
+                    out.add(new LandmarkPosition(landmark.word() + "." + (i + 1), segment, p.minus(origin(segment))));
                 }
             }
         }

@@ -40,6 +40,9 @@ final class LimbGeometry {
     /** Heel to midtarsal joint over heel to metatarsal heads (design 03 section 5, regression). */
     private static final double MIDTARSAL_SHARE = 0.38;
 
+    /** Heel to middle of the metatarsal bases over heel to heads (proportions of the skeleton, from memory). */
+    private static final double TARSOMETATARSAL_SHARE = 0.64;
+
     private final Side side;
     private final Pose x_LA;
     private final Map<Landmark, Vec3> points;
@@ -163,6 +166,28 @@ final class LimbGeometry {
         }
         Vec3 heel = required(Landmark.CALCANEUS_POSTERIOR);
         return Located.of(heel.plus(heads().minus(heel).times(MIDTARSAL_SHARE)), human);
+    }
+
+    /**
+     * Middle of the metatarsal bases, the tarsometatarsal joint's centre in A; without both of them a share of the way
+     * from heel to heads.
+     */
+    Located tarsometatarsal() {
+        Optional<Vec3> first = point(Landmark.METATARSAL_1_BASE);
+        Optional<Vec3> fifth = point(Landmark.METATARSAL_5_BASE);
+        if (first.isPresent() && fifth.isPresent()) {
+            return new Located(
+                    first.get().plus(fifth.get()).times(0.5),
+                    Basis.MEASURED,
+                    OptionalDouble.of(FOOT_PLACEMENT_SD / Math.sqrt(2)));
+        }
+        Vec3 heel = required(Landmark.CALCANEUS_POSTERIOR);
+        return Located.of(heel.plus(heads().minus(heel).times(TARSOMETATARSAL_SHARE)), Basis.ASSUMED);
+    }
+
+    boolean hasMetatarsalBases() {
+        return point(Landmark.METATARSAL_1_BASE).isPresent()
+                && point(Landmark.METATARSAL_5_BASE).isPresent();
     }
 
     boolean hasMidtarsalLandmarks() {

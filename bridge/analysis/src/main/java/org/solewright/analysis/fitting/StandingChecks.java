@@ -62,7 +62,7 @@ final class StandingChecks {
     }
 
     /** About missing landmarks of one side. */
-    static List<Finding> missing(LimbGeometry limb, JointCentres centres, SegmentPlan plan, StandingSettings settings) {
+    static List<Finding> missing(LimbGeometry limb, JointCentres centres, StandingSettings settings) {
         List<Finding> findings = new ArrayList<>();
         String side = limb.side().word();
         if (limb.point(Landmark.FEMORAL_EPICONDYLE_MEDIAL).isEmpty()
@@ -96,13 +96,6 @@ final class StandingChecks {
                     side,
                     side + " foot has no toe landmark: its length is the distance from heel to first metatarsal head"
                             + " over " + LimbGeometry.HEAD_SHARE));
-        }
-        if (plan.foot().size() == StandingSettings.MOST_SEGMENTS && !limb.hasMidtarsalLandmarks()) {
-            findings.add(Finding.note(
-                    "midtarsal.regression",
-                    side,
-                    side + " foot has not both navicular tuberosity and cuboid: the midtarsal joint is put by"
-                            + " regression"));
         }
         return findings;
     }

@@ -103,6 +103,34 @@ public record StandingLimb(
     }
 
     /**
+     * The limb with other joints.
+     *
+     * @param newJoints proximal to distal
+     * @return the limb
+     */
+    public StandingLimb withJoints(List<Joint> newJoints) {
+        return new StandingLimb(
+                side,
+                subjectId,
+                mass,
+                stature,
+                population,
+                sex,
+                hip,
+                knee,
+                ankle,
+                floor,
+                limbLength,
+                footLength,
+                poses,
+                segments,
+                newJoints,
+                landmarks,
+                pads,
+                findings);
+    }
+
+    /**
      * Whose foot it is, for a model.
      *
      * @param effectiveFootLength travel of the centre of pressure in the limb frame, m; empty where unknown

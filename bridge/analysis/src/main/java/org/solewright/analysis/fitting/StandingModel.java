@@ -14,7 +14,6 @@ import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.foot.Landmark;
 import org.solewright.domain.foot.Located;
 import org.solewright.domain.foot.Pad;
-import org.solewright.domain.foot.Segment;
 import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.foot.SidedLandmark;
 import org.solewright.domain.gait.Side;
@@ -85,15 +84,26 @@ public final class StandingModel {
             JointCentres centres) {
         Side side = limb.side();
         double floorHeight = heightInAnkleFrame(posture, limb, floor);
-        SegmentPlan plan = SegmentPlan.of(settings.segments().orElseGet(() -> SegmentPlan.most(limb)));
-        LimbBuilder builder = new LimbBuilder(settings, limb, plan, floorHeight, centres);
-        Optional<List<Segment>> segments = builder.segments();
-        if (segments.isEmpty()) {
+        List<Landmark> lacking = settings.choices()
+                .plan()
+                .map(p -> new FootJoints(settings, limb, limb.toeTip(Basis.ASSUMED, floorHeight, 0)).missing(p))
+                .orElse(List.of());
+        if (!lacking.isEmpty()) {
+            return new StandingOutcome.Refused(
+                    "the standing trial has no " + side.word() + " "
+                            + String.join(
+                                    ", ", lacking.stream().map(Landmark::word).toList())
+                            + ", where the segment plan puts a joint or the tip",
+                    "record it, name its label in the landmark map, or change the plan");
+        }
+        Optional<DividedFoot> divided = DividedFoot.of(settings, limb, floorHeight, centres);
+        if (divided.isEmpty()) {
             return new StandingOutcome.Refused(
                     "the " + side.word() + " foot's landmarks do not leave room for "
-                            + plan.foot().size() + " segments",
+                            + settings.segments().orElseGet(() -> SegmentPlan.most(limb)) + " segments",
                     "check the landmarks of toe, metatarsal heads and midfoot, or use --segments 1");
         }
+        LimbBuilder builder = divided.get().builder();
         Optional<Quantity> footLength = footLength(limb, settings);
         Quantity limbLength = new Quantity(
                 centres.hip().position().y() - floorHeight,
@@ -123,11 +133,11 @@ public final class StandingModel {
                 limbLength,
                 footLength,
                 poses(limb, builder),
-                segments.get(),
+                divided.get().segments(),
                 builder.joints(),
                 builder.landmarks(posture),
-                pads(settings, limb, plan, builder, floorHeight, scale),
-                findings(posture, settings, limb, plan, builder, floor, centres, limbLength, footLength)));
+                pads(settings, limb, divided.get().plan(), builder, floorHeight, scale),
+                findings(posture, settings, limb, divided.get(), floor, centres, limbLength, footLength)));
     }
 
     private static List<Pad> pads(
@@ -157,8 +167,7 @@ public final class StandingModel {
             StandingPosture posture,
             StandingSettings settings,
             LimbGeometry limb,
-            SegmentPlan plan,
-            LimbBuilder builder,
+            DividedFoot divided,
             Quantity floor,
             JointCentres centres,
             Quantity limbLength,
@@ -175,7 +184,8 @@ public final class StandingModel {
                                     + " the marker radius",
                             floor.value())));
         }
-        findings.addAll(StandingChecks.missing(limb, centres, plan, settings));
+        findings.addAll(StandingChecks.missing(limb, centres, settings));
+        findings.addAll(divided.findings());
         otherLimbLength(posture, settings, limb.side().opposite(), floor).ifPresent(other -> {
             boolean right = limb.side() == Side.RIGHT;
             double own = limbLength.value();
@@ -183,6 +193,7 @@ public final class StandingModel {
                     StandingChecks.limbLengths(posture, right ? own : other, right ? other : own, floor.value()));
         });
         if (settings.isHuman()) {
+            findings.addAll(UprightChecks.of(limb, centres));
             double ankleHeight = -heightInAnkleFrame(posture, limb, floor);
             settings.stature()
                     .ifPresent(stature -> findings.addAll(StandingChecks.plausibility(
@@ -192,7 +203,10 @@ public final class StandingModel {
                             ankleHeight,
                             limbLength.value())));
         }
-        builder.split().flatMap(s -> StandingChecks.distorted(limb.side(), s)).ifPresent(findings::add);
+        divided.builder()
+                .split()
+                .flatMap(s -> StandingChecks.distorted(limb.side(), s))
+                .ifPresent(findings::add);
         return findings;
     }
 

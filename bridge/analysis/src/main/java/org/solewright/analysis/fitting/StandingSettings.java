@@ -16,8 +16,9 @@ import org.solewright.domain.foot.Sex;
  * @param population whose regressions apply
  * @param sex empty where not given
  * @param markerRadius from a marker's centre to the skin, m
- * @param segments parts of the foot, 1 to 3; empty for as many as the landmarks allow
+ * @param segments parts of the foot, 1 to 6; empty for as many as the landmarks allow
  * @param inertia which table the masses and moments of inertia come from
+ * @param choices how the foot is divided beyond that
  */
 public record StandingSettings(
         String subjectId,
@@ -27,13 +28,11 @@ public record StandingSettings(
         Optional<Sex> sex,
         Quantity markerRadius,
         OptionalInt segments,
-        InertiaTable inertia) {
+        InertiaTable inertia,
+        FootChoices choices) {
 
     /** Marker radius where none is given, m (common practice, 14 mm markers). */
     public static final Quantity DEFAULT_MARKER_RADIUS = Quantity.of(0.007, Basis.ASSUMED);
-
-    /** Most parts of a foot. */
-    static final int MOST_SEGMENTS = 3;
 
     /** Checks mass, marker radius and number of segments. */
     public StandingSettings {
@@ -43,9 +42,34 @@ public record StandingSettings(
         if (!(markerRadius.value() >= 0)) {
             throw new IllegalArgumentException("marker radius " + markerRadius.value() + " m, expected 0 m or more");
         }
-        if (segments.isPresent() && (segments.getAsInt() < 1 || segments.getAsInt() > MOST_SEGMENTS)) {
-            throw new IllegalArgumentException(segments.getAsInt() + " foot segments, expected 1 to " + MOST_SEGMENTS);
+        if (segments.isPresent() && (segments.getAsInt() < 1 || segments.getAsInt() > SegmentPlan.MOST)) {
+            throw new IllegalArgumentException(
+                    segments.getAsInt() + " foot segments, expected 1 to " + SegmentPlan.MOST);
         }
+    }
+
+    /**
+     * Settings with the usual choices.
+     *
+     * @param subjectId identifier without personal data
+     * @param mass body mass, kg
+     * @param stature body height, m; empty where not given
+     * @param population whose regressions apply
+     * @param sex empty where not given
+     * @param markerRadius from a marker's centre to the skin, m
+     * @param segments parts of the foot, 1 to 6; empty for as many as the landmarks allow
+     * @param inertia which table the masses and moments of inertia come from
+     */
+    public StandingSettings(
+            String subjectId,
+            Quantity mass,
+            Optional<Quantity> stature,
+            Population population,
+            Optional<Sex> sex,
+            Quantity markerRadius,
+            OptionalInt segments,
+            InertiaTable inertia) {
+        this(subjectId, mass, stature, population, sex, markerRadius, segments, inertia, FootChoices.DEFAULT);
     }
 
     /**

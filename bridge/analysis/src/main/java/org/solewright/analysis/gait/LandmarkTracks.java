@@ -47,7 +47,7 @@ public final class LandmarkTracks {
         List<String> recorded =
                 recording.points().stream().map(PointTrack::label).toList();
         Optional<LowPass> filter = cutoff > 0 && recording.frames() > 1
-                ? Optional.of(LowPass.of(Math.min(cutoff, MOST_OF_RATE * recording.rate()), recording.rate()))
+                ? Optional.of(LowPass.of(Math.min(cutoff, highestCutoff(recording.rate())), recording.rate()))
                 : Optional.empty();
         Map<String, double[]> smoothed = new LinkedHashMap<>();
         int zeros = 0;
@@ -75,6 +75,16 @@ public final class LandmarkTracks {
                     zeros + " samples of mapped points lie exactly at 0, 0, 0 and are taken as missing"));
         }
         return tracks;
+    }
+
+    /**
+     * The highest low-pass that is used at a point rate.
+     *
+     * @param rate Hz
+     * @return Hz, 0.4 of the rate
+     */
+    public static double highestCutoff(double rate) {
+        return MOST_OF_RATE * rate;
     }
 
     private static double[] samples(Recording recording, String label) {

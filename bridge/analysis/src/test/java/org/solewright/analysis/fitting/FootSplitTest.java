@@ -26,9 +26,15 @@ class FootSplitTest {
     }
 
     @ParameterizedTest
-    @ValueSource(ints = {2, 3})
+    @ValueSource(ints = {2, 3, 4, 5, 6})
     void partsRecombineToTheRigidFoot(int parts) {
-        InventedSubject subject = new InventedSubject();
+        recombine(new InventedSubject(), parts);
+        InventedSubject landmarked = new InventedSubject();
+        landmarked.putAllJoints();
+        recombine(landmarked, parts);
+    }
+
+    private static void recombine(InventedSubject subject, int parts) {
         subject.segments = OptionalInt.of(1);
         StandingLimb whole = subject.limb(Side.RIGHT);
         Segment foot = whole.segments().get(1);
@@ -40,6 +46,11 @@ class FootSplitTest {
         Vec3 first = Vec3.ZERO;
         for (Segment s : split.segments().subList(1, parts + 1)) {
             assertThat(s.mass().value()).as(s.name().word()).isPositive();
+            InertiaTensor t = s.inertia();
+            // exact: of any body each moment is less than the sum of the two others
+            assertThat(t.xx()).isLessThan(t.yy() + t.zz());
+            assertThat(t.yy()).isLessThan(t.xx() + t.zz());
+            assertThat(t.zz()).isLessThan(t.xx() + t.yy());
             mass += s.mass().value();
             first = first.plus(inFoot(split, s).times(s.mass().value()));
         }

@@ -31,6 +31,7 @@ final class InventedSubject {
     Optional<Quantity> stature = Optional.empty();
     OptionalInt segments = OptionalInt.empty();
     InertiaTable inertia = InertiaTable.DE_LEVA;
+    FootChoices choices = FootChoices.DEFAULT;
 
     InventedSubject() {
         for (Side side : Side.values()) {
@@ -70,6 +71,16 @@ final class InventedSubject {
         landmarks.remove(new SidedLandmark(landmark, Side.RIGHT));
     }
 
+    /** Landmarks of midfoot, metatarsal bases and joints of the toes on both sides. */
+    void putAllJoints() {
+        putBoth(Landmark.NAVICULAR_TUBEROSITY, 0.045, 0.045, 0.055);
+        putBoth(Landmark.CUBOID, 0.035, 0.03, 0.145);
+        putBoth(Landmark.METATARSAL_1_BASE, 0.075, 0.04, 0.06);
+        putBoth(Landmark.METATARSAL_5_BASE, 0.055, 0.02, 0.14);
+        putBoth(Landmark.INTERPHALANGEAL_1, 0.155, 0.018, 0.10);
+        putBoth(Landmark.INTERPHALANGEAL_2, 0.172, 0.016, 0.10);
+    }
+
     StandingPosture posture() {
         return new StandingPosture(landmarks, clusters, Vec3.Z, floor);
     }
@@ -83,7 +94,8 @@ final class InventedSubject {
                 sex,
                 StandingSettings.DEFAULT_MARKER_RADIUS,
                 segments,
-                inertia);
+                inertia,
+                choices);
     }
 
     StandingOutcome build(Side side) {

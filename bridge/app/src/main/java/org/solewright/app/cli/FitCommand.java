@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
 import java.util.concurrent.Callable;
@@ -70,9 +71,23 @@ final class FitCommand implements Callable<Integer> {
     @Option(
             names = "--segments",
             paramLabel = "N",
-            description = "Parts of the foot, 1 to 3 (default: as many as the landmarks allow).")
+            description = "Parts of the foot, 1 to 6 (default: as many as the landmarks allow).")
     @Nullable
     private Integer segments;
+
+    @Option(
+            names = "--plan",
+            paramLabel = "P.xml",
+            description = "Segment plan of your own, such as an animal's digit, in place of --segments.")
+    private Optional<Path> plan = Optional.empty();
+
+    @Option(
+            names = "--mtp-offset",
+            paramLabel = "KIND",
+            defaultValue = "none",
+            description = "Where the toes turn: none (line of the metatarsal heads) or functional (16 %% of foot length"
+                    + " before it, 2 %% above; default: ${DEFAULT-VALUE}).")
+    private String toeAxis = "none";
 
     @Option(
             names = "--inertia",
@@ -114,9 +129,15 @@ final class FitCommand implements Callable<Integer> {
     @Override
     public Integer call() throws UseCaseException, FormatException {
         GaitOptions options = gait.options(standing, stature, population, sex, false);
-        if (segments != null && (segments < 1 || segments > 3)) {
+        if (segments != null && (segments < 1 || segments > 6)) {
             throw GaitArguments.usage(
-                    "--segments", segments + " parts of the foot, this version knows 1 to 3", "use 1, 2 or 3");
+                    "--segments", segments + " parts of the foot, expected 1 to 6", "use 1 to 6, or a plan by --plan");
+        }
+        if (segments != null && plan.isPresent()) {
+            throw GaitArguments.usage("--plan", "is given together with --segments", "give one of them");
+        }
+        if (!toeAxis.equals("none") && !toeAxis.equals("functional")) {
+            throw GaitArguments.usage("--mtp-offset", "'" + toeAxis + "' is unknown", "use none or functional");
         }
         if (runs < 0 || runs > MOST_RUNS) {
             throw GaitArguments.usage(
@@ -128,6 +149,7 @@ final class FitCommand implements Callable<Integer> {
                 side.equals("both"),
                 segments == null ? OptionalInt.empty() : OptionalInt.of(segments),
                 table(),
+                new FitUseCase.Division(plan, toeAxis.equals("functional")),
                 subject,
                 Version.NUMBER,
                 runs,

@@ -50,6 +50,22 @@ final class GaitArguments {
     private double markerCutoff;
 
     @Option(
+            names = "--marker-cutoff",
+            paramLabel = "KIND",
+            description =
+                    "residual: find the low-pass for markers by residual analysis, in place of --marker-low-pass.")
+    @Nullable
+    private String cutoffKind;
+
+    @Option(
+            names = "--zero",
+            paramLabel = "KIND",
+            defaultValue = "standing",
+            description = "Where joint angles are zero: in the standing trial or at foot flat: standing or flat"
+                    + " (default: ${DEFAULT-VALUE}).")
+    private String zero = "standing";
+
+    @Option(
             names = "--events",
             paramLabel = "KIND",
             defaultValue = "platform",
@@ -99,6 +115,12 @@ final class GaitArguments {
         if (!events.equals("platform") && !events.equals("file") && !events.equals("kinematic")) {
             throw usage("--events", "'" + events + "' is unknown", "use platform, file or kinematic");
         }
+        if (cutoffKind != null && !cutoffKind.equals("residual")) {
+            throw usage("--marker-cutoff", "'" + cutoffKind + "' is unknown", "use residual, or --marker-low-pass HZ");
+        }
+        if (!zero.equals("standing") && !zero.equals("flat")) {
+            throw usage("--zero", "'" + zero + "' is unknown", "use standing or flat");
+        }
         check("--belt-speed", beltSpeed, 0, 20, "m/s");
         if (isMirrored && annotate.isPresent()) {
             throw usage(
@@ -127,7 +149,9 @@ final class GaitArguments {
                 isFlagIgnored,
                 beltSpeed,
                 events,
-                annotate);
+                annotate,
+                cutoffKind != null,
+                zero.equals("flat"));
     }
 
     /** Recordings with a landmark map, or a map of results. */

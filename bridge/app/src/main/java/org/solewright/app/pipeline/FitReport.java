@@ -59,7 +59,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         result.angles().values().forEach(a -> curves.addAll(a.rows()));
         files.put("fit-curves.csv", CurvesTable.bytes(curves));
         files.put("fit-uncertainty.csv", UncertaintyTable.bytes(result.numbers()));
-        List<Path> written = OutputFolder.of(out, request.gait().inputs()).write(files);
+        List<Path> written = OutputFolder.of(out, request.inputs()).write(files);
         List<String> lines = new ArrayList<>();
         result.models().values().forEach(m -> describe(lines, m));
         lines.add("contacts:");

@@ -1,5 +1,6 @@
 package org.solewright.app.pipeline;
 
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -8,6 +9,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
 import java.util.Set;
+import org.solewright.analysis.fitting.FootChoices;
 import org.solewright.analysis.fitting.InertiaTable;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.fitting.StandingModel;
@@ -18,15 +20,18 @@ import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
+import org.solewright.domain.finding.Found;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.finding.Severity;
 import org.solewright.domain.finding.SourceFile;
+import org.solewright.domain.foot.ChainPlan;
 import org.solewright.domain.foot.FittedNumber;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.SegmentName;
+import org.solewright.domain.foot.Setting;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.gait.Side;
 import org.solewright.domain.gait.Stance;
@@ -46,8 +51,9 @@ public final class FitUseCase {
      * @param gait recordings and subject; at least one standing recording
      * @param sides sides to be fitted
      * @param isBothAsked whether a side without landmarks is left out with a warning instead of an error
-     * @param segments parts of the foot; empty: as many as the landmarks allow, up to three
+     * @param segments parts of the foot, 1 to 6; empty: as many as the landmarks allow
      * @param inertia table of masses and moments of inertia
+     * @param division plan file and axis of the toes
      * @param subjectId identifier without personal data
      * @param version version of the tool
      * @param runs Monte Carlo runs behind the uncertainties; 0: none
@@ -59,6 +65,7 @@ public final class FitUseCase {
             boolean isBothAsked,
             OptionalInt segments,
             InertiaTable inertia,
+            Division division,
             String subjectId,
             String version,
             int runs,
@@ -97,8 +104,37 @@ public final class FitUseCase {
                 InertiaTable inertia,
                 String subjectId,
                 String version) {
-            this(gait, sides, isBothAsked, segments, inertia, subjectId, version, DEFAULT_RUNS, DEFAULT_SEED);
+            this(
+                    gait,
+                    sides,
+                    isBothAsked,
+                    segments,
+                    inertia,
+                    Division.DEFAULT,
+                    subjectId,
+                    version,
+                    DEFAULT_RUNS,
+                    DEFAULT_SEED);
         }
+
+        /** All files of the call. */
+        List<Path> inputs() {
+            List<Path> all = new ArrayList<>(gait.inputs());
+            division.plan().ifPresent(all::add);
+            return all;
+        }
+    }
+
+    /**
+     * How the foot is divided beyond the number of its parts.
+     *
+     * @param plan file with a plan of the user's own; empty for one by number
+     * @param isFunctionalToeAxis whether the toes turn about the functional axis
+     */
+    public record Division(Optional<Path> plan, boolean isFunctionalToeAxis) {
+
+        /** By number, toes that turn about the line of the metatarsal heads. */
+        public static final Division DEFAULT = new Division(Optional.empty(), false);
     }
 
     /**
@@ -127,6 +163,7 @@ public final class FitUseCase {
     private final Request request;
     private final List<Finding> findings = new ArrayList<>();
     private final List<SourceFile> sources = new ArrayList<>();
+    private FootChoices choices = FootChoices.DEFAULT;
 
     private FitUseCase(Request request) {
         this.request = request;
@@ -152,6 +189,7 @@ public final class FitUseCase {
         List<ContactRow> contacts = options.contacts().isPresent()
                 ? InputFiles.contacts(options.contacts().get(), sources)
                 : List.of();
+        choices = choices();
         return fitted(map, standing, walked, contacts);
     }
 
@@ -205,6 +243,7 @@ public final class FitUseCase {
                         walking.get(0).name(),
                         "no mass was given and no walking recording has a step on its platforms to measure it",
                         "give --mass KG, or recordings with two consecutive platform contacts"));
+        List<Finding> axisFindings = new ArrayList<>();
         Map<Side, FootModel> models = new EnumMap<>(Side.class);
         Map<Side, StandingLimb> limbs = new EnumMap<>(Side.class);
         Map<Side, WalkingRollOver> rollOvers = new EnumMap<>(Side.class);
@@ -212,20 +251,26 @@ public final class FitUseCase {
         Map<Side, List<LimbMotion>> moved = new EnumMap<>(Side.class);
         Map<Side, JointCurves> angles = new EnumMap<>(Side.class);
         for (Side side : sides) {
-            StandingLimb limb = built(posture, mass, side, stood);
-            requireSound(limb, standing.get(0));
+            StandingLimb asStood = built(posture, mass, side, stood);
+            requireSound(asStood, standing.get(0));
             List<LimbMotion> motions = subject.walking().stream()
-                    .map(tracks -> LimbMotion.of(stood, tracks, limb))
+                    .map(tracks -> LimbMotion.of(stood, tracks, asStood))
                     .toList();
+            Found<StandingLimb> turned = MotionAxes.of(asStood, subject.passes(), motions);
+            StandingLimb limb = turned.value();
+            axisFindings.addAll(turned.findings());
             WalkingRollOver rollOver = rollOver(limb, subject, motions, mass);
             moved.put(side, motions);
             observed.put(side, FittedModel.observed(motions));
             limbs.put(side, limb);
             rollOvers.put(side, rollOver);
-            angles.put(side, JointCurves.of(limb, posture, subject.passes(), motions));
+            ZeroPosture zero = ZeroPosture.of(limb, options.isZeroFlat(), subject.passes(), motions);
+            angles.put(side, JointCurves.of(limb, posture, zero, subject.passes(), motions));
         }
         findings.addAll(subject.findings());
         List<FittedNumber> numbers = new ArrayList<>();
+        axisFindings.forEach(this::addOnce);
+        List<Setting> settings = settings(subject);
         for (Side side : sides) {
             StandingLimb limb = get(limbs, side);
             WalkingRollOver rollOver = get(rollOvers, side);
@@ -257,11 +302,11 @@ public final class FitUseCase {
             numbers.addAll(uncertain.rows());
         }
         if (options.annotate().isPresent()) {
-            OutputFolder folder = OutputFolder.of(options.annotate().get(), options.inputs());
+            OutputFolder folder = OutputFolder.of(options.annotate().get(), request.inputs());
             findings.addAll(FitAnnotations.write(folder, walked.files(), subject, limbs, moved));
         }
         List<Finding> shared = List.copyOf(findings);
-        models.replaceAll((side, m) -> FittedModel.withFindings(m, shared));
+        models.replaceAll((side, m) -> FittedModel.withFindings(m, shared, settings));
         return new Result(
                 models,
                 limbs,
@@ -353,7 +398,28 @@ public final class FitUseCase {
                         ? Quantity.of(o.markerRadius().getAsDouble(), Basis.MEASURED)
                         : StandingSettings.DEFAULT_MARKER_RADIUS,
                 request.segments(),
-                request.inertia());
+                request.inertia(),
+                choices);
+    }
+
+    /** The choices that the numbers of a model depend on. */
+    private List<Setting> settings(GaitSubject subject) {
+        GaitOptions o = request.gait();
+        return List.of(
+                new Setting("zero", o.isZeroFlat() ? "flat" : "standing"),
+                new Setting("inertia", request.inertia().word()),
+                new Setting("mtp-offset", request.division().isFunctionalToeAxis() ? "functional" : "none"),
+                new Setting("events", o.events()),
+                new Setting("marker-cutoff", o.isCutoffFound() ? "residual" : "given"),
+                new Setting("marker-low-pass", String.join(", ", subject.cutoffs())));
+    }
+
+    private FootChoices choices() throws UseCaseException, FormatException {
+        Division division = request.division();
+        Optional<ChainPlan> plan = division.plan().isPresent()
+                ? Optional.of(InputFiles.segmentPlan(division.plan().get(), sources))
+                : Optional.empty();
+        return new FootChoices(plan, division.isFunctionalToeAxis());
     }
 
     private OptionalDouble provisionalLimbLength(StandingPosture posture, Set<Side> sides) {

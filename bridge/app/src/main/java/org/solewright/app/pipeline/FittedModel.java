@@ -13,6 +13,7 @@ import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.Segment;
 import org.solewright.domain.foot.SegmentName;
+import org.solewright.domain.foot.Setting;
 
 /** Puts together what standing and walking gave to a model. */
 final class FittedModel {
@@ -70,8 +71,8 @@ final class FittedModel {
                 standing.cautions());
     }
 
-    /** The same with all findings of the call. */
-    static FootModel withFindings(FootModel m, List<Finding> findings) {
+    /** The same with all findings of the call and the choices it was made with. */
+    static FootModel withFindings(FootModel m, List<Finding> findings, List<Setting> settings) {
         return new FootModel(
                 m.side(),
                 m.version(),
@@ -83,6 +84,7 @@ final class FittedModel {
                 m.rolling(),
                 m.pads(),
                 findings,
-                m.cautions());
+                m.cautions(),
+                settings);
     }
 }

@@ -40,6 +40,7 @@ final class GaitSubject {
     private final List<ContactRow> contacts;
     private final List<Finding> findings = new ArrayList<>();
     private final List<LandmarkTracks> walking = new ArrayList<>();
+    private final List<String> cutoffs = new ArrayList<>();
     private List<Pass> passes = List.of();
     private List<List<Step>> steps = List.of();
     private Optional<Quantity> mass = Optional.empty();
@@ -90,10 +91,15 @@ final class GaitSubject {
 
     private WalkingTrial tracked(Recording recording, Optional<Vec3> standingUp) throws UseCaseException {
         Recording seen = options.isMirrored() ? Mirror.of(recording, up(recording, standingUp)) : recording;
-        LandmarkTracks tracks = LandmarkTracks.of(seen, map, options.markerCutoff(), findings);
+        double cutoff = options.isCutoffFound()
+                ? MarkerCutoff.of(seen, map, options.markerCutoff(), findings)
+                : options.markerCutoff();
+        LandmarkTracks tracks = LandmarkTracks.of(seen, map, cutoff, findings);
         WalkingTrial trial = trial(tracks, standingUp);
         findings.addAll(LandmarkCoverage.repeatedLabels(recording));
         walking.add(tracks);
+        double used = Math.min(cutoff, LandmarkTracks.highestCutoff(recording.rate()));
+        cutoffs.add(trialName(recording) + (used > 0 ? String.format(Locale.ROOT, " %.1f Hz", used) : " none"));
         return trial;
     }
 
@@ -327,6 +333,11 @@ final class GaitSubject {
     /** Tracks by pass, in the passes' order. */
     List<LandmarkTracks> walking() {
         return walking;
+    }
+
+    /** Low-pass of the markers of each recording that could be read, for the settings of a model. */
+    List<String> cutoffs() {
+        return cutoffs;
     }
 
     /** Steps by pass, in the passes' order. */

@@ -17,12 +17,14 @@ import java.util.Map;
 import java.util.Set;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.SourceFile;
+import org.solewright.domain.foot.ChainPlan;
 import org.solewright.domain.foot.LandmarkMap;
 import org.solewright.domain.gait.ContactRow;
 import org.solewright.domain.motion.Recording;
 import org.solewright.formats.c3d.C3dFile;
 import org.solewright.formats.c3d.C3dReading;
 import org.solewright.formats.footmodel.LandmarkMapFile;
+import org.solewright.formats.footmodel.SegmentPlanFile;
 import org.solewright.formats.io.FormatException;
 import org.solewright.formats.table.ContactsTable;
 
@@ -147,6 +149,12 @@ final class InputFiles {
         LandmarkMap map = read(file, LandmarkMapFile::read);
         sources.add(source("landmarks", file));
         return map;
+    }
+
+    static ChainPlan segmentPlan(Path file, List<SourceFile> sources) throws UseCaseException, FormatException {
+        ChainPlan plan = read(file, SegmentPlanFile::read);
+        sources.add(source("segment-plan", file));
+        return plan;
     }
 
     static List<ContactRow> contacts(Path file, List<SourceFile> sources) throws UseCaseException, FormatException {

@@ -24,8 +24,8 @@ import org.solewright.domain.geometry.Rotation;
 import org.solewright.domain.geometry.Vec3;
 
 /**
- * Angles of one foot's joints over stance, zero in the standing trial, 101 points: every stance of its own, then mean and
- * SD over all. A joint between two segments of the chain, one of which is not tracked, has none.
+ * Angles of one foot's joints over stance, zero in the standing trial or at foot flat, 101 points: every stance of its own,
+ * then mean and SD over all, then how far that zero lies from the standing trial. A joint between two segments of the chain, one of which is not tracked, has none.
  */
 final class JointCurves {
 
@@ -33,16 +33,20 @@ final class JointCurves {
     private static final List<String> NAMES = List.of("dorsiflexion", "inversion", "adduction");
 
     private final StandingLimb limb;
+    private final ZeroPosture zero;
     private final List<CurveRow> rows = new ArrayList<>();
     private final List<Finding> findings = new ArrayList<>();
     private final Map<String, StanceAverage> dorsiflexion = new LinkedHashMap<>();
 
-    private JointCurves(StandingLimb limb) {
+    private JointCurves(StandingLimb limb, ZeroPosture zero) {
         this.limb = limb;
+        this.zero = zero;
     }
 
-    static JointCurves of(StandingLimb limb, StandingPosture posture, List<Pass> passes, List<LimbMotion> motions) {
-        JointCurves curves = new JointCurves(limb);
+    static JointCurves of(
+            StandingLimb limb, StandingPosture posture, ZeroPosture zero, List<Pass> passes, List<LimbMotion> motions) {
+        JointCurves curves = new JointCurves(limb, zero);
+        curves.findings.addAll(zero.findings());
         for (Joint joint : limb.joints()) {
             curves.add(joint, axes(limb, joint, posture), passes, motions);
         }
@@ -94,6 +98,10 @@ final class JointCurves {
             if (!ofStances.get(k).isEmpty()) {
                 StanceAverage average = StanceAverage.of(ofStances.get(k));
                 addMean(name(joint, k), average);
+                addZero(
+                        name(joint, k),
+                        angle(JointAngles.of(axes, Rotation.IDENTITY, zero.turn(joint), limb.side()), k),
+                        joint);
                 if (k == 0) {
                     dorsiflexion.put(joint.name(), average);
                 }
@@ -150,8 +158,11 @@ final class JointCurves {
         if (proximal.isEmpty() || distal.isEmpty()) {
             return new double[] {Double.NaN, Double.NaN, Double.NaN};
         }
-        JointAngles angles =
-                JointAngles.of(axes, proximal.get().rotation(), distal.get().rotation(), limb.side());
+        JointAngles angles = JointAngles.of(
+                axes,
+                proximal.get().rotation(),
+                distal.get().rotation().times(zero.turn(joint).inverse()),
+                limb.side());
         return new double[] {angles.dorsiflexion(), angles.inversion(), angles.adduction()};
     }
 
@@ -184,6 +195,26 @@ final class JointCurves {
                     Double.isNaN(sd) ? OptionalDouble.empty() : OptionalDouble.of(Math.toDegrees(sd)),
                     average.count(i)));
         }
+    }
+
+    /** Where the angle's zero lies from the standing trial: the same value at all points. */
+    private void addZero(String curve, double angle, Joint joint) {
+        for (int i = 0; i < POINTS; i++) {
+            rows.add(new CurveRow(
+                    "*",
+                    "mean",
+                    limb.side(),
+                    curve + "-zero-" + zero.word(),
+                    "deg",
+                    100.0 * i / (POINTS - 1),
+                    Math.toDegrees(angle),
+                    OptionalDouble.empty(),
+                    zero.stances(joint)));
+        }
+    }
+
+    private static double angle(JointAngles angles, int k) {
+        return k == 0 ? angles.dorsiflexion() : k == 1 ? angles.inversion() : angles.adduction();
     }
 
     List<CurveRow> rows() {

@@ -134,6 +134,12 @@ final class LimbChain {
         return new ChainModel(moved);
     }
 
+    /** Whether a segment has so many points of its own that no joint decides how it turns. */
+    boolean isTurnSeen(String name) {
+        int segment = names.indexOf(name);
+        return segment >= 0 && segments.get(segment).points().size() >= FEWEST;
+    }
+
     /** Fits all frames. */
     void fit() {
         if (!segments.isEmpty()) {

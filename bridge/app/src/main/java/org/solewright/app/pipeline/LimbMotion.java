@@ -1,7 +1,9 @@
 package org.solewright.app.pipeline;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.fitting.StandingLimb;
@@ -69,11 +71,13 @@ record LimbMotion(
             chain.add(LimbChain.THIGH, points(standing, walking, THIGH, own));
         }
         chain.add(SegmentName.SHANK.word(), shank);
+        Map<SegmentName, Points> ofFoot = new LinkedHashMap<>();
         for (Segment segment : limb.segments()) {
             if (segment.name() != SegmentName.SHANK) {
-                chain.add(segment.name().word(), points(standing, walking, carried(limb, segment.name()), own));
+                ofFoot.put(segment.name(), points(standing, walking, carried(limb, segment.name()), own));
             }
         }
+        ChainPoints.of(limb, ofFoot).forEach((name, points) -> chain.add(name.word(), points));
         chain.fit();
         Points carrier = pelvis.isPresent()
                 ? points(standing, walking, PELVIS, List.of(Side.LEFT, Side.RIGHT))
@@ -94,7 +98,7 @@ record LimbMotion(
             boolean isCarried = limb.landmarks().stream()
                     .anyMatch(l -> l.segment() == segment
                             && (l.name().equals(landmark.word()) || l.name().startsWith(landmark.word() + ".")));
-            if (isCarried && (FOOT.contains(landmark) || segment == SegmentName.TOES)) {
+            if (isCarried && (FOOT.contains(landmark) || segment.isToe())) {
                 landmarks.add(landmark);
             }
         }

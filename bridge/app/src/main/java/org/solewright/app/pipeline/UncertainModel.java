@@ -106,8 +106,8 @@ final class UncertainModel {
     /** A published axis keeps its published spread: placement of landmarks does not move it. */
     private Joint.Axis axis(Joint.Axis a) {
         OptionalDouble sd = known.componentSd("axis." + a.name(), OF_DIRECTION);
-        return a.basis() == Basis.MEASURED && sd.isPresent()
-                ? new Joint.Axis(a.name(), a.direction(), a.basis(), sd)
+        return a.basis() == Basis.MEASURED && a.source() != Joint.Axis.Source.MOTION && sd.isPresent()
+                ? new Joint.Axis(a.name(), a.direction(), a.basis(), sd, a.source())
                 : a;
     }
 

@@ -15,7 +15,6 @@ import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Quantity;
 import org.solewright.domain.foot.Rolling;
-import org.solewright.domain.foot.SegmentName;
 import org.solewright.domain.gait.Stance;
 import org.solewright.domain.gait.Use;
 import org.solewright.domain.geometry.Vec3;
@@ -97,10 +96,8 @@ final class WalkingRollOver {
 
     /** A position of the standing laboratory frame in the frame of the foot's first segment. */
     private Vec3 inFoot(Vec3 p_L) {
-        return limb.poses().entrySet().stream()
-                .filter(e -> e.getKey() == SegmentName.FOOT || e.getKey() == SegmentName.HINDFOOT)
-                .findFirst()
-                .map(e -> e.getValue().inversePosition(p_L))
+        return Optional.ofNullable(limb.poses().get(limb.segments().get(1).name()))
+                .map(x -> x.inversePosition(p_L))
                 .orElse(new Vec3(Double.NaN, Double.NaN, Double.NaN));
     }
 

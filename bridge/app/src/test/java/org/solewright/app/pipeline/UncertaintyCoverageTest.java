@@ -66,7 +66,16 @@ class UncertaintyCoverageTest {
                 "platform",
                 Optional.empty());
         FitUseCase.Request request = new FitUseCase.Request(
-                options, EnumSet.of(Side.RIGHT), false, OptionalInt.of(2), InertiaTable.DE_LEVA, "", "test", runs, 7);
+                options,
+                EnumSet.of(Side.RIGHT),
+                false,
+                OptionalInt.of(2),
+                InertiaTable.DE_LEVA,
+                FitUseCase.Division.DEFAULT,
+                "",
+                "test",
+                runs,
+                7);
         List<Recording> walking = new ArrayList<>();
         for (DemoStudy.Walk walk : WALKS) {
             Recording seen = walk.recorder().walking(placed(errors, false));

@@ -21,6 +21,7 @@ import org.solewright.domain.gait.Side;
  * @param pads contact elements, rear to front
  * @param findings what has to be said about it
  * @param cautions sentences every reader must see
+ * @param settings choices it was made with
  */
 public record FootModel(
         Side side,
@@ -33,7 +34,40 @@ public record FootModel(
         Rolling rolling,
         List<Pad> pads,
         List<Finding> findings,
-        List<String> cautions) {
+        List<String> cautions,
+        List<Setting> settings) {
+
+    /**
+     * A model that says nothing about the choices it was made with.
+     *
+     * @param side whose foot
+     * @param version version of the tool that made it
+     * @param subject whose body
+     * @param sources inputs, in the order of their use
+     * @param segments shank and the foot's segments, proximal to distal
+     * @param joints proximal to distal
+     * @param landmarks in the standing trial
+     * @param rolling how the sole rolls
+     * @param pads contact elements, rear to front
+     * @param findings what has to be said about it
+     * @param cautions sentences every reader must see
+     */
+    public FootModel(
+            Side side,
+            String version,
+            Subject subject,
+            List<SourceFile> sources,
+            List<Segment> segments,
+            List<Joint> joints,
+            List<LandmarkPosition> landmarks,
+            Rolling rolling,
+            List<Pad> pads,
+            List<Finding> findings,
+            List<String> cautions) {
+        this(
+                side, version, subject, sources, segments, joints, landmarks, rolling, pads, findings, cautions,
+                List.of());
+    }
 
     /** Copies the lists and checks that parents, joints, landmarks and pads name segments of the model. */
     public FootModel {
@@ -44,6 +78,7 @@ public record FootModel(
         pads = List.copyOf(pads);
         findings = List.copyOf(findings);
         cautions = List.copyOf(cautions);
+        settings = List.copyOf(settings);
         List<SegmentName> names = segments.stream().map(Segment::name).toList();
         if (names.stream().distinct().count() != names.size()) {
             throw new IllegalArgumentException("a segment occurs twice in " + names);

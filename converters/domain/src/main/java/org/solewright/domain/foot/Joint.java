@@ -61,8 +61,40 @@ public record Joint(
      *     forward and up, so that turning the sole inwards counts positive on a right foot and negative on a left one
      * @param basis where it comes from
      * @param sd standard deviation of its direction, rad; empty where unknown
+     * @param source what it was taken from
      */
-    public record Axis(String name, Vec3 direction, Basis basis, OptionalDouble sd) {
+    public record Axis(String name, Vec3 direction, Basis basis, OptionalDouble sd, Source source) {
+
+        /** What an axis was taken from. */
+        public enum Source {
+            /** The turning of its two segments against each other. */
+            MOTION,
+            /** The line between two landmarks. */
+            LANDMARKS,
+            /** A published mean, or the axis of a neighbouring joint or of the frame. */
+            CONVENTION;
+
+            /**
+             * The word used in files.
+             *
+             * @return {@code motion}, {@code landmarks} or {@code convention}
+             */
+            public String word() {
+                return name().toLowerCase(Locale.ROOT);
+            }
+        }
+
+        /**
+         * An axis that was not taken from motion.
+         *
+         * @param name such as {@code talocrural}
+         * @param direction unit vector
+         * @param basis measured means that it is the line between landmarks
+         * @param sd rad; empty where unknown
+         */
+        public Axis(String name, Vec3 direction, Basis basis, OptionalDouble sd) {
+            this(name, direction, basis, sd, basis == Basis.MEASURED ? Source.LANDMARKS : Source.CONVENTION);
+        }
 
         private static final double TOLERANCE = 1e-6;
 
@@ -117,6 +149,16 @@ public record Joint(
             throw new IllegalArgumentException("joint " + name + " is a " + kind.word() + " and has " + axes.size()
                     + " axes, expected " + kind.axes());
         }
+    }
+
+    /**
+     * The joint about other axes.
+     *
+     * @param newAxes as many as the kind has
+     * @return the joint
+     */
+    public Joint withAxes(List<Axis> newAxes) {
+        return new Joint(name, proximal, distal, kind, centre, newAxes, range, lock);
     }
 
     /**

@@ -26,6 +26,14 @@ public enum Landmark {
     METATARSAL_2_HEAD,
     /** Head of the fifth metatarsal. */
     METATARSAL_5_HEAD,
+    /** First interphalangeal joint of the longest toe (or the great toe's only one), next to the metatarsals. */
+    INTERPHALANGEAL_1,
+    /** Second interphalangeal joint. */
+    INTERPHALANGEAL_2,
+    /** Third interphalangeal joint, of birds and reptiles. */
+    INTERPHALANGEAL_3,
+    /** Fourth interphalangeal joint, of birds and reptiles. */
+    INTERPHALANGEAL_4,
     /** Tip of the great toe. */
     HALLUX_TIP,
     /** Tip of the longest toe. */

@@ -20,6 +20,7 @@ import org.solewright.domain.foot.Population;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.Segment;
 import org.solewright.domain.foot.SegmentName;
+import org.solewright.domain.foot.Setting;
 import org.solewright.domain.foot.Sex;
 import org.solewright.domain.foot.Subject;
 import org.solewright.domain.gait.Side;
@@ -36,6 +37,7 @@ import org.solewright.formats.footmodel.footxml.XmlPlace;
 import org.solewright.formats.footmodel.footxml.XmlQuantity;
 import org.solewright.formats.footmodel.footxml.XmlRolling;
 import org.solewright.formats.footmodel.footxml.XmlSegment;
+import org.solewright.formats.footmodel.footxml.XmlSetting;
 import org.solewright.formats.footmodel.footxml.XmlSourceFile;
 import org.solewright.formats.footmodel.footxml.XmlSubject;
 import org.solewright.formats.io.FormatException;
@@ -82,6 +84,12 @@ final class FootModelFromXml {
         for (XmlFinding f : xml.getFindings().getFinding()) {
             findings.add(made(f, () -> finding(f)));
         }
+        List<Setting> settings = new ArrayList<>();
+        if (xml.getSettings() != null) {
+            for (XmlSetting s : xml.getSettings().getSetting()) {
+                settings.add(made(s, () -> new Setting(s.getName(), s.getValue())));
+            }
+        }
         Rolling rolling = made(xml.getRolling(), () -> rolling(xml.getRolling()));
         return made(
                 xml,
@@ -96,7 +104,8 @@ final class FootModelFromXml {
                         rolling,
                         pads,
                         findings,
-                        xml.getCautions().getCaution()));
+                        xml.getCautions().getCaution(),
+                        settings));
     }
 
     private <R> R made(Object element, Supplier<R> make) throws FormatException {
@@ -167,8 +176,13 @@ final class FootModelFromXml {
     }
 
     private static Joint.Axis axis(XmlAxis a) {
-        return new Joint.Axis(
+        Joint.Axis axis = new Joint.Axis(
                 a.getName(), new Vec3(a.getX(), a.getY(), a.getZ()), basis(a.getBasis()), XmlWords.optional(a.getSd()));
+        if (a.getSource() == null) {
+            return axis;
+        }
+        Joint.Axis.Source source = XmlWords.find(Joint.Axis.Source.values(), Joint.Axis.Source::word, a.getSource());
+        return new Joint.Axis(axis.name(), axis.direction(), axis.basis(), axis.sd(), source);
     }
 
     private static Rolling rolling(XmlRolling r) {

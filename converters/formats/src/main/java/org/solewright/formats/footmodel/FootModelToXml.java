@@ -12,6 +12,7 @@ import org.solewright.domain.foot.Located;
 import org.solewright.domain.foot.Pad;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.Segment;
+import org.solewright.domain.foot.Setting;
 import org.solewright.domain.foot.Subject;
 import org.solewright.formats.footmodel.footxml.XmlArc;
 import org.solewright.formats.footmodel.footxml.XmlAxis;
@@ -38,6 +39,8 @@ import org.solewright.formats.footmodel.footxml.XmlRange;
 import org.solewright.formats.footmodel.footxml.XmlRolling;
 import org.solewright.formats.footmodel.footxml.XmlSegment;
 import org.solewright.formats.footmodel.footxml.XmlSegments;
+import org.solewright.formats.footmodel.footxml.XmlSetting;
+import org.solewright.formats.footmodel.footxml.XmlSettings;
 import org.solewright.formats.footmodel.footxml.XmlSourceFile;
 import org.solewright.formats.footmodel.footxml.XmlSources;
 import org.solewright.formats.footmodel.footxml.XmlSubject;
@@ -59,6 +62,15 @@ final class FootModelToXml {
             f.setPath(XmlWords.legal(file.path()));
             f.setSha256(file.sha256());
             xml.getSources().getFile().add(f);
+        }
+        if (!model.settings().isEmpty()) {
+            xml.setSettings(new XmlSettings());
+            for (Setting setting : model.settings()) {
+                XmlSetting s = new XmlSetting();
+                s.setName(XmlWords.legal(setting.name()));
+                s.setValue(XmlWords.legal(setting.value()));
+                xml.getSettings().getSetting().add(s);
+            }
         }
         xml.setSegments(new XmlSegments());
         model.segments().forEach(s -> xml.getSegments().getSegment().add(segment(s)));
@@ -180,6 +192,7 @@ final class FootModelToXml {
         xml.setZ(a.direction().z());
         xml.setBasis(a.basis().word());
         XmlWords.put(a.sd(), xml::setSd);
+        xml.setSource(a.source().word());
         return xml;
     }
 
