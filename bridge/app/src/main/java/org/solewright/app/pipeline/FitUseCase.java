@@ -217,6 +217,9 @@ public final class FitUseCase {
             throws UseCaseException, FormatException {
         GaitOptions options = request.gait();
         List<Recording> walking = walked.recordings();
+        for (Recording stood : standing) {
+            OneSubject.require(map, stood);
+        }
         List<Recording> all = new ArrayList<>(standing);
         all.addAll(walking);
         findings.addAll(LandmarkCoverage.missingLabels(map, all));

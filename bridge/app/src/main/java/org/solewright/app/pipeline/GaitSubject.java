@@ -10,6 +10,7 @@ import org.solewright.analysis.gait.ContactReview;
 import org.solewright.analysis.gait.FootTracks;
 import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.LandmarkTracks;
+import org.solewright.analysis.gait.MarkerSwaps;
 import org.solewright.analysis.gait.Mirror;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.analysis.gait.PassChecks;
@@ -91,6 +92,8 @@ final class GaitSubject {
 
     private WalkingTrial tracked(Recording recording, Optional<Vec3> standingUp) throws UseCaseException {
         Recording seen = options.isMirrored() ? Mirror.of(recording, up(recording, standingUp)) : recording;
+        OneSubject.require(map, recording);
+        findings.addAll(MarkerSwaps.of(seen, map));
         double cutoff = options.isCutoffFound()
                 ? MarkerCutoff.of(seen, map, options.markerCutoff(), findings)
                 : options.markerCutoff();
