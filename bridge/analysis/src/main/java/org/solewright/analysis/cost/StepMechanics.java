@@ -1,7 +1,9 @@
 package org.solewright.analysis.cost;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.EnumMap;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -47,8 +49,8 @@ public record StepMechanics(
 
     /** Copies the collections. */
     public StepMechanics {
-        values = Map.copyOf(values);
-        deviations = Map.copyOf(deviations);
+        values = Collections.unmodifiableMap(new LinkedHashMap<>(values));
+        deviations = Collections.unmodifiableMap(new LinkedHashMap<>(deviations));
         findings = List.copyOf(findings);
     }
 

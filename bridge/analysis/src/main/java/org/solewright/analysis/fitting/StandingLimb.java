@@ -1,5 +1,7 @@
 package org.solewright.analysis.fitting;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -65,7 +67,7 @@ public record StandingLimb(
 
     /** Copies the collections. */
     public StandingLimb {
-        poses = Map.copyOf(poses);
+        poses = Collections.unmodifiableMap(new LinkedHashMap<>(poses));
         segments = List.copyOf(segments);
         joints = List.copyOf(joints);
         landmarks = List.copyOf(landmarks);

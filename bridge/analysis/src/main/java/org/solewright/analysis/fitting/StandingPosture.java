@@ -1,5 +1,7 @@
 package org.solewright.analysis.fitting;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -24,8 +26,8 @@ public record StandingPosture(
 
     /** Copies the maps and checks that the positions are finite and {@code up} has unit length. */
     public StandingPosture {
-        landmarks = Map.copyOf(landmarks);
-        clusters = Map.copyOf(clusters);
+        landmarks = Collections.unmodifiableMap(new LinkedHashMap<>(landmarks));
+        clusters = Collections.unmodifiableMap(new LinkedHashMap<>(clusters));
         landmarks.forEach((name, position) -> {
             if (!position.isFinite()) {
                 throw new IllegalArgumentException(name.words() + " at " + position + ", expected finite components");

@@ -1,5 +1,6 @@
 package org.solewright.analysis.gait;
 
+import java.util.Collections;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
@@ -71,7 +72,7 @@ public record WalkingTrial(
         if (!(beltSpeed >= 0)) {
             throw new IllegalArgumentException("belt speed " + beltSpeed + " m/s, expected 0 or more");
         }
-        feet = feet.isEmpty() ? Map.of() : Map.copyOf(new EnumMap<>(feet));
+        feet = feet.isEmpty() ? Map.of() : Collections.unmodifiableMap(new EnumMap<>(feet));
         platforms = List.copyOf(platforms);
     }
 

@@ -2,7 +2,9 @@ package org.solewright.app.pipeline;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.EnumMap;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -79,7 +81,7 @@ public final class FitUseCase {
 
         /** Copies the set. */
         public Request {
-            sides = Set.copyOf(sides);
+            sides = sides.isEmpty() ? Set.of() : Collections.unmodifiableSet(EnumSet.copyOf(sides));
             if (runs < 0) {
                 throw new IllegalArgumentException(runs + " Monte Carlo runs, expected 0 or more");
             }

@@ -1,5 +1,6 @@
 package org.solewright.domain.foot;
 
+import java.util.Collections;
 import java.util.EnumMap;
 import java.util.HashSet;
 import java.util.List;
@@ -172,6 +173,6 @@ public record ChainPlan(String name, List<Part> parts, Place tip) {
     public Map<Landmark, SegmentName> carriers() {
         Map<Landmark, SegmentName> carriers = new EnumMap<>(Landmark.class);
         parts.forEach(p -> p.landmarks().forEach(l -> carriers.put(l, p.name())));
-        return Map.copyOf(carriers);
+        return Collections.unmodifiableMap(carriers);
     }
 }

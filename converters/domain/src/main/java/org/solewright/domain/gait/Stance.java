@@ -1,5 +1,7 @@
 package org.solewright.domain.gait;
 
+import java.util.Collections;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Set;
 
@@ -28,7 +30,7 @@ public record Stance(
     /** Copies the collections and checks the order of times. */
     public Stance {
         platforms = List.copyOf(platforms);
-        notUsedFor = Set.copyOf(notUsedFor);
+        notUsedFor = notUsedFor.isEmpty() ? Set.of() : Collections.unmodifiableSet(EnumSet.copyOf(notUsedFor));
         if (!(end > start)) {
             throw new IllegalArgumentException(
                     "stance ends at " + end + " s, expected after its start at " + start + " s");

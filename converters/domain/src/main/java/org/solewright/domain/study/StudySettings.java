@@ -1,5 +1,6 @@
 package org.solewright.domain.study;
 
+import java.util.Collections;
 import java.util.EnumSet;
 import java.util.List;
 import java.util.Locale;
@@ -76,7 +77,7 @@ public record StudySettings(
 
     /** Checks that numbers are in range. */
     public StudySettings {
-        outputs = outputs.isEmpty() ? Set.of() : Set.copyOf(EnumSet.copyOf(outputs));
+        outputs = outputs.isEmpty() ? Set.of() : Collections.unmodifiableSet(EnumSet.copyOf(outputs));
         if (!(markerCutoff >= 0) || fitTrials < 1) {
             throw new IllegalArgumentException("marker low-pass " + markerCutoff + " Hz, at least 0; " + fitTrials
                     + " walking trials of a fit, at least 1");
