@@ -49,7 +49,16 @@ public record Sample(int n, double mean, OptionalDouble sd) {
         if (n < FEWEST_FOR_INTERVAL) {
             return OptionalDouble.empty();
         }
-        double t = new TDistribution(n - 1).inverseCumulativeProbability(TWO_SIDED_95);
-        return OptionalDouble.of(t * sd.orElseThrow() / Math.sqrt(n));
+        return OptionalDouble.of(t95(n - 1) * sd.orElseThrow() / Math.sqrt(n));
+    }
+
+    /**
+     * Student's t for two-sided 95 % intervals.
+     *
+     * @param freedom degrees of freedom, more than 0
+     * @return the 0.975 quantile
+     */
+    public static double t95(double freedom) {
+        return new TDistribution(freedom).inverseCumulativeProbability(TWO_SIDED_95);
     }
 }

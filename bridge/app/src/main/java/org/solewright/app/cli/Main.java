@@ -28,6 +28,8 @@ import picocli.CommandLine.ScopeType;
             SolveCommand.class,
             SprawlCommand.class,
             StudyCommand.class,
+            CompareCommand.class,
+            WatchCommand.class,
             DemoCommand.class,
         })
 public final class Main {

@@ -4,9 +4,6 @@ import java.io.Console;
 import java.io.PrintWriter;
 import java.lang.reflect.InvocationTargetException;
 import java.nio.file.Path;
-import java.util.concurrent.CountDownLatch;
-import java.util.concurrent.TimeUnit;
-import java.util.concurrent.atomic.AtomicBoolean;
 import org.jspecify.annotations.Nullable;
 import org.solewright.app.pipeline.UseCaseException;
 import org.solewright.app.study.StudyListener;
@@ -47,10 +44,7 @@ final class StudyArguments {
      * @return exit code
      */
     int run(Path folder, boolean isRetrying, CommandSpec spec) throws UseCaseException, FormatException {
-        int atOnce = jobs == null ? Runtime.getRuntime().availableProcessors() : jobs;
-        if (atOnce < 1 || atOnce > MOST_JOBS) {
-            throw GaitArguments.usage("--jobs", atOnce + " trials at once, expected 1 to " + MOST_JOBS, "give fewer");
-        }
+        int atOnce = jobs(jobs);
         PrintWriter err = spec.commandLine().getErr();
         PrintWriter out = spec.commandLine().getOut();
         StudyListener listener = listener(err);
@@ -77,6 +71,16 @@ final class StudyArguments {
         return result.failed() + result.refused() + result.left() > 0 ? ExitCode.SOME_FAILED : ExitCode.DONE;
     }
 
+    /** How many trials at once. */
+    static int jobs(@Nullable Integer asked) throws UseCaseException {
+        int jobs = asked == null ? Runtime.getRuntime().availableProcessors() : asked;
+        if (jobs < 1 || jobs > MOST_JOBS) {
+            throw GaitArguments.usage(
+                    "--jobs", jobs + " trials at once, expected 1 to " + MOST_JOBS, "give a number in that range");
+        }
+        return jobs;
+    }
+
     private StudyListener listener(PrintWriter err) throws UseCaseException {
         return switch (progress) {
             case "auto" -> isTerminal() ? new BarProgress(err) : new PlainProgress(err);
@@ -100,49 +104,6 @@ final class StudyArguments {
             return true;
         } catch (IllegalAccessException | InvocationTargetException e) {
             return false;
-        }
-    }
-
-    /** Lets a run end its trials in flight when the user interrupts it. */
-    private static final class Interrupt {
-
-        private static final int LONGEST_S = 600;
-
-        private final AtomicBoolean isAsked = new AtomicBoolean();
-        private final CountDownLatch ended = new CountDownLatch(1);
-        private final Thread hook;
-
-        Interrupt(Path folder, PrintWriter err) {
-            hook = new Thread(() -> {
-                isAsked.set(true);
-                err.println();
-                err.println("solewright: " + folder + ": finishing the trials in flight ...");
-                try {
-                    if (!ended.await(LONGEST_S, TimeUnit.SECONDS)) {
-                        err.println("solewright: " + folder + ": given up on them: the same command goes on");
-                    }
-                } catch (InterruptedException e) {
-                    Thread.currentThread().interrupt();
-                }
-                err.flush();
-            });
-            Runtime.getRuntime().addShutdownHook(hook);
-        }
-
-        boolean isAsked() {
-            return isAsked.get();
-        }
-
-        void end() {
-            ended.countDown();
-            if (!isAsked()) {
-                try {
-                    Runtime.getRuntime().removeShutdownHook(hook);
-                } catch (IllegalStateException e) {
-                    // The process is ending at this moment; the hook has nothing to wait for any more.
-                    isAsked.set(true);
-                }
-            }
         }
     }
 }

@@ -73,6 +73,16 @@ public final class StudyProposal {
         return new StudyProposal(folder).write(today);
     }
 
+    /**
+     * Proposes what is missing and leaves what is there.
+     *
+     * @param folder of recordings
+     * @throws UseCaseException where there are no recordings, or a file cannot be written
+     */
+    static void complete(Path folder) throws UseCaseException {
+        new StudyProposal(folder).propose("");
+    }
+
     private List<String> write(String today) throws UseCaseException {
         if (!Files.isDirectory(folder)) {
             throw new UseCaseException(
@@ -90,6 +100,10 @@ public final class StudyProposal {
                         "edit it, or move it away");
             }
         }
+        return propose(today);
+    }
+
+    private List<String> propose(String today) throws UseCaseException {
         List<Path> files = files();
         List<Path> recordings = files.stream().filter(f -> hasEnding(f, ".c3d")).toList();
         if (recordings.isEmpty()) {
@@ -125,11 +139,17 @@ public final class StudyProposal {
                 "deleva",
                 StudySettings.DEFAULT_FIT_TRIALS,
                 EnumSet.allOf(StudySettings.Output.class));
-        ResultText.write(folder.resolve(Study.SETTINGS), StudyFile.bytes(settings));
-        ResultText.write(folder.resolve(Study.SUBJECTS), StudyTables.subjectBytes(subjects));
-        ResultText.write(folder.resolve(Study.TRIALS), StudyTables.trialBytes(trials));
+        writeNew(Study.SETTINGS, StudyFile.bytes(settings));
+        writeNew(Study.SUBJECTS, StudyTables.subjectBytes(subjects));
+        writeNew(Study.TRIALS, StudyTables.trialBytes(trials));
         report(trials, subjects, map);
         return lines;
+    }
+
+    private void writeNew(String name, byte[] content) throws UseCaseException {
+        if (!Files.exists(folder.resolve(name))) {
+            ResultText.write(folder.resolve(name), content);
+        }
     }
 
     private void report(List<StudyTrial> trials, List<StudySubject> subjects, Optional<String> map) {
