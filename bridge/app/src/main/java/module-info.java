@@ -9,9 +9,16 @@ module org.solewright.app {
     requires java.sql;
     requires org.xerial.sqlitejdbc;
     requires me.tongfei.progressbar;
+    requires static java.compiler;
+    requires gg.jte.runtime;
+    requires openhtmltopdf.core;
+    requires openhtmltopdf.pdfbox;
+    requires openhtmltopdf.svg.support;
 
     exports org.solewright.app.cli;
 
     opens org.solewright.app.cli to
             info.picocli;
+    opens org.solewright.app.report.pages to
+            gg.jte.runtime;
 }

@@ -35,7 +35,8 @@ class ArchitectureTest {
         ROOT + "formats.footmodel.resultsxml..",
         ROOT + "formats.footmodel.studyxml..",
         ROOT + "formats.footmodel.footxml..",
-        ROOT + "formats.footmodel.costxml.."
+        ROOT + "formats.footmodel.costxml..",
+        ROOT + "app.report.pages.."
     };
 
     private static final JavaClasses ALL = new ClassFileImporter()

@@ -24,7 +24,8 @@ import picocli.CommandLine.Spec;
             "Example:",
             "  solewright appraise --model model/foot-model-right.xml --model model/foot-model-left.xml \\",
             "    --walking walk-1.c3d --walking walk-2.c3d --landmarks map.xml --out cost",
-            "Writes posture-cost.csv, posture-cost.xml, postures.csv, appraise-contacts.csv and appraise-curves.csv.",
+            "Writes posture-cost.csv, posture-cost.xml, postures.csv, appraise-contacts.csv and appraise-curves.csv;",
+            "--html and --pdf add posture-cost.html and posture-cost.pdf.",
             "Works are mechanical work under stated assumptions, not metabolic energy."
         })
 final class AppraiseCommand implements Callable<Integer> {
@@ -58,6 +59,9 @@ final class AppraiseCommand implements Callable<Integer> {
             description = "Folder for the results (default: ${DEFAULT-VALUE}).")
     private Path out = Path.of(".");
 
+    @Mixin
+    private PageArguments pages = new PageArguments();
+
     @Spec
     private CommandSpec spec = CommandSpec.create();
 
@@ -72,7 +76,7 @@ final class AppraiseCommand implements Callable<Integer> {
                 tables,
                 models,
                 Version.NUMBER);
-        AppraiseReport report = AppraiseReport.write(request, out);
+        AppraiseReport report = AppraiseReport.write(request, out, pages.forms());
         FindingPrinter.print(spec.commandLine().getErr(), report.findings());
         report.lines().forEach(spec.commandLine().getOut()::println);
         return report.failed().isEmpty() ? ExitCode.DONE : ExitCode.SOME_FAILED;

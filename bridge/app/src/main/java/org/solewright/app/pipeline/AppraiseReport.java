@@ -7,7 +7,9 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.OptionalDouble;
+import java.util.Set;
 import org.solewright.analysis.cost.ComparedPostures;
+import org.solewright.app.report.PageForm;
 import org.solewright.domain.cost.TransitionColumns;
 import org.solewright.domain.cost.TransitionRow;
 import org.solewright.domain.finding.Cautions;
@@ -41,17 +43,33 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
      *
      * @param request what is asked
      * @param out folder, made where it is missing
+     * @param pages forms in which the page is written beside; may be empty
+     * @return what to print
+     * @throws UseCaseException where an input lacks what is needed or the folder cannot be written
+     * @throws FormatException where a file is not as its format says
+     */
+    public static AppraiseReport write(AppraiseUseCase.Request request, Path out, Set<PageForm> pages)
+            throws UseCaseException, FormatException {
+        return write(AppraiseUseCase.run(request), request, out, pages);
+    }
+
+    /**
+     * The same without a page.
+     *
+     * @param request what is asked
+     * @param out folder, made where it is missing
      * @return what to print
      * @throws UseCaseException where an input lacks what is needed or the folder cannot be written
      * @throws FormatException where a file is not as its format says
      */
     public static AppraiseReport write(AppraiseUseCase.Request request, Path out)
             throws UseCaseException, FormatException {
-        return write(AppraiseUseCase.run(request), request, out);
+        return write(request, out, Set.of());
     }
 
-    /** Writes what a run gave, as {@link #write(AppraiseUseCase.Request, Path)} does. */
-    static AppraiseReport write(AppraiseUseCase.Result result, AppraiseUseCase.Request request, Path out)
+    /** Writes what a run gave, as {@link #write(AppraiseUseCase.Request, Path, Set)} does. */
+    static AppraiseReport write(
+            AppraiseUseCase.Result result, AppraiseUseCase.Request request, Path out, Set<PageForm> pages)
             throws UseCaseException {
         Map<String, byte[]> files = new LinkedHashMap<>();
         files.put("posture-cost.csv", PostureCostTable.bytes(result.cost().rows()));
@@ -59,6 +77,7 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
         files.put("postures.csv", PosturesTable.bytes(result.postures()));
         files.put("appraise-contacts.csv", ContactsTable.bytes(result.contacts()));
         files.put("appraise-curves.csv", CurvesTable.bytes(result.curves()));
+        files.putAll(CostPage.files(result, request.results().isEmpty(), pages));
         List<Path> inputs = new ArrayList<>(request.gait().inputs());
         inputs.addAll(request.models());
         inputs.addAll(request.tables());

@@ -13,6 +13,7 @@ import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.analysis.gait.Step;
+import org.solewright.app.report.TransitionView;
 import org.solewright.domain.cost.Measure;
 import org.solewright.domain.cost.PostureCost;
 import org.solewright.domain.cost.PostureRow;
@@ -62,6 +63,8 @@ public final class AppraiseUseCase {
      *
      * @param cost rows with their summaries, findings, provenance
      * @param mechanics of the steps, in the order of the rows of transitions
+     * @param transitions the same with their loads
+     * @param models whose limbs these are
      * @param postures rows of postures.csv
      * @param contacts contact table
      * @param curves powers over stance
@@ -70,6 +73,8 @@ public final class AppraiseUseCase {
     record Result(
             PostureCost cost,
             List<StepMechanics> mechanics,
+            List<TransitionView> transitions,
+            List<FootModel> models,
             List<PostureRow> postures,
             List<ContactRow> contacts,
             List<CurveRow> curves,
@@ -84,6 +89,7 @@ public final class AppraiseUseCase {
     private final List<SourceFile> sources;
     private final Map<Side, ModelLimb> models = new EnumMap<>(Side.class);
     private final List<StepMechanics> mechanics = new ArrayList<>();
+    private final List<TransitionView> transitions = new ArrayList<>();
     private final List<PostureRow> postures = new ArrayList<>();
     private final List<CurveRow> curves = new ArrayList<>();
 
@@ -173,7 +179,15 @@ public final class AppraiseUseCase {
                 .map(Finding::where)
                 .distinct()
                 .toList();
-        return new Result(cost, mechanics, postures, ContactOverrides.rows(subject.passes()), curves, failed);
+        return new Result(
+                cost,
+                mechanics,
+                transitions,
+                models.values().stream().map(ModelLimb::model).toList(),
+                postures,
+                ContactOverrides.rows(subject.passes()),
+                curves,
+                failed);
     }
 
     private void annotate(Path folder, Map<String, Path> files, GaitSubject subject)
@@ -254,6 +268,7 @@ public final class AppraiseUseCase {
     private TransitionRow row(Pass pass, LandmarkTracks tracks, Step step) {
         StepMechanics m = StepMechanics.of(step);
         mechanics.add(m);
+        transitions.add(new TransitionView(step, m));
         findings.addAll(m.findings());
         Set<String> codes = new LinkedHashSet<>();
         pass.findings().forEach(f -> codes.add(f.code()));

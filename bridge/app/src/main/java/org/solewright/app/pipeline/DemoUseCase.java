@@ -13,6 +13,7 @@ import org.solewright.analysis.fitting.ArcFit;
 import org.solewright.analysis.fitting.InertiaTable;
 import org.solewright.analysis.fitting.RollOverPath;
 import org.solewright.analysis.gait.GaitSettings;
+import org.solewright.app.report.PageForm;
 import org.solewright.domain.cost.Measure;
 import org.solewright.domain.cost.WalkTruth;
 import org.solewright.domain.finding.Finding;
@@ -145,7 +146,7 @@ public final class DemoUseCase {
                 version);
         lines.add("4. appraise");
         AppraiseUseCase.Result appraised = AppraiseUseCase.run(appraise);
-        AppraiseReport appraiseReport = AppraiseReport.write(appraised, appraise, folder);
+        AppraiseReport appraiseReport = AppraiseReport.write(appraised, appraise, folder, EnumSet.allOf(PageForm.class));
         appraiseReport.lines().forEach(l -> lines.add("   " + l));
         postures();
         compareFit(fitted);
