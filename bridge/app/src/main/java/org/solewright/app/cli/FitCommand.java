@@ -33,7 +33,8 @@ import picocli.CommandLine.Spec;
             "  solewright fit --standing standing.c3d --walking walk-1.c3d --walking walk-2.c3d \\",
             "    --landmarks map.xml --mass 71.5 --population adult --sex female --out model",
             "Writes foot-model-right.xml, foot-model-left.xml, fit-contacts.csv, fit-curves.csv and",
-            "fit-uncertainty.csv to the folder model."
+            "fit-uncertainty.csv to the folder model; --html and --pdf add a page per side, as",
+            "foot-model-right.html and foot-model-right.pdf."
         })
 final class FitCommand implements Callable<Integer> {
 
@@ -120,6 +121,9 @@ final class FitCommand implements Callable<Integer> {
             description = "Folder for the results (default: ${DEFAULT-VALUE}).")
     private Path out = Path.of(".");
 
+    @Mixin
+    private PageArguments pages = new PageArguments();
+
     @Spec
     private CommandSpec spec = CommandSpec.create();
 
@@ -154,7 +158,7 @@ final class FitCommand implements Callable<Integer> {
                 Version.NUMBER,
                 runs,
                 seed);
-        FitReport report = FitReport.write(request, out);
+        FitReport report = FitReport.write(request, out, pages.forms());
         PrintWriter stderr = spec.commandLine().getErr();
         FindingPrinter.print(stderr, report.findings());
         report.lines().forEach(spec.commandLine().getOut()::println);

@@ -77,7 +77,7 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
         files.put("postures.csv", PosturesTable.bytes(result.postures()));
         files.put("appraise-contacts.csv", ContactsTable.bytes(result.contacts()));
         files.put("appraise-curves.csv", CurvesTable.bytes(result.curves()));
-        files.putAll(CostPage.files(result, request.results().isEmpty(), pages));
+        files.putAll(ResultPages.files(result, request.results().isEmpty(), pages));
         List<Path> inputs = new ArrayList<>(request.gait().inputs());
         inputs.addAll(request.models());
         inputs.addAll(request.tables());

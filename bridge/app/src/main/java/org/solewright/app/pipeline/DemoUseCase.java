@@ -135,7 +135,7 @@ public final class DemoUseCase {
                 version);
         lines.add("3. fit");
         FitUseCase.Result fitted = FitUseCase.run(fit);
-        FitReport fitReport = FitReport.write(fitted, fit, folder);
+        FitReport fitReport = FitReport.write(fitted, fit, folder, EnumSet.of(PageForm.HTML));
         fitReport.lines().forEach(l -> lines.add("   " + l));
         GaitOptions walking = options.withoutStanding();
         AppraiseUseCase.Request appraise = new AppraiseUseCase.Request(
@@ -146,7 +146,8 @@ public final class DemoUseCase {
                 version);
         lines.add("4. appraise");
         AppraiseUseCase.Result appraised = AppraiseUseCase.run(appraise);
-        AppraiseReport appraiseReport = AppraiseReport.write(appraised, appraise, folder, EnumSet.allOf(PageForm.class));
+        AppraiseReport appraiseReport =
+                AppraiseReport.write(appraised, appraise, folder, EnumSet.allOf(PageForm.class));
         appraiseReport.lines().forEach(l -> lines.add("   " + l));
         postures();
         compareFit(fitted);

@@ -7,6 +7,8 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
+import org.solewright.app.report.PageForm;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Cautions;
 import org.solewright.domain.finding.Finding;
@@ -42,16 +44,32 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
      *
      * @param request what is asked
      * @param out folder, made where it is missing
+     * @param pages forms in which a page per side is written beside; may be empty
+     * @return what to print
+     * @throws UseCaseException where an input lacks what is needed or the folder cannot be written
+     * @throws FormatException where a file is not as its format says
+     */
+    public static FitReport write(FitUseCase.Request request, Path out, Set<PageForm> pages)
+            throws UseCaseException, FormatException {
+        return write(FitUseCase.run(request), request, out, pages);
+    }
+
+    /**
+     * The same without pages.
+     *
+     * @param request what is asked
+     * @param out folder, made where it is missing
      * @return what to print
      * @throws UseCaseException where an input lacks what is needed or the folder cannot be written
      * @throws FormatException where a file is not as its format says
      */
     public static FitReport write(FitUseCase.Request request, Path out) throws UseCaseException, FormatException {
-        return write(FitUseCase.run(request), request, out);
+        return write(request, out, Set.of());
     }
 
-    /** Writes what a run gave, as {@link #write(FitUseCase.Request, Path)} does. */
-    static FitReport write(FitUseCase.Result result, FitUseCase.Request request, Path out) throws UseCaseException {
+    /** Writes what a run gave, as {@link #write(FitUseCase.Request, Path, Set)} does. */
+    static FitReport write(FitUseCase.Result result, FitUseCase.Request request, Path out, Set<PageForm> pages)
+            throws UseCaseException {
         Map<String, byte[]> files = new LinkedHashMap<>();
         result.models().forEach((side, m) -> files.put("foot-model-" + side.word() + ".xml", FootModelFile.bytes(m)));
         files.put("fit-contacts.csv", ContactsTable.bytes(result.contacts()));
@@ -59,6 +77,7 @@ public record FitReport(List<String> lines, List<Finding> findings, List<String>
         result.angles().values().forEach(a -> curves.addAll(a.rows()));
         files.put("fit-curves.csv", CurvesTable.bytes(curves));
         files.put("fit-uncertainty.csv", UncertaintyTable.bytes(result.numbers()));
+        files.putAll(ResultPages.files(result, pages));
         List<Path> written = OutputFolder.of(out, request.inputs()).write(files);
         List<String> lines = new ArrayList<>();
         result.models().values().forEach(m -> describe(lines, m));

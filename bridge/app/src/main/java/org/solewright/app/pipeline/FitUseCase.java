@@ -20,6 +20,7 @@ import org.solewright.analysis.fitting.StandingPosture;
 import org.solewright.analysis.fitting.StandingSettings;
 import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.Pass;
+import org.solewright.app.report.FootRoll;
 import org.solewright.domain.finding.Basis;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.finding.Found;
@@ -146,6 +147,7 @@ public final class FitUseCase {
      * @param limbs the standing limbs by side
      * @param rollOvers what each side's stances showed
      * @param angles joint angles over stance by side
+     * @param rolls a tracked stance by side; none where there is none
      * @param contacts contact table
      * @param numbers what is known of the uncertainty of the models
      * @param findings all findings, once each
@@ -157,6 +159,7 @@ public final class FitUseCase {
             Map<Side, WalkingRollOver> rollOvers,
             Map<Side, JointCurves> angles,
             GaitSubject subject,
+            Map<Side, FootRoll> rolls,
             List<ContactRow> contacts,
             List<FittedNumber> numbers,
             List<Finding> findings,
@@ -255,6 +258,7 @@ public final class FitUseCase {
         Map<Side, Set<SegmentName>> observed = new EnumMap<>(Side.class);
         Map<Side, List<LimbMotion>> moved = new EnumMap<>(Side.class);
         Map<Side, JointCurves> angles = new EnumMap<>(Side.class);
+        Map<Side, FootRoll> rolls = new EnumMap<>(Side.class);
         for (Side side : sides) {
             StandingLimb asStood = built(posture, mass, side, stood);
             requireSound(asStood, standing.get(0));
@@ -271,6 +275,7 @@ public final class FitUseCase {
             rollOvers.put(side, rollOver);
             ZeroPosture zero = ZeroPosture.of(limb, options.isZeroFlat(), subject.passes(), motions);
             angles.put(side, JointCurves.of(limb, posture, zero, subject.passes(), motions));
+            new StanceRoll(limb).of(subject.passes(), motions).ifPresent(r -> rolls.put(side, r));
         }
         findings.addAll(subject.findings());
         List<FittedNumber> numbers = new ArrayList<>();
@@ -318,6 +323,7 @@ public final class FitUseCase {
                 rollOvers,
                 angles,
                 subject,
+                rolls,
                 ContactOverrides.rows(subject.passes()),
                 numbers,
                 shared,

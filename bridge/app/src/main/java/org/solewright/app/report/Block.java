@@ -1,6 +1,8 @@
 package org.solewright.app.report;
 
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /** A part of a section, ready to be set. */
 public sealed interface Block {
@@ -68,7 +70,26 @@ public sealed interface Block {
      * @param svg the drawing, an {@code svg} element
      * @param numbers what it is drawn from
      */
-    record Figure(String title, String description, String svg, Table numbers) {}
+    record Figure(String title, String description, String svg, Table numbers) {
+
+        private static final Pattern SIZE = Pattern.compile(" width=\"([0-9.]+)\" height=\"([0-9.]+)\"");
+
+        /**
+         * The drawing on paper, of a given width.
+         *
+         * @param millimetres width
+         * @return the same with its size stated
+         */
+        public String svgOf(double millimetres) {
+            Matcher m = SIZE.matcher(svg);
+            if (!m.find()) {
+                throw new IllegalStateException("drawing '" + title + "' states no size");
+            }
+            double ratio = Double.parseDouble(m.group(2)) / Double.parseDouble(m.group(1));
+            return svg.substring(0, m.start()) + " style=\"width:" + Drawing.number(millimetres) + "mm;height:"
+                    + Drawing.number(millimetres * ratio) + "mm\"" + m.group() + svg.substring(m.end());
+        }
+    }
 
     /**
      * Drawings that belong together.
@@ -81,6 +102,15 @@ public sealed interface Block {
         /** Copies the list. */
         public Figures {
             figures = List.copyOf(figures);
+        }
+
+        /**
+         * Width of its drawings on paper.
+         *
+         * @return mm
+         */
+        public double width() {
+            return layout.equals("one") ? 160 : 87;
         }
 
         static Figures of(Figure figure) {

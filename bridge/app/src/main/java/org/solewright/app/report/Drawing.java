@@ -61,8 +61,8 @@ final class Drawing {
 
     /** A filled square stood on its corner. */
     void diamond(double x, double y, double r, String fill) {
-        line("<path d=\"M" + number(x) + " " + number(y - r) + "l" + number(r) + " " + number(r) + "l" + number(-r) + " "
-                + number(r) + "l" + number(-r) + " " + number(-r) + "z\" fill=\"" + fill + "\"/>");
+        line("<path d=\"M" + number(x) + " " + number(y - r) + "l" + number(r) + " " + number(r) + "l" + number(-r)
+                + " " + number(r) + "l" + number(-r) + " " + number(-r) + "z\" fill=\"" + fill + "\"/>");
     }
 
     void segment(double x1, double y1, double x2, double y2, String stroke, double strokeWidth, String dash) {
@@ -87,8 +87,8 @@ final class Drawing {
     }
 
     void text(double x, double y, String anchor, String content, String fill, String more) {
-        line("<text x=\"" + number(x) + "\" y=\"" + number(y) + "\" text-anchor=\"" + anchor + "\" fill=\"" + fill + "\""
-                + more + ">" + Words.escaped(content) + "</text>");
+        line("<text x=\"" + number(x) + "\" y=\"" + number(y) + "\" text-anchor=\"" + anchor + "\" fill=\"" + fill
+                + "\"" + more + ">" + Words.escaped(content) + "</text>");
     }
 
     /** A box that a drawing's inner part does not leave. */

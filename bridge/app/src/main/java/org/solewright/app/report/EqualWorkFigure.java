@@ -45,7 +45,7 @@ final class EqualWorkFigure {
                     Words.number(reached, 3),
                     reached.isPresent() ? Words.number(100 * reached.getAsDouble() / step, 0) : Words.NONE));
             double left = (k % PER_ROW) * WIDTH / PER_ROW;
-            cell(drawing, curve, reached, left, (k / PER_ROW) * CELL, LIMB / longest);
+            cell(drawing, curve, reached, left, CELL * Math.floorDiv(k, PER_ROW), LIMB / longest);
         }
         return new Block.Figure(
                 title + ".",

@@ -46,8 +46,7 @@ public record FindingGroup(String severity, String heading, List<Entry> entries)
             Map<List<String>, List<String>> places = new LinkedHashMap<>();
             for (Finding f : findings) {
                 if (f.severity() == severity) {
-                    List<String> where = places.computeIfAbsent(
-                            List.of(f.code(), f.message()), k -> new ArrayList<>());
+                    List<String> where = places.computeIfAbsent(List.of(f.code(), f.message()), k -> new ArrayList<>());
                     if (!f.where().isEmpty() && !where.contains(f.where())) {
                         where.add(f.where());
                     }
@@ -67,12 +66,15 @@ public record FindingGroup(String severity, String heading, List<Entry> entries)
     }
 
     private static String heading(Severity severity, int count) {
-        String what = switch (severity) {
-            case ERROR -> count == 1 ? "error: this input failed" : "errors: these inputs failed";
-            case WARNING -> count == 1 ? "warning: look at it before using the numbers"
-                    : "warnings: look at them before using the numbers";
-            case NOTE -> count == 1 ? "note" : "notes";
-        };
+        String what =
+                switch (severity) {
+                    case ERROR -> count == 1 ? "error: this input failed" : "errors: these inputs failed";
+                    case WARNING ->
+                        count == 1
+                                ? "warning: look at it before using the numbers"
+                                : "warnings: look at them before using the numbers";
+                    case NOTE -> count == 1 ? "note" : "notes";
+                };
         return count + " " + what;
     }
 }

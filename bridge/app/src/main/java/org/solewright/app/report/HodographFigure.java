@@ -14,7 +14,7 @@ final class HodographFigure {
 
     private static final double WIDTH = 560;
     private static final double LEFT = 56;
-    private static final double RIGHT = 540;
+    private static final double RIGHT = 425;
     private static final double TOP = 34;
     private static final int POINTS = 150;
     private static final int NUMBERS = 21;
@@ -66,7 +66,8 @@ final class HodographFigure {
         double reach = 1.15 * steepest;
         double bottom = TOP + 2 * reach * scale;
         Drawing drawing = new Drawing(id, WIDTH, bottom + 46, title, description);
-        Axes axes = new Axes(drawing, LEFT, TOP, RIGHT, bottom).x(0, 1.04 * fastest).y(-reach, reach);
+        Axes axes =
+                new Axes(drawing, LEFT, TOP, RIGHT, bottom).x(0, 1.04 * fastest).y(-reach, reach);
         axes.draw("forward (m/s)", "upward (m/s)");
         ray(drawing, axes, lowest);
         ray(drawing, axes, highest);
@@ -134,10 +135,7 @@ final class HodographFigure {
             return;
         }
         drawing.diamond(x, y, 6, Drawing.INK);
-        double side = axes.py(0) < y ? 1 : -1;
-        double labelY = y + side * 22;
-        drawing.segment(x, y, x - 34, labelY, Drawing.GREY, 1, "");
-        drawing.text(x - 38, labelY + 4, "end", words, Drawing.INK);
+        drawing.text(x + 12, y + 4, "start", words, Drawing.INK);
     }
 
     private Block.Table numbers() {

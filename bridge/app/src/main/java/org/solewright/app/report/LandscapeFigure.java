@@ -60,9 +60,9 @@ final class LandscapeFigure {
             if (Double.isFinite(y[POINTS - 1])) {
                 ends.add(new double[] {k, axes.py(y[POINTS - 1])});
             }
-            ring(drawing, axes, curves, k);
         }
         names(drawing, axes, curves, ends);
+        crossings(drawing, axes, row, curves);
         measured(drawing, axes, row, step, pushOff, "push_off_J_sd", "measured push-off", true);
         measured(drawing, axes, row, step, collision, "collision_J_sd", "measured collision, sign turned", false);
         return new Block.Figure(title + ".", description, drawing.svg(), numbers(curves, low, high, what));
@@ -70,26 +70,36 @@ final class LandscapeFigure {
 
     private static String crossovers(TransitionRow row) {
         StringBuilder text = new StringBuilder();
-        row.number("crossover_low_m").ifPresent(d -> text.append(" A flat foot of one segment costs what the ")
-                .append(row.text("crossover_reference").orElse("reference").replace('_', ' '))
-                .append(" limb does at ")
-                .append(Words.number(d, 3))
-                .append(" m"));
-        row.number("crossover_step_length_m").ifPresent(d -> text.append(" and at ").append(Words.number(d, 3)).append(" m"));
-        return text.isEmpty() ? "" : text.append(". Rings: costs what the point foot does.").toString();
+        row.number("crossover_low_m")
+                .ifPresent(d -> text.append(" A flat foot of one segment costs what the ")
+                        .append(row.text("crossover_reference")
+                                .orElse("reference")
+                                .replace('_', ' '))
+                        .append(" limb does at ")
+                        .append(Words.number(d, 3))
+                        .append(" m"));
+        row.number("crossover_step_length_m")
+                .ifPresent(
+                        d -> text.append(" and at ").append(Words.number(d, 3)).append(" m"));
+        return text.isEmpty() ? "" : text.append(" (rings).").toString();
     }
 
-    /** A ring where a foot costs what the point foot costs: f^2/N + (D - f)^2 = D^2 at one limb length. */
-    private static void ring(Drawing drawing, Axes axes, List<PostureCurve> curves, int k) {
-        PostureCurve curve = curves.get(k);
-        PostureCurve point = curves.get(0);
-        if (curve.segments() == 0 || curve.limb() != point.limb() || point.segments() != 0) {
-            return;
-        }
-        double at = curve.foot() * (1 + 1.0 / curve.segments()) / 2;
-        double x = axes.px(at);
-        if (at > curve.shortest() && x > axes.left() && x < axes.right()) {
-            drawing.circle(x, axes.py(curve.work(at)), 4.5, "#ffffff", COLOURS[k % COLOURS.length]);
+    /** Rings where the flat foot of one segment costs what the reference limb does. */
+    private static void crossings(Drawing drawing, Axes axes, TransitionRow row, List<PostureCurve> curves) {
+        for (PostureCurve curve : curves) {
+            for (String column : List.of("crossover_low_m", "crossover_step_length_m")) {
+                double at = row.number(column).orElse(Double.NaN);
+                if (curve.segments() == 1 && axes.px(at) > axes.left() && axes.px(at) < axes.right()) {
+                    drawing.circle(axes.px(at), axes.py(curve.work(at)), 5, "#ffffff", Drawing.FIRST);
+                    drawing.text(
+                            axes.px(at) + 9,
+                            axes.py(curve.work(at)) - 9,
+                            "start",
+                            "crossover",
+                            Drawing.INK,
+                            " font-size=\"11.5\"");
+                }
+            }
         }
     }
 
@@ -133,7 +143,8 @@ final class LandscapeFigure {
         }
         double labelY = axes.bottom() - (isDiamond ? 34 : 14);
         drawing.segment(x, axes.py(work - sd), x, labelY - 10, Drawing.GREY, 1, "2 3");
-        drawing.text(x, labelY, isDiamond ? "end" : "start", words, Drawing.INK, " font-weight=\"bold\" font-size=\"12\"");
+        drawing.text(
+                x, labelY, isDiamond ? "end" : "start", words, Drawing.INK, " font-weight=\"bold\" font-size=\"12\"");
     }
 
     private static Block.Table numbers(List<PostureCurve> curves, double low, double high, String what) {

@@ -1,5 +1,6 @@
 package org.solewright.app.report;
 
+import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.FSFontUseCase;
 import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.FontStyle;
 import com.openhtmltopdf.pdfboxout.PdfRendererBuilder;
 import com.openhtmltopdf.svgsupport.BatikSVGDrawer;
@@ -13,6 +14,7 @@ import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Map;
+import java.util.Set;
 
 /** Sets pages as HTML and as PDF. The same page gives the same bytes. */
 public final class PageWriter {
@@ -45,6 +47,7 @@ public final class PageWriter {
         ByteArrayOutputStream out = new ByteArrayOutputStream();
         PdfRendererBuilder builder = new PdfRendererBuilder();
         builder.usePdfUaAccessibility(true);
+        builder.useUnicodeLineBreaker(new LineBreaks());
         font(builder, "LiberationSans-Regular.ttf", REGULAR, FontStyle.NORMAL);
         font(builder, "LiberationSans-Bold.ttf", BOLD, FontStyle.NORMAL);
         font(builder, "LiberationSans-Italic.ttf", REGULAR, FontStyle.ITALIC);
@@ -62,7 +65,13 @@ public final class PageWriter {
 
     private static void font(PdfRendererBuilder builder, String file, int weight, FontStyle style) {
         byte[] bytes = Setting.bytes("liberation/" + file);
-        builder.useFont(() -> new ByteArrayInputStream(bytes), FONT, weight, style, true);
+        builder.useFont(
+                () -> new ByteArrayInputStream(bytes),
+                FONT,
+                weight,
+                style,
+                true,
+                Set.of(FSFontUseCase.DOCUMENT, FSFontUseCase.SVG));
     }
 
     private static String text(Page page, Setting setting) {

@@ -33,7 +33,8 @@ final class PdfBytes {
         StringBuilder out = new StringBuilder();
         while (m.find()) {
             String found = m.group();
-            String fixed = found.startsWith("D:") ? "D:" + time + found.substring(2 + time.length())
+            String fixed = found.startsWith("D:")
+                    ? "D:" + time + found.substring(2 + time.length())
                     : time + found.substring(time.length());
             m.appendReplacement(out, Matcher.quoteReplacement(fixed));
         }

@@ -80,11 +80,18 @@ public final class PostureCostPage {
         List<Section> sections = new ArrayList<>();
         sections.add(steps());
         sections.add(new Section(
-                "work", "Work of the steps", List.of(Block.Figures.of(WorkFigure.of(content.cost().rows(), "work-figure"))), false));
+                "work",
+                "Work of the steps",
+                List.of(Block.Figures.of(WorkFigure.of(content.cost().rows(), "work-figure"))),
+                false));
         postures().ifPresent(sections::add);
         sections.add(audit());
-        sections.add(new Section("table", "Step table", List.of(StepTable.of(content.cost().rows())), false));
-        sections.add(Provenance.section(content.cost().sources(), content.cost().settings(), content.cost().version()));
+        sections.add(new Section(
+                "table", "Step table", List.of(StepTable.of(content.cost().rows())), false));
+        sections.add(Provenance.section(
+                content.cost().sources(),
+                content.cost().settings(),
+                content.cost().version()));
         return new Page(
                 "Posture cost",
                 subject().isEmpty() ? "What these steps cost" : "What the steps of " + subject() + " cost",
@@ -148,8 +155,10 @@ public final class PostureCostPage {
     }
 
     private Quality quality(List<Finding> findings) {
-        QualityReview review =
-                new QualityReview().findings(findings).contacts(content.contacts()).mass(mass());
+        QualityReview review = new QualityReview()
+                .findings(findings)
+                .contacts(content.contacts())
+                .mass(mass());
         int n = rows.size();
         use(review, "Push-off work of the trailing limb", "push_off_J", n);
         use(review, "Collision work of the leading limb", "collision_J", n);
@@ -166,7 +175,8 @@ public final class PostureCostPage {
         List<String> missing = new ArrayList<>();
         for (TransitionRow row : rows) {
             if (row.number(column).isEmpty()) {
-                missing.add(row.text("trial").orElse("") + " step " + row.text("step").orElse(""));
+                missing.add(row.text("trial").orElse("") + " step "
+                        + row.text("step").orElse(""));
             }
         }
         int there = n - missing.size();
@@ -187,12 +197,12 @@ public final class PostureCostPage {
                 break;
             }
             drawn++;
-            blocks.add(new Block.Heading(Words.capital(view.name()) + ": from the " + view.trailing().word()
-                    + " to the " + view.leading().word() + " limb"));
+            blocks.add(new Block.Heading(view.name() + ": from the "
+                    + view.trailing().word() + " to the " + view.leading().word() + " limb"));
             blocks.add(Block.Figures.beside(
                     HodographFigure.of(view, "hodograph-" + drawn), PowerFigure.of(view, "power-" + drawn)));
         }
-        return new Section("steps", "What each step did", blocks, true);
+        return new Section("steps", "What each step did", blocks, false);
     }
 
     /** The step whose landscape is drawn: per trailing side the one that knows most of its works. */
@@ -251,10 +261,11 @@ public final class PostureCostPage {
         if (blocks.isEmpty()) {
             return Optional.empty();
         }
-        blocks.add(new Block.Text("Heel raised, and tip of the toe: a geometric thought experiment; muscle work to hold the"
-                + " heel up is not counted. Push-off alone and push-off with collision at once bracket each other; neither"
-                + " is the comparable one."));
-        return Optional.of(new Section("postures", "Beside other postures of the same limb", blocks, true));
+        blocks.add(new Block.Text(
+                "Heel raised, and tip of the toe: a geometric thought experiment; muscle work to hold the"
+                        + " heel up is not counted. Push-off alone and push-off with collision at once bracket each other; neither"
+                        + " is the comparable one."));
+        return Optional.of(new Section("postures", "Beside other postures of the same limb", blocks, false));
     }
 
     private Section audit() {
@@ -263,7 +274,8 @@ public final class PostureCostPage {
             if (row.number("audit_force_residual_bw").isPresent()
                     || row.number("audit_energy_residual").isPresent()) {
                 audited.add(Block.Row.of(
-                        row.text("trial").orElse("") + " step " + row.text("step").orElse(""),
+                        row.text("trial").orElse("") + " step "
+                                + row.text("step").orElse(""),
                         Words.number(row.number("audit_force_residual_bw"), 4),
                         Words.number(row.number("audit_energy_residual"), 4)));
             }

@@ -30,9 +30,10 @@ record PostureCurve(String name, int segments, double limb, double foot, double 
     static String words(Posture posture) {
         return switch (posture.kind()) {
             case COMPASS -> "point foot";
-            case PLANTIGRADE -> posture.segments().orElseThrow() == 1
-                    ? "flat foot, 1 segment"
-                    : "flat foot, " + posture.segments().orElseThrow() + " segments";
+            case PLANTIGRADE ->
+                posture.segments().orElseThrow() == 1
+                        ? "flat foot, 1 segment"
+                        : "flat foot, " + posture.segments().orElseThrow() + " segments";
             case ROLLING_ARC -> "rolling arc";
             case DIGITIGRADE -> "heel raised, on the toes";
             case UNGULIGRADE -> "on the tip of the toe";

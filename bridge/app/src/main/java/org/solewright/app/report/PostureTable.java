@@ -16,14 +16,13 @@ final class PostureTable {
 
     static Block.Table of(TransitionRow row, List<PostureRow> measured) {
         Map<Posture, List<PostureRow>> byPosture = new LinkedHashMap<>();
-        measured.forEach(p -> byPosture
-                .computeIfAbsent(p.posture(), k -> new ArrayList<>())
-                .add(p));
+        measured.forEach(p ->
+                byPosture.computeIfAbsent(p.posture(), k -> new ArrayList<>()).add(p));
         List<Block.Row> rows = new ArrayList<>();
         byPosture.forEach((posture, forms) -> {
             PostureRow any = forms.get(0);
-            boolean isThought = posture.kind() == Posture.Kind.DIGITIGRADE
-                    || posture.kind() == Posture.Kind.UNGULIGRADE;
+            boolean isThought =
+                    posture.kind() == Posture.Kind.DIGITIGRADE || posture.kind() == Posture.Kind.UNGULIGRADE;
             rows.add(Block.Row.of(
                     Words.capital(PostureCurve.words(posture)) + (isThought ? " (thought experiment)" : ""),
                     Words.number(any.limb(), 3),

@@ -72,7 +72,7 @@ final class PowerFigure {
         double room = 0.16 * (high - low);
         Axes axes = new Axes(drawing, 62, 34, 545, 294)
                 .x(1000 * (from - contact), 1000 * (to - contact))
-                .y(low - room, high + room);
+                .y(low - 1.9 * room, high + room);
         doubleSupport(drawing, axes);
         axes.draw("time from " + view.leading().word() + " contact (ms)", "power (W)");
         for (StepPhases.Phase phase : phases) {
@@ -139,16 +139,11 @@ final class PowerFigure {
             }
         }
         boolean isUp = extreme > 0;
-        double x = Math.max(axes.left() + 44, Math.min(axes.right() - 44, axes.px(1000 * (at - contact))));
+        double x = Math.max(axes.left() + 52, Math.min(axes.right() - 58, axes.px(1000 * (at - contact))));
         double y = axes.py(extreme) + (isUp ? -20 : 18);
         String fill = phase.isTrailing() ? Drawing.SECOND : Drawing.FIRST;
         drawing.text(x, y, "middle", word(phase.measure()), fill, " font-weight=\"bold\"");
-        drawing.text(
-                x,
-                y + 14,
-                "middle",
-                Words.withSd(phase.work(), view.sd(phase.measure()), 1) + " J",
-                fill);
+        drawing.text(x, y + 14, "middle", Words.withSd(phase.work(), view.sd(phase.measure()), 1) + " J", fill);
     }
 
     private void curve(Drawing drawing, Axes axes, boolean isTrailing) {
@@ -159,8 +154,7 @@ final class PowerFigure {
             x[i] = 1000 * (t[i] - contact);
             y[i] = isTrailing ? trailing(t[i]) : leading(t[i]);
         }
-        drawing.path(
-                axes.path(x, y), isTrailing ? Drawing.SECOND : Drawing.FIRST, 2, isTrailing ? "" : DASH);
+        drawing.path(axes.path(x, y), isTrailing ? Drawing.SECOND : Drawing.FIRST, 2, isTrailing ? "" : DASH);
     }
 
     private void legend(Drawing drawing, Axes axes) {
@@ -177,12 +171,11 @@ final class PowerFigure {
         for (int i = 0; i < NUMBERS; i++) {
             double t = from + i * (to - from) / (NUMBERS - 1);
             rows.add(Block.Row.of(
-                    Words.number(1000 * (t - contact), 0),
-                    Words.number(trailing(t), 0),
-                    Words.number(leading(t), 0)));
+                    Words.number(1000 * (t - contact), 0), Words.number(trailing(t), 0), Words.number(leading(t), 0)));
         }
         return new Block.Table(
-                String.format(Locale.ROOT, "Power of each limb, %s; every sample is in appraise-curves.csv", view.name()),
+                String.format(
+                        Locale.ROOT, "Power of each limb, %s; every sample is in appraise-curves.csv", view.name()),
                 List.of("Time from contact (ms)", "Trailing limb (W)", "Leading limb (W)"),
                 rows,
                 true);

@@ -7,6 +7,7 @@ import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.EnumMap;
+import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
@@ -22,6 +23,9 @@ import org.solewright.domain.gait.ContactRow;
  * finding-limits.properties}: code, aspect, what is limited.
  */
 final class QualityReview {
+
+    /** Where a message is told whole, not by its first clause. */
+    private static final String WHOLE = "{message}";
 
     private static final String RESOURCE = "finding-limits.properties";
 
@@ -47,7 +51,7 @@ final class QualityReview {
     private final Map<Aspect, Set<String>> seen = new EnumMap<>(Aspect.class);
     private final Map<Aspect, Set<String>> limits = new EnumMap<>(Aspect.class);
     private final Map<Aspect, Set<String>> noted = new EnumMap<>(Aspect.class);
-    private final Set<String> named = new LinkedHashSet<>();
+    private final Map<Aspect, Set<String>> names = new EnumMap<>(Aspect.class);
     private final List<Quality.Usable> uses = new ArrayList<>();
 
     QualityReview() {
@@ -62,6 +66,7 @@ final class QualityReview {
             seen.put(aspect, new LinkedHashSet<>());
             limits.put(aspect, new LinkedHashSet<>());
             noted.put(aspect, new LinkedHashSet<>());
+            names.put(aspect, new LinkedHashSet<>());
         }
     }
 
@@ -71,22 +76,36 @@ final class QualityReview {
 
     /** Sorts findings in. */
     QualityReview findings(List<Finding> findings) {
+        // One line for a sentence that holds at several places.
+        Map<List<String>, List<String>> places = new LinkedHashMap<>();
         for (Finding f : findings) {
             String entry = words.getProperty(f.code());
             if (entry == null) {
                 continue;
             }
             String[] parts = entry.split("\\|", -1);
-            Aspect aspect = Aspect.valueOf(parts[0].strip());
-            String sentence = (f.where().isEmpty() ? "" : f.where() + ": ") + brief(f.message());
-            if (f.severity() == Severity.NOTE) {
-                of(noted, aspect).add(Words.typeset(brief(f.message())));
-                continue;
+            String message = parts[2].contains(WHOLE) ? f.message() : brief(f.message());
+            String named = parts[2].strip().replace("{where}", f.where()).replace(WHOLE, "");
+            String severity = f.severity() == Severity.NOTE ? "note" : "limit";
+            places.computeIfAbsent(
+                            List.of(severity, parts[0].strip(), message, parts[1].strip()), k -> new ArrayList<>())
+                    .add(f.where());
+            if (severity.equals("limit") && !named.isBlank()) {
+                of(names, Aspect.valueOf(parts[0].strip())).add(named);
             }
-            of(seen, aspect).add(Words.typeset(sentence));
-            of(limits, aspect).add(parts[1].strip());
-            named.add(parts.length > 2 ? parts[2].strip().replace("{where}", f.where()) : f.where());
         }
+        places.forEach((what, where) -> {
+            Aspect aspect = Aspect.valueOf(what.get(1));
+            List<String> at =
+                    where.stream().filter(w -> !w.isEmpty()).distinct().toList();
+            String line = Words.typeset((at.isEmpty() ? "" : Words.list(at) + ": ") + what.get(2));
+            if (what.get(0).equals("limit")) {
+                of(seen, aspect).add(line);
+                of(limits, aspect).add(what.get(3));
+            } else if (aspect == Aspect.PLATFORMS) {
+                of(noted, aspect).add(line);
+            }
+        });
         return this;
     }
 
@@ -110,17 +129,21 @@ final class QualityReview {
             if (c.whole()) {
                 whole.add(name);
             } else if (!c.platforms().isEmpty()) {
-                of(seen, Aspect.CONTACTS).add(Words.typeset(
-                        name + ", platform " + c.platforms().toString().replaceAll("[\\[\\]]", "") + ": "
-                                + brief(c.why())));
-                of(limits, Aspect.CONTACTS).add("not used for "
-                        + Words.list(c.notUsedFor().stream().map(u -> u.word()).toList()) + " (" + name + ")");
-                named.add(name + " not wholly on its platform");
+                of(seen, Aspect.CONTACTS)
+                        .add(Words.typeset(name + ", platform "
+                                + c.platforms().toString().replaceAll("[\\[\\]]", "") + ": " + brief(c.why())));
+                of(limits, Aspect.CONTACTS)
+                        .add("not used for "
+                                + Words.list(c.notUsedFor().stream()
+                                        .map(u -> u.word())
+                                        .toList()) + " (" + name + ")");
+                of(names, Aspect.CONTACTS).add(name + " not wholly on its platform");
             }
         }
         if (!contacts.isEmpty()) {
-            of(noted, Aspect.CONTACTS).add(whole.size() + " of " + contacts.size() + " contacts are whole"
-                    + (whole.isEmpty() ? "" : ": " + Words.list(whole)));
+            of(noted, Aspect.CONTACTS)
+                    .add(whole.size() + " of " + contacts.size() + " contacts are whole"
+                            + (whole.isEmpty() ? "" : ": " + Words.list(whole)));
         }
         return this;
     }
@@ -150,6 +173,8 @@ final class QualityReview {
                     lines,
                     List.copyOf(of(limits, aspect))));
         }
+        List<String> named = new ArrayList<>();
+        names.values().forEach(named::addAll);
         String summary = named.isEmpty()
                 ? "Nothing was found that limits these recordings beyond the uncertainty printed with each number."
                 : "These recordings are limited by: " + String.join("; ", named) + ".";

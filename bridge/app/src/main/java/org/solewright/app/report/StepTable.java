@@ -61,8 +61,9 @@ final class StepTable {
         List<String> columns = new ArrayList<>(List.of("Quantity"));
         boolean areShown = steps.size() <= MOST;
         if (areShown) {
-            steps.forEach(s -> columns.add(s.text("trial").orElse("") + " step " + s.text("step").orElse("") + ", "
-                    + s.text("trailing_side").orElse("") + " to " + s.text("side").orElse("")));
+            steps.forEach(s -> columns.add(s.text("trial").orElse("") + " step "
+                    + s.text("step").orElse("") + ", " + s.text("trailing_side").orElse("") + " to "
+                    + s.text("side").orElse("")));
         }
         means.forEach(m -> columns.add("Mean to the " + m.text("side").orElse("") + ", n = "
                 + Words.number(m.number("n"), 0) + ", SD over steps, 95 % interval"));
@@ -103,12 +104,15 @@ final class StepTable {
         if (value.isEmpty()) {
             return Words.NONE;
         }
-        OptionalDouble sd = beside(all, mean, "sd").map(r -> r.number(line.column())).orElse(OptionalDouble.empty());
+        OptionalDouble sd =
+                beside(all, mean, "sd").map(r -> r.number(line.column())).orElse(OptionalDouble.empty());
         Optional<TransitionRow> low = beside(all, mean, "low");
         Optional<TransitionRow> high = beside(all, mean, "high");
         int digits = sd.isPresent() && sd.getAsDouble() > 0 ? Words.digits(sd.getAsDouble()) : line.digits();
         String text = Words.withSd(value.getAsDouble(), sd, line.digits());
-        if (low.isPresent() && high.isPresent() && low.get().number(line.column()).isPresent()) {
+        if (low.isPresent()
+                && high.isPresent()
+                && low.get().number(line.column()).isPresent()) {
             text += " (" + Words.number(low.get().number(line.column()), digits) + " to "
                     + Words.number(high.get().number(line.column()), digits) + ")";
         }

@@ -9,7 +9,7 @@ import org.solewright.domain.cost.TransitionRow;
 final class WorkFigure {
 
     private static final double WIDTH = 720;
-    private static final double LEFT = 150;
+    private static final double LEFT = 168;
     private static final double RIGHT = 700;
     private static final double BAR = 13;
     private static final double GAP = 18;
@@ -20,7 +20,7 @@ final class WorkFigure {
         "push_off_J", "collision_J", "rebound_J", "preload_J", "push_off_ds_J", "collision_ds_J"
     };
     private static final String[] NAMES = {
-        "push-off", "collision", "rebound", "preload", "push-off, both feet bearing", "collision, both feet bearing"
+        "push-off", "collision", "rebound", "preload", "push-off, double support", "collision, double support"
     };
 
     private WorkFigure() {}
@@ -51,10 +51,12 @@ final class WorkFigure {
             }
         }
         String title = "Works of the four phases";
-        String description = "Positive work is done by the limb, negative work is taken up by it. A whisker is one SD from"
-                + " the doubt about mean velocity and mass; each bar carries its number and the step it belongs to.";
+        String description =
+                "Positive work is done by the limb, negative work is taken up by it. A whisker is one SD from"
+                        + " the doubt about mean velocity and mass; each bar carries its work and, in brackets, the number of its step.";
         double group = rows.size() * BAR + GAP;
-        double bottom = 34 + COLUMNS.length * group;
+        double top0 = 20 + 16 * ((rows.size() + 1) / 2) + 10;
+        double bottom = top0 + COLUMNS.length * group;
         Drawing drawing = new Drawing(id, WIDTH, bottom + 46, title, description);
         double low = 0;
         double high = 0;
@@ -66,24 +68,38 @@ final class WorkFigure {
                 high = Math.max(high, v + sd);
             }
         }
-        double room = 0.45 * (high - low);
-        Axes axes = new Axes(drawing, LEFT, 34, RIGHT, bottom).x(low - (low < 0 ? room : 0), high + room).y(0, 1);
+        double room = 0.3 * (high - low);
+        Axes axes = new Axes(drawing, LEFT, top0, RIGHT, bottom)
+                .x(low - (low < 0 ? room : 0), high + room)
+                .y(0, 1);
+        for (int i = 0; i < rows.size(); i++) {
+            drawing.text(
+                    i % 2 == 0 ? 8 : WIDTH / 2,
+                    20 + 16 * Math.floorDiv(i, 2),
+                    "start",
+                    "(" + (i + 1) + ") " + name(rows.get(i)),
+                    Drawing.INK);
+        }
         verticals(drawing, axes);
         for (int k = 0; k < COLUMNS.length; k++) {
-            double top = 34 + k * group + GAP / 2;
-            drawing.text(LEFT - 8, top + rows.size() * BAR / 2 + 4, "end", NAMES[k].replace(", both", " (both"), Drawing.INK,
+            double top = top0 + k * group + GAP / 2;
+            drawing.text(
+                    LEFT - 8,
+                    top + rows.size() * BAR / 2 + 4,
+                    "end",
+                    NAMES[k],
+                    Drawing.INK,
                     k < 4 ? " font-weight=\"bold\"" : " font-size=\"11\"");
             for (int i = 0; i < rows.size(); i++) {
-                bar(drawing, axes, rows.get(i), COLUMNS[k], top + i * BAR);
+                bar(drawing, axes, rows.get(i), i + 1, COLUMNS[k], top + i * BAR);
             }
         }
         return new Block.Figure(title + ".", description, drawing.svg(), numbers(rows));
     }
 
     private static void verticals(Drawing drawing, Axes axes) {
-        double span = 1;
         double x0 = axes.px(0);
-        span = (axes.px(1) - x0);
+        double span = axes.px(1) - x0;
         double step = Axes.step((RIGHT - LEFT) / span, 7);
         for (int i = -40; i <= 40; i++) {
             double x = x0 + i * step * span;
@@ -95,12 +111,17 @@ final class WorkFigure {
         drawing.text((LEFT + RIGHT) / 2, axes.bottom() + 36, "middle", "work (J)", Drawing.INK);
     }
 
-    private static void bar(Drawing drawing, Axes axes, TransitionRow row, String column, double top) {
+    private static void bar(Drawing drawing, Axes axes, TransitionRow row, int number, String column, double top) {
         OptionalDouble value = row.number(column);
         double middle = top + BAR / 2;
         if (value.isEmpty()) {
             drawing.text(
-                    axes.px(0) + 6, middle + 4, "start", "not known, " + name(row), Drawing.GREY, " font-size=\"10.5\"");
+                    axes.px(0) + 6,
+                    middle + 4,
+                    "start",
+                    "(" + number + ") not known",
+                    Drawing.GREY,
+                    " font-size=\"10.5\"");
             return;
         }
         double v = value.getAsDouble();
@@ -128,7 +149,7 @@ final class WorkFigure {
                 end + (v >= 0 ? 7 : -7),
                 middle + 4,
                 v >= 0 ? "start" : "end",
-                Words.withSd(v, sd, 1) + " J  " + name(row),
+                "(" + number + ") " + Words.withSd(v, sd, 1) + " J",
                 Drawing.INK,
                 " font-size=\"10.5\"");
     }
@@ -138,9 +159,10 @@ final class WorkFigure {
         for (TransitionRow row : rows) {
             List<String> cells = new ArrayList<>();
             for (String column : COLUMNS) {
-                cells.add(row.number(column).isPresent()
-                        ? Words.withSd(row.number(column).getAsDouble(), row.number(column + "_sd"), 1)
-                        : Words.NONE);
+                cells.add(
+                        row.number(column).isPresent()
+                                ? Words.withSd(row.number(column).getAsDouble(), row.number(column + "_sd"), 1)
+                                : Words.NONE);
             }
             out.add(new Block.Row(name(row), cells));
         }

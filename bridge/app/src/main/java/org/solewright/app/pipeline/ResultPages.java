@@ -3,15 +3,17 @@ package org.solewright.app.pipeline;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
+import org.solewright.app.report.ModelPage;
 import org.solewright.app.report.Page;
 import org.solewright.app.report.PageForm;
 import org.solewright.app.report.PostureCostPage;
 
-/** The page of an appraisal as files. */
-final class CostPage {
+/** The pages of results as files. */
+final class ResultPages {
 
-    private CostPage() {}
+    private ResultPages() {}
 
     static Map<String, byte[]> files(AppraiseUseCase.Result result, boolean isMeasured, Set<PageForm> forms) {
         if (forms.isEmpty()) {
@@ -29,7 +31,24 @@ final class CostPage {
         return files(page, "posture-cost", forms);
     }
 
-    static Map<String, byte[]> files(Page page, String stem, Set<PageForm> forms) {
+    /** The pages of a fit, one per side. */
+    static Map<String, byte[]> files(FitUseCase.Result result, Set<PageForm> forms) {
+        Map<String, byte[]> files = new LinkedHashMap<>();
+        if (!forms.isEmpty()) {
+            result.models()
+                    .forEach((side, model) -> files.putAll(files(
+                            ModelPage.of(
+                                    model,
+                                    Optional.ofNullable(result.rolls().get(side)),
+                                    result.contacts(),
+                                    FindingCures.read()::of),
+                            "foot-model-" + side.word(),
+                            forms)));
+        }
+        return files;
+    }
+
+    private static Map<String, byte[]> files(Page page, String stem, Set<PageForm> forms) {
         Map<String, byte[]> files = new LinkedHashMap<>();
         for (PageForm form : PageForm.values()) {
             if (forms.contains(form)) {
