@@ -14,6 +14,7 @@ module org.solewright.app {
     requires openhtmltopdf.core;
     requires openhtmltopdf.pdfbox;
     requires openhtmltopdf.svg.support;
+    requires org.apache.pdfbox;
 
     exports org.solewright.app.cli;
 

@@ -40,8 +40,8 @@ public final class StepPhases {
             }
         }
         double to = Math.min(loads.leading().end(), loads.knownTo());
-        List<PowerPhases.Run> leading = PowerPhases.runs(
-                mechanics.leadingPower(), loads.leading().start(), to, loads.shortestPhase());
+        List<PowerPhases.Run> leading =
+                PowerPhases.runs(mechanics.leadingPower(), loads.leading().start(), to, loads.shortestPhase());
         int first = 0;
         while (first < leading.size() && leading.get(first).isPositive()) {
             first++;

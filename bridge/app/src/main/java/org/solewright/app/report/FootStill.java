@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
-import java.util.function.ToDoubleFunction;
 import org.solewright.domain.foot.FootModel;
 import org.solewright.domain.foot.Joint;
 import org.solewright.domain.foot.Pad;
@@ -34,15 +33,15 @@ final class FootStill {
 
     /** Which components go right and up. */
     private enum View {
-        SIDE(Vec3::x, Vec3::y),
-        TOP(Vec3::x, v -> -v.z());
+        SIDE,
+        TOP;
 
-        private final ToDoubleFunction<Vec3> right;
-        private final ToDoubleFunction<Vec3> up;
+        double right(Vec3 v) {
+            return v.x();
+        }
 
-        View(ToDoubleFunction<Vec3> right, ToDoubleFunction<Vec3> up) {
-            this.right = right;
-            this.up = up;
+        double up(Vec3 v) {
+            return this == SIDE ? v.y() : -v.z();
         }
     }
 
@@ -124,14 +123,16 @@ final class FootStill {
             String title,
             String description,
             Block.Table numbers) {
-        double[] box = {Double.MAX_VALUE, -Double.MAX_VALUE, view == View.TOP ? Double.MAX_VALUE : -0.02, -Double.MAX_VALUE};
+        double[] box = {
+            Double.MAX_VALUE, -Double.MAX_VALUE, view == View.TOP ? Double.MAX_VALUE : -0.02, -Double.MAX_VALUE
+        };
         for (FootRoll.Instant instant : instants) {
             for (FootShape.Part part : parts) {
                 for (Vec3 p : points(instant, part)) {
-                    box[0] = Math.min(box[0], view.right.applyAsDouble(p));
-                    box[1] = Math.max(box[1], view.right.applyAsDouble(p));
-                    box[2] = Math.min(box[2], view.up.applyAsDouble(p));
-                    box[3] = Math.max(box[3], view.up.applyAsDouble(p));
+                    box[0] = Math.min(box[0], view.right(p));
+                    box[1] = Math.max(box[1], view.right(p));
+                    box[2] = Math.min(box[2], view.up(p));
+                    box[3] = Math.max(box[3], view.up(p));
                 }
             }
         }
@@ -188,11 +189,10 @@ final class FootStill {
             Pose pose = standing.poses().get(pad.segment());
             if (pose != null) {
                 Vec3 c = pose.transformPosition(pad.centre());
-                frame.drawing.line(
-                        "<circle cx=\"" + Drawing.number(frame.x(view.right.applyAsDouble(c))) + "\" cy=\""
-                                + Drawing.number(frame.y(view.up.applyAsDouble(c))) + "\" r=\""
-                                + Drawing.number(pad.radius() * frame.scale)
-                                + "\" fill=\"none\" stroke=\"" + Drawing.INK + "\" stroke-dasharray=\"3 3\"/>");
+                frame.drawing.line("<circle cx=\"" + Drawing.number(frame.x(view.right(c))) + "\" cy=\""
+                        + Drawing.number(frame.y(view.up(c))) + "\" r=\""
+                        + Drawing.number(pad.radius() * frame.scale)
+                        + "\" fill=\"none\" stroke=\"" + Drawing.INK + "\" stroke-dasharray=\"3 3\"/>");
             }
         }
         for (Joint joint : model.joints()) {
@@ -205,20 +205,15 @@ final class FootStill {
                 Vec3 a = c.plus(axis.direction().times(0.05));
                 Vec3 b = c.minus(axis.direction().times(0.05));
                 frame.drawing.segment(
-                        frame.x(view.right.applyAsDouble(a)),
-                        frame.y(view.up.applyAsDouble(a)),
-                        frame.x(view.right.applyAsDouble(b)),
-                        frame.y(view.up.applyAsDouble(b)),
+                        frame.x(view.right(a)),
+                        frame.y(view.up(a)),
+                        frame.x(view.right(b)),
+                        frame.y(view.up(b)),
                         Drawing.INK,
                         1.5,
                         "");
             }
-            frame.drawing.circle(
-                    frame.x(view.right.applyAsDouble(c)),
-                    frame.y(view.up.applyAsDouble(c)),
-                    5,
-                    "#ffffff",
-                    Drawing.INK);
+            frame.drawing.circle(frame.x(view.right(c)), frame.y(view.up(c)), 5, "#ffffff", Drawing.INK);
         }
         Pose shank = standing.poses().get(SegmentName.SHANK);
         if (view == View.SIDE && shank != null) {
@@ -252,8 +247,7 @@ final class FootStill {
     /** Convex hull in a view, monotone chain [Andrew 1979]. */
     private static List<double[]> hull(List<Vec3> points, View view) {
         List<double[]> sorted = new ArrayList<>();
-        points.forEach(p -> sorted.add(
-                new double[] {view.right.applyAsDouble(p), view.up.applyAsDouble(p)}));
+        points.forEach(p -> sorted.add(new double[] {view.right(p), view.up(p)}));
         sorted.sort(Comparator.<double[]>comparingDouble(p -> p[0]).thenComparingDouble(p -> p[1]));
         List<double[]> hull = new ArrayList<>();
         for (int side = 0; side < 2 && !sorted.isEmpty(); side++) {

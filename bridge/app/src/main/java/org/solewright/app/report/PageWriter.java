@@ -2,6 +2,7 @@ package org.solewright.app.report;
 
 import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.FSFontUseCase;
 import com.openhtmltopdf.outputdevice.helper.BaseRendererBuilder.FontStyle;
+import com.openhtmltopdf.pdfboxout.PdfBoxRenderer;
 import com.openhtmltopdf.pdfboxout.PdfRendererBuilder;
 import com.openhtmltopdf.svgsupport.BatikSVGDrawer;
 import com.openhtmltopdf.util.XRLog;
@@ -15,6 +16,7 @@ import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Map;
 import java.util.Set;
+import org.apache.pdfbox.pdmodel.PDDocument;
 
 /** Sets pages as HTML and as PDF. The same page gives the same bytes. */
 public final class PageWriter {
@@ -53,14 +55,16 @@ public final class PageWriter {
         font(builder, "LiberationSans-Italic.ttf", REGULAR, FontStyle.ITALIC);
         builder.withHtmlContent(text(page, Setting.pdf()), null);
         builder.withProducer("Solewright");
-        builder.toStream(out);
         try (BatikSVGDrawer drawer = new BatikSVGDrawer()) {
             builder.useSVGDrawer(drawer);
-            builder.run();
+            try (PdfBoxRenderer renderer = builder.buildPdfRenderer();
+                    PDDocument document = renderer.createPDFKeepOpen()) {
+                TimelessPdf.save(document, out);
+            }
         } catch (IOException e) {
             throw new UncheckedIOException("a page of our own cannot be set as PDF", e);
         }
-        return PdfBytes.fixed(out.toByteArray());
+        return out.toByteArray();
     }
 
     private static void font(PdfRendererBuilder builder, String file, int weight, FontStyle style) {
