@@ -5,6 +5,9 @@ import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import java.io.IOException;
 import java.net.URISyntaxException;
+import java.nio.charset.StandardCharsets;
+import java.util.LinkedHashMap;
+import org.solewright.app.report.PageForm;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.EnumSet;
@@ -403,5 +406,33 @@ class RealRecordingTest {
             out[i + 2] = v.z();
         }
         return out;
+    }
+
+    @Test
+    void pagesNameFirstWhatLimitsTheseRecordings() {
+        Map<String, byte[]> pages = new LinkedHashMap<>(ResultPages.files(result, true, EnumSet.of(PageForm.HTML)));
+        pages.putAll(ResultPages.files(fitted, EnumSet.of(PageForm.HTML)));
+        assertThat(pages).containsOnlyKeys("posture-cost.html", "foot-model-right.html", "foot-model-left.html");
+        pages.forEach((name, bytes) -> {
+            String text = new String(bytes, StandardCharsets.UTF_8);
+            int from = text.indexOf("<p class=\"limit\">");
+            String first = text.substring(from, text.indexOf("</p>", from));
+            // Design 03 section 9: the findings that must appear, in the words of the page's first sentence.
+            assertThat(first)
+                    .as(name)
+                    .contains(
+                            "deformed cluster of the right shank",
+                            "s26-walking-hybrid-1-2 right not wholly on its platform",
+                            "s26-walking-hybrid-1-3 left not wholly on its platform",
+                            "platform height",
+                            "mass not given");
+            int findings = text.indexOf("<h2>Findings</h2>");
+            assertThat(from).as(name).isPositive().isLessThan(findings);
+            assertThat(text.substring(from, findings).contains("right trochanter"))
+                    .as(name + " tells of the right trochanter before the findings")
+                    .isTrue();
+            String own = text.replaceAll("(?s)<script[^>]*>.*?</script>", "");
+            assertThat(own.length()).as(name).isLessThan(300_000);
+        });
     }
 }
