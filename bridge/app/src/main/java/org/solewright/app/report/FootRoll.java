@@ -1,5 +1,7 @@
 package org.solewright.app.report;
 
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -29,7 +31,7 @@ public record FootRoll(String trial, List<Instant> instants) {
 
         /** Copies the map. */
         public Instant {
-            poses = Map.copyOf(poses);
+            poses = Collections.unmodifiableMap(new LinkedHashMap<>(poses));
         }
     }
 
