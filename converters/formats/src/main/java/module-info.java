@@ -24,6 +24,8 @@ module org.solewright.formats {
             jakarta.xml.bind;
     opens org.solewright.formats.footmodel.resultsxml to
             jakarta.xml.bind;
+    opens org.solewright.formats.footmodel.rolloverxml to
+            jakarta.xml.bind;
     opens org.solewright.formats.footmodel.studyxml to
             jakarta.xml.bind;
 }

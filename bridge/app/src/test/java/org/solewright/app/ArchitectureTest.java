@@ -35,6 +35,7 @@ class ArchitectureTest {
         ROOT + "formats.footmodel.resultsxml..",
         ROOT + "formats.footmodel.studyxml..",
         ROOT + "formats.footmodel.footxml..",
+        ROOT + "formats.footmodel.rolloverxml..",
         ROOT + "formats.footmodel.costxml..",
         ROOT + "app.report.pages.."
     };

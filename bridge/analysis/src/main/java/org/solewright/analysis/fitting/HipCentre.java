@@ -8,7 +8,7 @@ import org.solewright.domain.geometry.Rotation;
 import org.solewright.domain.geometry.Vec3;
 
 /** Hip joint centre from landmarks of the pelvis. */
-final class HipCentre {
+public final class HipCentre {
 
     private HipCentre() {}
 
@@ -36,7 +36,7 @@ final class HipCentre {
      * @param side whose hip
      * @return position in L, m; empty where a landmark of the pelvis or the medial malleolus is missing
      */
-    static Optional<Vec3> fromPelvis(StandingPosture posture, Side side) {
+    public static Optional<Vec3> fromPelvis(StandingPosture posture, Side side) {
         Optional<Vec3> right = posture.position(Landmark.ASIS, Side.RIGHT);
         Optional<Vec3> left = posture.position(Landmark.ASIS, Side.LEFT);
         Optional<Vec3> rear = rear(posture);

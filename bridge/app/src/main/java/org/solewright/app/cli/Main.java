@@ -23,6 +23,7 @@ import picocli.CommandLine.ScopeType;
             TabulateCommand.class,
             ConvertCommand.class,
             FitCommand.class,
+            RollOverCommand.class,
             AppraiseCommand.class,
             PosturesCommand.class,
             SolveCommand.class,

@@ -7,6 +7,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Predicate;
 import org.solewright.analysis.fitting.JointAngles;
 import org.solewright.analysis.fitting.StandingLimb;
 import org.solewright.analysis.fitting.StandingPosture;
@@ -34,18 +35,31 @@ final class JointCurves {
 
     private final StandingLimb limb;
     private final ZeroPosture zero;
+    private final Predicate<Stance> isUsed;
     private final List<CurveRow> rows = new ArrayList<>();
     private final List<Finding> findings = new ArrayList<>();
     private final Map<String, StanceAverage> dorsiflexion = new LinkedHashMap<>();
 
-    private JointCurves(StandingLimb limb, ZeroPosture zero) {
+    private JointCurves(StandingLimb limb, ZeroPosture zero, Predicate<Stance> isUsed) {
         this.limb = limb;
         this.zero = zero;
+        this.isUsed = isUsed;
     }
 
     static JointCurves of(
             StandingLimb limb, StandingPosture posture, ZeroPosture zero, List<Pass> passes, List<LimbMotion> motions) {
-        JointCurves curves = new JointCurves(limb, zero);
+        return of(limb, posture, zero, passes, motions, stance -> true);
+    }
+
+    /** Angles over those stances alone that are asked for. */
+    static JointCurves of(
+            StandingLimb limb,
+            StandingPosture posture,
+            ZeroPosture zero,
+            List<Pass> passes,
+            List<LimbMotion> motions,
+            Predicate<Stance> isUsed) {
+        JointCurves curves = new JointCurves(limb, zero, isUsed);
         curves.findings.addAll(zero.findings());
         for (Joint joint : limb.joints()) {
             curves.add(joint, axes(limb, joint, posture), passes, motions);
@@ -78,7 +92,7 @@ final class JointCurves {
             int number = 0;
             for (Stance stance : pass.stances()) {
                 number++;
-                if (stance.side() != limb.side()) {
+                if (stance.side() != limb.side() || !isUsed.test(stance)) {
                     continue;
                 }
                 double[][] angles =

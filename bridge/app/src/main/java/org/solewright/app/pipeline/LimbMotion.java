@@ -61,7 +61,7 @@ record LimbMotion(
             List.of(Landmark.ASIS, Landmark.PSIS, Landmark.SACRUM, Landmark.PELVIS_CLUSTER);
     private static final List<Landmark> THIGH = List.of(Landmark.THIGH_CLUSTER, Landmark.TROCHANTER_MAJOR);
 
-    static LimbMotion of(StandingTrial standing, LandmarkTracks walking, StandingLimb limb) {
+    static LimbMotion of(StandingPoints standing, LandmarkTracks walking, StandingLimb limb) {
         List<Side> own = List.of(limb.side());
         Optional<SegmentTracking> pelvis = track(standing, walking, PELVIS, List.of(Side.LEFT, Side.RIGHT));
         Optional<SegmentTracking> thigh = track(standing, walking, THIGH, own);
@@ -114,7 +114,7 @@ record LimbMotion(
     record Points(List<Vec3> reference, List<double[]> tracks) {}
 
     private static Points points(
-            StandingTrial standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
+            StandingPoints standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
         List<Vec3> reference = new ArrayList<>();
         List<double[]> tracks = new ArrayList<>();
         List<String> used = new ArrayList<>();
@@ -135,7 +135,7 @@ record LimbMotion(
     }
 
     private static Optional<SegmentTracking> track(
-            StandingTrial standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
+            StandingPoints standing, LandmarkTracks walking, List<Landmark> landmarks, List<Side> sides) {
         Points points = points(standing, walking, landmarks, sides);
         if (points.reference().size() < FEWEST) {
             return Optional.empty();

@@ -19,7 +19,7 @@ import org.solewright.domain.geometry.Vec3;
 import org.solewright.domain.motion.Recording;
 
 /** One or several standing recordings, pooled: where labels and landmarks were on the mean. Laboratory frame, m. */
-final class StandingTrial {
+final class StandingTrial implements StandingPoints {
 
     private static final double SNAP = Math.cos(Math.toRadians(20));
 
@@ -58,7 +58,8 @@ final class StandingTrial {
     }
 
     /** Mean position of a label over all standing recordings that have it. */
-    Optional<Vec3> label(String label) {
+    @Override
+    public Optional<Vec3> label(String label) {
         return pooled(tracks.stream()
                 .flatMap(t -> t.labelled(label).flatMap(LandmarkTracks::meanOf).stream())
                 .toList());

@@ -49,6 +49,11 @@ final class WalkingRollOver {
 
     /** Adds the stances of this foot in a pass. */
     void add(Pass pass, LimbMotion motion) {
+        add(pass, motion, f -> motion.hip(limb, f));
+    }
+
+    /** Adds the stances of this foot in a pass, with a hip centre that is known otherwise. */
+    void add(Pass pass, LimbMotion motion, RollOverShapes.Joint hip) {
         for (Stance stance : pass.stances()) {
             if (stance.side() != limb.side() || !stance.allows(Use.ROLL_OVER)) {
                 continue;
@@ -65,8 +70,7 @@ final class WalkingRollOver {
                                         + " samples of the roll-over, too few for an arc"));
                 continue;
             }
-            Optional<RollOverPath> whole = RollOverShapes.of(
-                            pass, stance, f -> motion.ankle(limb, f), f -> motion.hip(limb, f), leastLoad)
+            Optional<RollOverPath> whole = RollOverShapes.of(pass, stance, f -> motion.ankle(limb, f), hip, leastLoad)
                     .filter(RollOver::isLongEnough);
             shapes.add(new Shapes(stance, shank.get(), whole, soleTrack(pass, stance, motion)));
         }
