@@ -97,14 +97,15 @@ public final class StanceFoot {
     }
 
     /**
-     * The floor as a foot tells it that stands on it: the second lowest of its landmarks at foot flat (the lowest of two),
-     * each less its height in standing. The lowest alone would be that of the most compressed flesh.
+     * The floor as a foot tells it that stands on it: the mean, over its landmarks, of the least height at foot flat less the
+     * height in standing. A landmark that stays higher than the lowest by more than the limit does not stand on the floor.
      *
      * @param samples in order of time
      * @param standing the same foot in standing
-     * @return height along y, m; empty where fewer than two landmarks are tracked at foot flat
+     * @param rise limit, m
+     * @return height along y, m; empty where no landmark is tracked at foot flat
      */
-    public static OptionalDouble floor(List<Sample> samples, Standing standing) {
+    public static OptionalDouble floor(List<Sample> samples, Standing standing, double rise) {
         List<Double> offsets = new ArrayList<>();
         for (int landmark = 0; landmark < 4; landmark++) {
             double least = Double.POSITIVE_INFINITY;
@@ -121,8 +122,11 @@ public final class StanceFoot {
                 offsets.add(least - stood[landmark]);
             }
         }
-        offsets.sort(null);
-        return offsets.size() < 2 ? OptionalDouble.empty() : OptionalDouble.of(offsets.get(offsets.size() > 2 ? 1 : 0));
+        double lowest = offsets.stream().mapToDouble(v -> v).min().orElse(Double.NaN);
+        return offsets.stream()
+                .mapToDouble(v -> v)
+                .filter(v -> v <= lowest + rise)
+                .average();
     }
 
     /**

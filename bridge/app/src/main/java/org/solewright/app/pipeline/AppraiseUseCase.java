@@ -92,6 +92,7 @@ public final class AppraiseUseCase {
     private final List<TransitionView> transitions = new ArrayList<>();
     private final List<PostureRow> postures = new ArrayList<>();
     private final List<CurveRow> curves = new ArrayList<>();
+    private final List<CurveRow> powers = new ArrayList<>();
 
     private AppraiseUseCase(
             Request request,
@@ -166,6 +167,8 @@ public final class AppraiseUseCase {
                 "columns.not-computed",
                 "",
                 "effective_segments, foot_work_* and audit_* are left empty by this version"));
+        curves.addAll(powers);
+        curves.addAll(PowerCurves.means(powers));
         List<Finding> distinct = List.copyOf(new LinkedHashSet<>(findings));
         PostureCost cost = new PostureCost(
                 request.version(),
@@ -309,7 +312,7 @@ public final class AppraiseUseCase {
             columns.findings().forEach(f -> addFinding(codes, f));
             findings.addAll(columns.unlisted());
         }
-        curves.addAll(PowerCurves.of(step, m));
+        powers.addAll(PowerCurves.of(step, m));
         row.text("findings", String.join(";", codes));
         return row.build();
     }

@@ -149,10 +149,14 @@ public final class DemoUseCase {
         AppraiseReport appraiseReport =
                 AppraiseReport.write(appraised, appraise, folder, EnumSet.allOf(PageForm.class));
         appraiseReport.lines().forEach(l -> lines.add("   " + l));
+        lines.add("5. rollover");
+        RollOverReport rolled = RollOverReport.write(
+                new RollOverUseCase.Request(walking, appraise.models(), Optional.empty(), version), folder);
+        rolled.lines().forEach(l -> lines.add("   " + l));
         postures();
         compareFit(fitted);
         compareSteps(appraised);
-        lines.add("6. beside the truth (tolerances: design of the synthetic trial)");
+        lines.add("7. beside the truth (tolerances: design of the synthetic trial)");
         comparisons.forEach(c -> lines.add(String.format(
                 Locale.ROOT,
                 "   %-44s %12.6f  truth %12.6f  off by %9.2e of %.1e allowed %-3s %s",
@@ -167,6 +171,7 @@ public final class DemoUseCase {
         lines.add("   " + right + " of " + comparisons.size() + " numbers agree with the truth");
         List<Finding> findings = new ArrayList<>(fitReport.findings());
         appraiseReport.findings().stream().filter(f -> !findings.contains(f)).forEach(findings::add);
+        rolled.findings().stream().filter(f -> !findings.contains(f)).forEach(findings::add);
         return new Result(lines, findings, comparisons);
     }
 
@@ -196,7 +201,7 @@ public final class DemoUseCase {
                 GaitSettings.STANDARD_GRAVITY));
         Path file = folder.resolve("landscape.csv");
         ResultText.write(file, tables.landscape());
-        lines.add("5. postures: wrote " + file + ", feet of 0 to 6 segments at " + walk.stepLength() + " m and "
+        lines.add("6. postures: wrote " + file + ", feet of 0 to 6 segments at " + walk.stepLength() + " m and "
                 + walk.speed() + " m/s");
     }
 

@@ -116,7 +116,7 @@ final class FootCheck {
     private double[] floors(Map<Stance, List<StanceFoot.Sample>> samples, boolean isCompleteNeeded) {
         double[] told = samples.entrySet().stream()
                 .filter(e -> !isCompleteNeeded || CheckedStance.isComplete(e.getKey()))
-                .mapToDouble(e -> ground.floor(e.getValue()))
+                .mapToDouble(e -> ground.floor(e.getValue(), limits.rise()))
                 .filter(Double::isFinite)
                 .toArray();
         Arrays.sort(told);

@@ -121,8 +121,8 @@ final class FootOnGround {
     }
 
     /** Height of the floor in the walking frame as a stance tells it; NaN where it does not. */
-    double floor(List<StanceFoot.Sample> samples) {
-        return StanceFoot.floor(samples, stood()).orElse(Double.NaN);
+    double floor(List<StanceFoot.Sample> samples, double rise) {
+        return StanceFoot.floor(samples, stood(), rise).orElse(Double.NaN);
     }
 
     /** Samples at the point rate, from the frame before contact to the one after off. */

@@ -7,7 +7,7 @@ import org.solewright.analysis.gait.Pass;
 import org.solewright.domain.gait.CurveRow;
 import org.solewright.domain.gait.Stance;
 
-/** Vertical force of every stance, 101 points over stance. */
+/** Vertical force of every stance, 101 points over stance, then mean and SD by side. */
 final class LoadCurves {
 
     private static final int POINTS = 101;
@@ -38,6 +38,7 @@ final class LoadCurves {
                 }
             }
         }
+        rows.addAll(PowerCurves.means(rows));
         return rows;
     }
 }

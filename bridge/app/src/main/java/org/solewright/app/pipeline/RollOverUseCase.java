@@ -246,7 +246,7 @@ public final class RollOverUseCase {
                 "floor_m",
                 o.floor().isPresent()
                         ? Double.toString(o.floor().getAsDouble())
-                        : "second lowest landmark of the foot at foot flat, less its standing height",
+                        : "mean of the foot's landmarks at foot flat, less their standing heights",
                 o.floor().isPresent());
         setting(settings, "belt_speed_m_s", Double.toString(o.beltSpeed()), o.beltSpeed() > 0);
         setting(settings, "events", o.events(), !o.events().equals("platform"));

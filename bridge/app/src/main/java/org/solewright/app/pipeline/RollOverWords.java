@@ -34,7 +34,9 @@ final class RollOverWords {
                                 percent(from.get()),
                                 percent(to.get()),
                                 stances(from.get()))
-                        : "No foot flat was seen.");
+                        : foot.mean(RollOverMeasure.STANCE_TIME).isPresent()
+                                ? "No foot flat was seen."
+                                : "Foot flat is not known.");
         foot.mean(RollOverMeasure.HEEL_RISE)
                 .ifPresent(v -> said.add(
                         String.format(Locale.ROOT, "The heel rose at %s %% of stance%s.", text(v, 1), stances(v))));

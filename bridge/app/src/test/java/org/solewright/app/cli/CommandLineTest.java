@@ -46,6 +46,9 @@ class CommandLineTest extends DemoCalls {
                 "postures.csv",
                 "appraise-contacts.csv",
                 "appraise-curves.csv",
+                "rollover.csv",
+                "rollover.xml",
+                "rollover-curves.csv",
                 "landscape.csv")) {
             assertThat(demo.resolve(name)).isNotEmptyFile();
         }
