@@ -1,6 +1,7 @@
 package org.solewright.formats.footmodel;
 
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -59,6 +60,42 @@ public final class LandmarkMapFile {
      */
     public static void write(Path file, LandmarkMap map) throws IOException {
         AtomicOutput.write(file, Holder.BINDING.render(toXml(map)));
+    }
+
+    /**
+     * The bytes of a map with a comment before each landmark, for a user to read and correct.
+     *
+     * @param map what is written
+     * @param head comment before the map, lines
+     * @param notes one per entry of the map
+     * @return UTF-8 XML that its schema accepts
+     * @throws IllegalArgumentException where there are not as many notes as entries
+     */
+    public static byte[] bytes(LandmarkMap map, List<String> head, List<String> notes) {
+        if (notes.size() != map.entries().size()) {
+            throw new IllegalArgumentException(notes.size() + " notes for " + map.entries().size() + " landmarks");
+        }
+        String xml = new String(Holder.BINDING.render(toXml(map)), StandardCharsets.UTF_8);
+        StringBuilder out = new StringBuilder();
+        int entry = 0;
+        for (String line : xml.split("\n", -1)) {
+            if (line.contains("<landmarkMap")) {
+                out.append("<!-- ").append(comment(String.join("\n     ", head))).append(" -->\n");
+            } else if (line.contains("<landmark ")) {
+                out.append("    <!-- ").append(comment(notes.get(entry++))).append(" -->\n");
+            }
+            out.append(line).append('\n');
+        }
+        return out.toString().strip().concat("\n").getBytes(StandardCharsets.UTF_8);
+    }
+
+    /** Text that may stand in a comment: no two hyphens in a row and none at the end. */
+    private static String comment(String text) {
+        String legal = XmlWords.legal(text);
+        while (legal.contains("--")) {
+            legal = legal.replace("--", "- -");
+        }
+        return legal.endsWith("-") ? legal + " " : legal;
     }
 
     private static LandmarkMap toDomain(XmlBinding.Parsed<XmlLandmarkMap> parsed) throws FormatException {
