@@ -59,6 +59,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
 
     private static final double KNEE_LOW = 0.2;
     private static final double KNEE_HIGH = 0.42;
+    private static final double SHANK_HIGH = 0.32;
+    private static final double THIGH_HIGH = 0.6;
     private static final double HIP_LOW = 0.4;
     private static final double FOOT_SHARE = 0.09;
     private static final int FEWEST_OF_CLUSTER = 3;
@@ -175,17 +177,7 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                 if (members.size() < FEWEST_OF_CLUSTER || own.landmark().isPresent()) {
                     return;
                 }
-                Optional<Landmark> byPlace = Optional.empty();
-                if (height > 0) {
-                    double mean = members.stream()
-                            .filter(m -> place(m).isFinite())
-                            .mapToDouble(this::heightOf)
-                            .average()
-                            .orElse(Double.NaN);
-                    byPlace = mean > ANKLE_SHARE && mean < 0.32
-                            ? Optional.of(Landmark.SHANK_CLUSTER)
-                            : mean >= 0.32 && mean < 0.6 ? Optional.of(Landmark.THIGH_CLUSTER) : Optional.empty();
-                }
+                Optional<Landmark> byPlace = clusterByPlace(members);
                 Optional<Side> side = own.side().or(() -> sideByPlace(members.get(0)));
                 Optional<Landmark> landmark = named.or(() -> byPlace);
                 if (landmark.isEmpty() || side.isEmpty()) {
@@ -201,6 +193,20 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                                 + (named.isPresent() ? "named after the segment" : "between two joints")));
                 left.removeAll(members);
             });
+        }
+
+        private Optional<Landmark> clusterByPlace(List<String> members) {
+            if (!(height > 0)) {
+                return Optional.empty();
+            }
+            double mean = members.stream()
+                    .filter(m -> place(m).isFinite())
+                    .mapToDouble(this::heightOf)
+                    .average()
+                    .orElse(Double.NaN);
+            return mean > ANKLE_SHARE && mean < SHANK_HIGH
+                    ? Optional.of(Landmark.SHANK_CLUSTER)
+                    : mean >= SHANK_HIGH && mean < THIGH_HIGH ? Optional.of(Landmark.THIGH_CLUSTER) : Optional.empty();
         }
 
         private Optional<Side> sideByPlace(String label) {

@@ -22,6 +22,7 @@ import picocli.CommandLine.ScopeType;
             SurveyCommand.class,
             TabulateCommand.class,
             ConvertCommand.class,
+            LandmarksCommand.class,
             FitCommand.class,
             RollOverCommand.class,
             AppraiseCommand.class,
