@@ -54,7 +54,7 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
         unknown = List.copyOf(unknown);
     }
 
-    /** A point of a foot's ankle lies below this share of the height of the highest point, a knee's below the second. */
+    /** A point of a foot's ankle lies below this share of stature, a knee between the next two. */
     private static final double ANKLE_SHARE = 0.12;
 
     private static final double KNEE_LOW = 0.2;
@@ -64,6 +64,12 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
     private static final double HIP_LOW = 0.4;
     private static final double FOOT_SHARE = 0.09;
     private static final int FEWEST_OF_CLUSTER = 3;
+
+    /** Hip height over stature [Drillis Contini 1966]: a recording may show nothing above the pelvis. */
+    private static final double HIP_SHARE = 0.530;
+
+    private static final List<Landmark> HIPS =
+            List.of(Landmark.TROCHANTER_MAJOR, Landmark.ASIS, Landmark.PSIS, Landmark.SACRUM);
 
     /**
      * Proposes landmarks.
@@ -100,14 +106,28 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                     highest = Math.max(highest, e.getValue().dot(up));
                 }
             }
-            height = highest - lowest;
+            height = Math.max(highest - lowest, hipHeight() / HIP_SHARE);
+        }
+
+        /** Mean height of what is named after pelvis and hip, m; 0 without. */
+        private double hipHeight() {
+            double sum = 0;
+            int n = 0;
+            for (Map.Entry<String, Vec3> e : places.entrySet()) {
+                Optional<Landmark> named = wordsOf(e.getKey()).landmark();
+                if (e.getValue().isFinite() && named.filter(HIPS::contains).isPresent()) {
+                    sum += e.getValue().dot(up) - lowest;
+                    n++;
+                }
+            }
+            return n == 0 ? 0 : sum / n;
         }
 
         LandmarkProposal proposal() {
             findRight();
             clusters();
             for (String label : List.copyOf(left)) {
-                words.get(label).landmark().ifPresent(landmark -> byWords(label, landmark));
+                wordsOf(label).landmark().ifPresent(landmark -> byWords(label, landmark));
             }
             if (right.isPresent() && height > 0) {
                 for (Side side : new Side[] {Side.RIGHT, Side.LEFT}) {
@@ -115,7 +135,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                 }
             }
             guesses.sort(Comparator.comparing(Guess::landmark)
-                    .thenComparing(g -> g.side().map(s -> s == Side.RIGHT ? 0 : 1).orElse(2)));
+                    .thenComparing(
+                            g -> g.side().map(s -> s == Side.RIGHT ? 0 : 1).orElse(2)));
             return new LandmarkProposal(guesses, left);
         }
 
@@ -126,8 +147,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
             int pairs = 0;
             for (String a : words.keySet()) {
                 for (String b : words.keySet()) {
-                    LandmarkWords r = words.get(a);
-                    LandmarkWords l = words.get(b);
+                    LandmarkWords r = wordsOf(a);
+                    LandmarkWords l = wordsOf(b);
                     boolean isPair = r.side().equals(Optional.of(Side.RIGHT))
                             && l.side().equals(Optional.of(Side.LEFT))
                             && r.part().isPresent()
@@ -154,6 +175,10 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
             return across.norm() > 0 ? Optional.of(across.unit()) : Optional.empty();
         }
 
+        private LandmarkWords wordsOf(String label) {
+            return words.computeIfAbsent(label, LandmarkWords::of);
+        }
+
         private Vec3 place(String label) {
             return places.getOrDefault(label, new Vec3(Double.NaN, Double.NaN, Double.NaN));
         }
@@ -172,7 +197,7 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                 }
             }
             groups.forEach((base, members) -> {
-                LandmarkWords own = words.get(members.get(0));
+                LandmarkWords own = wordsOf(members.get(0));
                 Optional<Landmark> named = own.cluster();
                 if (members.size() < FEWEST_OF_CLUSTER || own.landmark().isPresent()) {
                     return;
@@ -215,14 +240,15 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
         }
 
         private void byWords(String label, Landmark landmark) {
-            LandmarkWords own = words.get(label);
+            LandmarkWords own = wordsOf(label);
             boolean isMidline = landmark == Landmark.SACRUM;
             Optional<Side> placed = sideByPlace(label);
             Optional<Side> side = isMidline ? Optional.empty() : own.side().or(() -> placed);
             if (!isMidline && side.isEmpty()) {
                 return;
             }
-            boolean isTaken = guesses.stream().anyMatch(g -> g.landmark() == landmark && g.side().equals(side));
+            boolean isTaken = guesses.stream()
+                    .anyMatch(g -> g.landmark() == landmark && g.side().equals(side));
             if (isTaken) {
                 return;
             }
@@ -255,7 +281,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
             Vec3 across = right.orElseThrow().times(side == Side.RIGHT ? 1 : -1);
             Vec3 forward = up.cross(right.orElseThrow());
             List<String> own = left.stream()
-                    .filter(l -> sideByPlace(l).equals(Optional.of(side)) && words.get(l).part().isEmpty())
+                    .filter(l -> sideByPlace(l).equals(Optional.of(side))
+                            && wordsOf(l).part().isEmpty())
                     .toList();
             pair(side, own, across, FOOT_SHARE / 3, ANKLE_SHARE, Landmark.MALLEOLUS_MEDIAL, Landmark.MALLEOLUS_LATERAL);
             pair(
@@ -286,7 +313,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
         }
 
         private boolean isKnown(Landmark landmark, Side side) {
-            return guesses.stream().anyMatch(g -> g.landmark() == landmark && g.side().equals(Optional.of(side)));
+            return guesses.stream()
+                    .anyMatch(g -> g.landmark() == landmark && g.side().equals(Optional.of(side)));
         }
 
         private void fill(Side side, List<String> from, Comparator<String> order, Landmark landmark, String why) {
@@ -311,10 +339,8 @@ public record LandmarkProposal(List<Guess> guesses, List<String> unknown) {
                 return;
             }
             String why = "one of two points of the side at that height, the ";
-            guesses.add(
-                    new Guess(inner, Optional.of(side), List.of(band.get(0)), Confidence.LOW, why + "inner one"));
-            guesses.add(
-                    new Guess(outer, Optional.of(side), List.of(band.get(1)), Confidence.LOW, why + "outer one"));
+            guesses.add(new Guess(inner, Optional.of(side), List.of(band.get(0)), Confidence.LOW, why + "inner one"));
+            guesses.add(new Guess(outer, Optional.of(side), List.of(band.get(1)), Confidence.LOW, why + "outer one"));
             left.removeAll(band);
         }
     }

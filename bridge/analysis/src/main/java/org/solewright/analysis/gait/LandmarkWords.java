@@ -45,10 +45,11 @@ record LandmarkWords(Optional<Part> part, Optional<Side> side, int number, boole
         FOREFOOT("FOREFOOT"),
         PELVIS("PELVIS");
 
-        private final List<String> words;
+        /** Separated by spaces. */
+        private final String words;
 
         Part(String... words) {
-            this.words = List.of(words);
+            this.words = String.join(" ", words);
         }
     }
 
@@ -57,7 +58,8 @@ record LandmarkWords(Optional<Part> part, Optional<Side> side, int number, boole
         String text = label.substring(label.lastIndexOf(':') + 1);
         int number = 0;
         List<String> tokens = new ArrayList<>();
-        for (String token : text.split("[^A-Za-z0-9]+|(?<=[a-z])(?=[A-Z])|(?<=[A-Za-z])(?=[0-9])|(?<=[0-9])(?=[A-Za-z])")) {
+        for (String token :
+                text.split("[^A-Za-z0-9]+|(?<=[a-z])(?=[A-Z])|(?<=[A-Za-z])(?=[0-9])|(?<=[0-9])(?=[A-Za-z])", -1)) {
             if (token.matches("[0-9]{1,3}")) {
                 number = number == 0 ? Integer.parseInt(token) : number;
             } else if (!token.isEmpty()) {
@@ -106,7 +108,7 @@ record LandmarkWords(Optional<Part> part, Optional<Side> side, int number, boole
         Optional<Found> best = Optional.empty();
         int longest = 0;
         for (Part part : Part.values()) {
-            for (String word : part.words) {
+            for (String word : part.words.split(" ", -1)) {
                 int common = common(word, text);
                 boolean isWhole = common == word.length();
                 boolean isShortened = common >= SHORTEST && common == text.length();

@@ -62,7 +62,10 @@ final class LandmarksCommand implements Callable<Integer> {
     }
 
     private void write(Path file, String xml) throws UseCaseException {
-        if (files.stream().anyMatch(f -> f.toAbsolutePath().normalize().equals(file.toAbsolutePath().normalize()))) {
+        if (files.stream()
+                .anyMatch(f -> f.toAbsolutePath()
+                        .normalize()
+                        .equals(file.toAbsolutePath().normalize()))) {
             throw new UseCaseException(
                     UseCaseException.Kind.OUTPUT,
                     file.toString(),

@@ -80,8 +80,7 @@ public record ProposedLandmarks(String xml, List<Finding> findings) {
             notes.add(g.confidence().name().toLowerCase(Locale.ROOT) + ": " + g.why());
         }
         return new ProposedLandmarks(
-                new String(
-                        LandmarkMapFile.bytes(new LandmarkMap(name, entries), HEAD, notes), StandardCharsets.UTF_8),
+                new String(LandmarkMapFile.bytes(new LandmarkMap(name, entries), HEAD, notes), StandardCharsets.UTF_8),
                 said(proposal));
     }
 
@@ -95,8 +94,7 @@ public record ProposedLandmarks(String xml, List<Finding> findings) {
                     double[] xyz = new double[3 * r.frames()];
                     p.copyTo(xyz, 0);
                     places.put(
-                            p.label(),
-                            LandmarkTracks.meanOf(xyz).orElse(new Vec3(Double.NaN, Double.NaN, Double.NaN)));
+                            p.label(), LandmarkTracks.meanOf(xyz).orElse(new Vec3(Double.NaN, Double.NaN, Double.NaN)));
                 }
             }
         }
@@ -164,6 +162,8 @@ public record ProposedLandmarks(String xml, List<Finding> findings) {
     }
 
     private static long count(LandmarkProposal proposal, LandmarkProposal.Confidence confidence) {
-        return proposal.guesses().stream().filter(g -> g.confidence() == confidence).count();
+        return proposal.guesses().stream()
+                .filter(g -> g.confidence() == confidence)
+                .count();
     }
 }

@@ -73,14 +73,17 @@ public final class LandmarkMapFile {
      */
     public static byte[] bytes(LandmarkMap map, List<String> head, List<String> notes) {
         if (notes.size() != map.entries().size()) {
-            throw new IllegalArgumentException(notes.size() + " notes for " + map.entries().size() + " landmarks");
+            throw new IllegalArgumentException(
+                    notes.size() + " notes for " + map.entries().size() + " landmarks");
         }
         String xml = new String(Holder.BINDING.render(toXml(map)), StandardCharsets.UTF_8);
         StringBuilder out = new StringBuilder();
         int entry = 0;
         for (String line : xml.split("\n", -1)) {
             if (line.contains("<landmarkMap")) {
-                out.append("<!-- ").append(comment(String.join("\n     ", head))).append(" -->\n");
+                out.append("<!-- ")
+                        .append(comment(String.join("\n     ", head)))
+                        .append(" -->\n");
             } else if (line.contains("<landmark ")) {
                 out.append("    <!-- ").append(comment(notes.get(entry++))).append(" -->\n");
             }
