@@ -7,6 +7,7 @@ module org.solewright.analysis {
     requires static transitive org.jspecify;
     requires commons.math3;
 
+    exports org.solewright.analysis.audit;
     exports org.solewright.analysis.cost;
     exports org.solewright.analysis.dynamics;
     exports org.solewright.analysis.fitting;

@@ -2,7 +2,8 @@ package org.solewright.analysis.cost;
 
 import java.util.Optional;
 import java.util.function.IntFunction;
-import org.solewright.analysis.numerics.LowPass;
+import org.solewright.analysis.dynamics.FilteredLoads;
+import org.solewright.analysis.dynamics.Wrench;
 import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.geometry.Pose;
 import org.solewright.domain.geometry.Vec3;
@@ -44,8 +45,7 @@ public final class DistalWork {
      * @return the works; empty where the pose is not known throughout
      */
     public Optional<PowerWork> over(PlatformLoads platform, double cutoff, double from, double to) {
-        double[] force = filtered(platform, cutoff, true);
-        double[] moment = filtered(platform, cutoff, false);
+        FilteredLoads loads = FilteredLoads.of(platform, cutoff);
         int first = (int) Math.ceil((from - startTime) * rate);
         int last = (int) Math.floor((to - startTime) * rate);
         if (last - first < 2) {
@@ -54,12 +54,13 @@ public final class DistalWork {
         double[] power = new double[last - first + 1];
         for (int frame = first; frame <= last; frame++) {
             Optional<Vec3[]> motion = motion(frame, platform.centre());
-            int sample = (int) Math.round((startTime + frame / rate - platform.time(0)) * platform.rate());
-            if (motion.isEmpty() || sample < 0 || sample >= platform.samples()) {
+            double time = startTime + frame / rate;
+            if (motion.isEmpty() || !loads.covers(time)) {
                 return Optional.empty();
             }
+            Wrench load = loads.at(time);
             power[frame - first] =
-                    at(force, sample).dot(motion.get()[0]) + at(moment, sample).dot(motion.get()[1]);
+                    load.force().dot(motion.get()[0]) + load.moment().dot(motion.get()[1]);
         }
         return Optional.of(PowerWork.of(power, 1 / rate));
     }
@@ -90,33 +91,5 @@ public final class DistalWork {
         return after.transformPosition(body)
                 .minus(before.transformPosition(body))
                 .times(rate / 2);
-    }
-
-    private static double[] filtered(PlatformLoads platform, double cutoff, boolean isForce) {
-        double[] xyz = new double[3 * platform.samples()];
-        if (isForce) {
-            platform.copyForceTo(xyz, 0);
-        } else {
-            platform.copyMomentTo(xyz, 0);
-        }
-        if (!(cutoff > 0) || cutoff >= 0.4 * platform.rate()) {
-            return xyz;
-        }
-        LowPass filter = LowPass.of(cutoff, platform.rate());
-        double[] one = new double[platform.samples()];
-        for (int c = 0; c < 3; c++) {
-            for (int i = 0; i < one.length; i++) {
-                one[i] = xyz[3 * i + c];
-            }
-            double[] smooth = filter.apply(one);
-            for (int i = 0; i < one.length; i++) {
-                xyz[3 * i + c] = smooth[i];
-            }
-        }
-        return xyz;
-    }
-
-    private static Vec3 at(double[] xyz, int i) {
-        return new Vec3(xyz[3 * i], xyz[3 * i + 1], xyz[3 * i + 2]);
     }
 }

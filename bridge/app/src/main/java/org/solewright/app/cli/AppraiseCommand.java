@@ -49,6 +49,14 @@ final class AppraiseCommand implements Callable<Integer> {
             description = "File for a table of the column map that names none; may be repeated.")
     private List<Path> tables = new ArrayList<>();
 
+    @Option(
+            names = "--audit-limit",
+            paramLabel = "SHARE",
+            defaultValue = "0.05",
+            description = "Audit of --results: residuals above this share of body weight, positive work, foot length or"
+                    + " mass are errors (default: ${DEFAULT-VALUE}).")
+    private double auditLimit;
+
     @Mixin
     private GaitArguments gait = new GaitArguments();
 
@@ -70,12 +78,17 @@ final class AppraiseCommand implements Callable<Integer> {
 
     @Override
     public Integer call() throws UseCaseException, FormatException {
+        if (!(auditLimit > 0 && auditLimit <= 10)) {
+            throw GaitArguments.usage(
+                    "--audit-limit", auditLimit + " is out of range, expected more than 0 to 10", "give a share");
+        }
         AppraiseUseCase.Request request = new AppraiseUseCase.Request(
                 gait.options(List.of(), null, null, null, results.isPresent()),
                 results,
                 tables,
                 models,
-                Version.NUMBER);
+                Version.NUMBER,
+                auditLimit);
         AppraiseReport report = AppraiseReport.write(request, out, pages.forms());
         FindingPrinter.print(spec.commandLine().getErr(), report.findings());
         report.lines().forEach(spec.commandLine().getOut()::println);

@@ -26,6 +26,7 @@ import picocli.CommandLine.ScopeType;
             FitCommand.class,
             RollOverCommand.class,
             AppraiseCommand.class,
+            MapCommand.class,
             PosturesCommand.class,
             SolveCommand.class,
             SprawlCommand.class,

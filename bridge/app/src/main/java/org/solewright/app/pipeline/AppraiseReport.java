@@ -71,6 +71,12 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
     static AppraiseReport write(
             AppraiseUseCase.Result result, AppraiseUseCase.Request request, Path out, Set<PageForm> pages)
             throws UseCaseException {
+        if (result.cost().rows().isEmpty()) {
+            return new AppraiseReport(
+                    List.of("nothing was written: these results cannot be appraised; see what the audit found"),
+                    result.cost().findings(),
+                    result.failed());
+        }
         Map<String, byte[]> files = new LinkedHashMap<>();
         files.put("posture-cost.csv", PostureCostTable.bytes(result.cost().rows()));
         files.put("posture-cost.xml", PostureCostFile.bytes(result.cost()));
@@ -122,6 +128,8 @@ public record AppraiseReport(List<String> lines, List<Finding> findings, List<St
         line(lines, row, "collision fraction", "collision_fraction", "", 3);
         line(lines, row, "mechanical cost", "mechanical_cost_of_transport", "", 4);
         line(lines, row, "height range of COM", "com_height_range_m", "m", 3);
+        line(lines, row, "audit: force residual", "audit_force_residual_bw", "body weights rms", 4);
+        line(lines, row, "audit: energy residual", "audit_energy_residual", "of the positive work", 4);
         line(lines, row, "rolling radius, shank", "rolling_radius_m", "m", 3);
         lines.add("  model works of the same step, simultaneous push-off and collision:");
         line(lines, row, "point foot (compass)", "compass_J", "J", 1);

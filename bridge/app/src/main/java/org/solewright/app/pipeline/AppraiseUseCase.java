@@ -7,7 +7,9 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.Set;
+import org.solewright.analysis.audit.AuditSettings;
 import org.solewright.analysis.cost.StepMechanics;
 import org.solewright.analysis.gait.GaitSettings;
 import org.solewright.analysis.gait.LandmarkTracks;
@@ -43,9 +45,15 @@ public final class AppraiseUseCase {
      * @param tables files for tables of the map that name none
      * @param models foot models, at most one per side; may be empty
      * @param version version of the tool
+     * @param auditLimit residuals of results above this share are errors
      */
     public record Request(
-            GaitOptions gait, Optional<Path> results, List<Path> tables, List<Path> models, String version) {
+            GaitOptions gait,
+            Optional<Path> results,
+            List<Path> tables,
+            List<Path> models,
+            String version,
+            double auditLimit) {
 
         /** Copies the list. */
         public Request {
@@ -53,8 +61,21 @@ public final class AppraiseUseCase {
             models = List.copyOf(models);
         }
 
+        /**
+         * With the usual limit of audits.
+         *
+         * @param gait walking recordings
+         * @param results a map of results, instead of recordings
+         * @param tables files for tables of the map that name none
+         * @param models foot models, at most one per side; may be empty
+         * @param version version of the tool
+         */
+        public Request(GaitOptions gait, Optional<Path> results, List<Path> tables, List<Path> models, String version) {
+            this(gait, results, tables, models, version, AuditSettings.DEFAULT_LIMIT);
+        }
+
         Request with(GaitOptions other) {
-            return new Request(other, results, tables, models, version);
+            return new Request(other, results, tables, models, version, auditLimit);
         }
     }
 
@@ -93,6 +114,7 @@ public final class AppraiseUseCase {
     private final List<PostureRow> postures = new ArrayList<>();
     private final List<CurveRow> curves = new ArrayList<>();
     private final List<CurveRow> powers = new ArrayList<>();
+    private Optional<ResultsAudit> audit = Optional.empty();
 
     private AppraiseUseCase(
             Request request,
@@ -128,6 +150,35 @@ public final class AppraiseUseCase {
 
     private Result run() throws UseCaseException, FormatException {
         readModels();
+        audit = results.flatMap(r -> r.audited())
+                .map(a -> new ResultsAudit(
+                        a, mass(), request.auditLimit(), request.gait().markerCutoff()));
+        try {
+            return appraised();
+        } catch (UseCaseException e) {
+            if (e.kind() != UseCaseException.Kind.INPUT
+                    || audit.isEmpty()
+                    || !audit.get().hasErrors()) {
+                throw e;
+            }
+            // What the audit found is the likely reason, and says more.
+            findings.addAll(audit.get().findings());
+            findings.add(InputFiles.failed(e.file(), String.valueOf(e.getMessage()), e.whatToDo()));
+            return result(List.of(), List.of());
+        }
+    }
+
+    /** Given or stated, else the models'. */
+    private OptionalDouble mass() {
+        OptionalDouble given = request.gait().mass();
+        return given.isPresent()
+                ? given
+                : models.values().stream()
+                        .mapToDouble(m -> m.model().subject().mass().value())
+                        .average();
+    }
+
+    private Result appraised() throws UseCaseException, FormatException {
         GaitOptions options = request.gait();
         LandmarkMap map;
         InputFiles.Walking walked;
@@ -163,20 +214,16 @@ public final class AppraiseUseCase {
         if (options.annotate().isPresent()) {
             annotate(options.annotate().get(), walked.files(), subject);
         }
-        findings.add(Finding.note(
-                "columns.not-computed",
-                "",
-                "effective_segments, foot_work_* and audit_* are left empty by this version"));
         curves.addAll(powers);
         curves.addAll(PowerCurves.means(powers));
+        findings.add(Finding.note("columns.not-computed", "", "effective_segments is left empty by this version"));
+        audit.ifPresent(a -> findings.addAll(a.findings()));
+        return result(TransitionSummary.withSummaries(rows), ContactOverrides.rows(subject.passes()));
+    }
+
+    private Result result(List<TransitionRow> rows, List<ContactRow> contacts) {
         List<Finding> distinct = List.copyOf(new LinkedHashSet<>(findings));
-        PostureCost cost = new PostureCost(
-                request.version(),
-                sources,
-                settings(),
-                TransitionSummary.withSummaries(rows),
-                distinct,
-                Cautions.LINES);
+        PostureCost cost = new PostureCost(request.version(), sources, settings(), rows, distinct, Cautions.LINES);
         List<String> failed = distinct.stream()
                 .filter(f -> f.severity() == Severity.ERROR)
                 .map(Finding::where)
@@ -188,7 +235,7 @@ public final class AppraiseUseCase {
                 transitions,
                 models.values().stream().map(ModelLimb::model).toList(),
                 postures,
-                ContactOverrides.rows(subject.passes()),
+                contacts,
                 curves,
                 failed);
     }
@@ -233,6 +280,12 @@ public final class AppraiseUseCase {
         settings.add(new PostureCost.Setting("events", o.events(), o.events().equals("platform") ? DEFAULT : GIVEN));
         settings.add(new PostureCost.Setting(
                 "mirrored", Boolean.toString(o.isMirrored()), o.isMirrored() ? GIVEN : DEFAULT));
+        if (audit.isPresent()) {
+            settings.add(new PostureCost.Setting(
+                    "audit_limit",
+                    Double.toString(request.auditLimit()),
+                    request.auditLimit() == AuditSettings.DEFAULT_LIMIT ? DEFAULT : GIVEN));
+        }
         o.mass().ifPresent(m -> settings.add(new PostureCost.Setting("mass_kg", Double.toString(m), GIVEN)));
         return settings;
     }
@@ -309,10 +362,12 @@ public final class AppraiseUseCase {
                     new ModelColumns(pass, tracks, step, request.gait().markerCutoff());
             columns.fill(row, limb.get(), m);
             postures.addAll(columns.postures());
+            curves.addAll(columns.curves());
             columns.findings().forEach(f -> addFinding(codes, f));
             findings.addAll(columns.unlisted());
         }
         powers.addAll(PowerCurves.of(step, m));
+        audit.ifPresent(a -> a.fill(row, step, m));
         row.text("findings", String.join(";", codes));
         return row.build();
     }

@@ -3,6 +3,7 @@ package org.solewright.app.pipeline;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.IntFunction;
 import org.jspecify.annotations.Nullable;
 import org.solewright.analysis.cost.ComparedPostures;
 import org.solewright.analysis.cost.DistalWork;
@@ -20,9 +21,12 @@ import org.solewright.domain.cost.PostureRow;
 import org.solewright.domain.cost.TransitionRow;
 import org.solewright.domain.finding.Finding;
 import org.solewright.domain.foot.Population;
+import org.solewright.domain.foot.SegmentName;
+import org.solewright.domain.gait.CurveRow;
 import org.solewright.domain.gait.PlatformLoads;
 import org.solewright.domain.gait.Stance;
 import org.solewright.domain.gait.Use;
+import org.solewright.domain.geometry.Pose;
 import org.solewright.domain.geometry.Vec3;
 
 /** Columns of one transition that need the model of its trailing limb. */
@@ -33,6 +37,7 @@ final class ModelColumns {
     private final Step step;
     private final double markerCutoff;
     private final List<PostureRow> postures = new ArrayList<>();
+    private final List<CurveRow> curves = new ArrayList<>();
     private final List<Finding> findings = new ArrayList<>();
     private final List<Finding> unlisted = new ArrayList<>();
 
@@ -46,6 +51,11 @@ final class ModelColumns {
     /** Rows of postures.csv. */
     List<PostureRow> postures() {
         return postures;
+    }
+
+    /** Moments and powers of the trailing limb's joints over its stance. */
+    List<CurveRow> curves() {
+        return curves;
     }
 
     /** Findings whose codes stand in the row. */
@@ -74,6 +84,8 @@ final class ModelColumns {
         });
         rollingRadius(row, limb);
         distalWork(row, limb);
+        hindfootWork(row, limb);
+        jointLoads(row, limb);
         Double length = m.values().get(Measure.STEP_LENGTH);
         Double before = m.values().get(Measure.SPEED_BEFORE);
         Double mass = m.values().get(Measure.MASS);
@@ -110,16 +122,8 @@ final class ModelColumns {
     private void distalWork(TransitionRow.Builder row, ModelLimb limb) {
         Stance trailing = step.loads().trailing();
         Optional<SegmentTracking> shank = limb.shank(tracks);
-        Optional<PlatformLoads> platform = pass.trial().platforms().stream()
-                .filter(p -> trailing.platforms().equals(List.of(p.number())))
-                .findFirst();
-        Optional<PowerWork> work = Optional.empty();
-        if (shank.isPresent() && platform.isPresent() && trailing.whole()) {
-            SegmentTracking s = shank.get();
-            Vec3 belt = pass.R_LW().x().times(-pass.trial().beltSpeed());
-            work = new DistalWork(s::pose, pass.trial().rate(), pass.trial().startTime(), belt)
-                    .over(platform.get(), markerCutoff, trailing.start(), trailing.end());
-        }
+        Optional<PowerWork> work = shank.flatMap(s ->
+                platform().flatMap(p -> distal(s::pose).over(p, markerCutoff, trailing.start(), trailing.end())));
         if (work.isEmpty()) {
             findings.add(Finding.note(
                     "distal.unknown",
@@ -132,6 +136,51 @@ final class ModelColumns {
         }
         row.number("ankle_foot_work_pos_J", work.get().positive());
         row.number("ankle_foot_work_neg_J", work.get().negative());
+    }
+
+    /** Work distal to the hindfoot of the trailing limb over its stance; only where the hindfoot itself was tracked. */
+    private void hindfootWork(TransitionRow.Builder row, ModelLimb limb) {
+        Stance trailing = step.loads().trailing();
+        Optional<ModelChain> chain = limb.chain(tracks).filter(c -> c.isObserved(SegmentName.HINDFOOT));
+        Optional<PowerWork> work = chain.flatMap(c -> platform()
+                .flatMap(p -> distal(f -> c.pose(SegmentName.HINDFOOT, f))
+                        .over(p, markerCutoff, trailing.start(), trailing.end())));
+        work.ifPresent(w -> {
+            row.number("foot_work_pos_J", w.positive());
+            row.number("foot_work_neg_J", w.negative());
+        });
+        if (work.isEmpty()) {
+            unlisted.add(Finding.note(
+                    "distal.hindfoot-unknown",
+                    pass.trial().name(),
+                    "foot_work_* are empty where the model has no hindfoot, or not three of its points were tracked"
+                            + " over a whole stance on one platform"));
+        }
+    }
+
+    private DistalWork distal(IntFunction<Optional<Pose>> pose) {
+        Vec3 belt = pass.R_LW().x().times(-pass.trial().beltSpeed());
+        return new DistalWork(pose, pass.trial().rate(), pass.trial().startTime(), belt);
+    }
+
+    /** The one platform that bore the whole trailing stance. */
+    private Optional<PlatformLoads> platform() {
+        Stance trailing = step.loads().trailing();
+        return pass.trial().platforms().stream()
+                .filter(p -> trailing.whole() && trailing.platforms().equals(List.of(p.number())))
+                .findFirst();
+    }
+
+    private void jointLoads(TransitionRow.Builder row, ModelLimb limb) {
+        JointDynamics.of(limb.chain(tracks), pass, step.loads().trailing(), markerCutoff)
+                .ifPresent(j -> {
+                    j.ankleWork().ifPresent(w -> {
+                        row.number("ankle_work_pos_J", w.positive());
+                        row.number("ankle_work_neg_J", w.negative());
+                    });
+                    curves.addAll(j.curves(Integer.toString(step.number())));
+                    findings.addAll(j.findings());
+                });
     }
 
     private void rollingRadius(TransitionRow.Builder row, ModelLimb limb) {

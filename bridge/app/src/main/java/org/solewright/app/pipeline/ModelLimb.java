@@ -28,6 +28,9 @@ final class ModelLimb {
     private static final int FEWEST = 3;
 
     private final FootModel model;
+    private Optional<LandmarkTracks> seen = Optional.empty();
+    private Optional<SegmentTracking> shank = Optional.empty();
+    private Optional<ModelChain> chain = Optional.empty();
 
     ModelLimb(FootModel model) {
         this.model = model;
@@ -145,6 +148,26 @@ final class ModelLimb {
 
     /** The pose of the shank frame by frame; empty where fewer than three of its points are tracked. */
     Optional<SegmentTracking> shank(LandmarkTracks walking) {
+        track(walking);
+        return shank;
+    }
+
+    /** Poses of all segments; empty where fewer than three points of the shank are tracked. */
+    Optional<ModelChain> chain(LandmarkTracks walking) {
+        track(walking);
+        return chain;
+    }
+
+    /** Poses are those of one recording at a time: its steps are asked for one after the other. */
+    private void track(LandmarkTracks walking) {
+        if (seen.isEmpty() || !seen.get().equals(walking)) {
+            shank = fitted(walking);
+            chain = ModelChain.of(model, walking);
+            seen = Optional.of(walking);
+        }
+    }
+
+    private Optional<SegmentTracking> fitted(LandmarkTracks walking) {
         List<Vec3> reference = new ArrayList<>();
         List<double[]> tracks = new ArrayList<>();
         for (Landmark landmark : Landmark.values()) {

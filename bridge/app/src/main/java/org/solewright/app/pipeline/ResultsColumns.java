@@ -1,6 +1,7 @@
 package org.solewright.app.pipeline;
 
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -100,6 +101,58 @@ final class ResultsColumns {
             put(xyz, i, map.axes().toLaboratory(parts[0][i], parts[1][i], parts[2][i]));
         }
         return xyz;
+    }
+
+    /** Angle, moment and power of one joint about one axis, in one table. */
+    record JointColumns(
+            ResultsTable table, ResultsMap.Column angle, ResultsMap.Column moment, ResultsMap.Column power) {
+
+        boolean has(ResultsMap.Column c) {
+            return c.equals(angle) || c.equals(moment) || c.equals(power);
+        }
+    }
+
+    /** Joints that have one angle, one moment and one power in a table. */
+    List<JointColumns> joints() {
+        List<JointColumns> joints = new ArrayList<>();
+        for (int t = 0; t < map.tables().size(); t++) {
+            List<ResultsMap.Column> columns = map.tables().get(t).columns();
+            for (ResultsMap.Column power : columns) {
+                List<ResultsMap.Column> angles = of(columns, ResultsMap.Quantity.JOINT_ANGLE, key(power));
+                List<ResultsMap.Column> moments = of(columns, ResultsMap.Quantity.JOINT_MOMENT, key(power));
+                if (power.quantity() == ResultsMap.Quantity.JOINT_POWER && angles.size() == 1 && moments.size() == 1) {
+                    joints.add(new JointColumns(tables.get(t), angles.get(0), moments.get(0), power));
+                }
+            }
+        }
+        return joints;
+    }
+
+    private static List<ResultsMap.Column> of(
+            List<ResultsMap.Column> columns, ResultsMap.Quantity quantity, String key) {
+        return columns.stream()
+                .filter(c -> c.quantity() == quantity && key(c).equals(key))
+                .toList();
+    }
+
+    /** Samples of a column of a joint's table. */
+    double[] samples(JointColumns joint, ResultsMap.Column column) {
+        int t = tables.indexOf(joint.table());
+        return joint.table().column(map.tables().get(t).columns().indexOf(column));
+    }
+
+    /** Names of the table's columns behind the laboratory's axes; empty where an axis is missing. */
+    List<String> names(Triple triple) {
+        List<ResultsMap.Column> columns = map.tables().get(triple.table).columns();
+        String[] names = {"", "", ""};
+        List<ResultsMap.Direction> of =
+                List.of(map.axes().x(), map.axes().y(), map.axes().z());
+        for (int k = 0; k < of.size(); k++) {
+            Vec3 d = of.get(k).vector();
+            int axis = d.x() != 0 ? 0 : d.y() != 0 ? 1 : 2;
+            names[axis] = triple.axis[k] < 0 ? "" : columns.get(triple.axis[k]).name();
+        }
+        return List.of(names);
     }
 
     static void put(double[] xyz, int i, Vec3 v) {

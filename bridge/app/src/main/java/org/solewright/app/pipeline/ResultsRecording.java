@@ -39,19 +39,22 @@ final class ResultsRecording {
      * @param mass stated body mass, kg
      * @param files C3D files that the map names
      * @param landmarks their landmark map
+     * @param audited what an audit looks at; empty where the map names recordings
      */
     record Loaded(
             Optional<Recording> recording,
             LandmarkMap map,
             OptionalDouble mass,
             List<Path> files,
-            Optional<Path> landmarks) {}
+            Optional<Path> landmarks,
+            Optional<AuditInputs> audited) {}
 
     private final Path xml;
     private final ResultsMap map;
     private final List<Finding> findings;
     private final List<ResultsTable> tables = new ArrayList<>();
     private final ResultsColumns columns;
+    private double offset;
 
     private ResultsRecording(Path xml, ResultsMap map, List<Finding> findings) {
         this.xml = xml;
@@ -96,12 +99,19 @@ final class ResultsRecording {
                     new LandmarkMap("", List.of()),
                     map.mass(),
                     files,
-                    Optional.of(beside(xml, landmarks.first())));
+                    Optional.of(beside(xml, landmarks.first())),
+                    Optional.empty());
         }
         ResultsRecording results = new ResultsRecording(xml, map, findings);
         results.readTables(given, sources);
+        Recording recording = results.recording();
         return new Loaded(
-                Optional.of(results.recording()), results.landmarks(), map.mass(), List.of(), Optional.empty());
+                Optional.of(recording),
+                results.landmarks(),
+                map.mass(),
+                List.of(),
+                Optional.empty(),
+                Optional.of(new AuditInputs(map, results.columns, GaitSubject.trialName(recording), results.offset)));
     }
 
     private static Path beside(Path xml, String name) throws UseCaseException {
@@ -171,7 +181,7 @@ final class ResultsRecording {
         }
         // Frames are counted on the recording's clock, which begins with frame 1 at 0 s.
         int firstFrame = (int) Math.round(start * rate) + 1;
-        double offset = start - (firstFrame - 1) / rate;
+        offset = start - (firstFrame - 1) / rate;
         int frames = frames(points, rate, start);
         List<PointTrack> tracks = new ArrayList<>();
         for (Map.Entry<String, ResultsColumns.Triple> e : points.entrySet()) {
@@ -233,12 +243,17 @@ final class ResultsRecording {
         for (ResultsMap.Table t : map.tables()) {
             for (ResultsMap.Column c : t.columns()) {
                 switch (c.quantity()) {
-                    case GROUND_FORCE, COP, FREE_MOMENT, COM_POSITION -> {
+                    case GROUND_FORCE, COP, FREE_MOMENT, COM_POSITION, COM_VELOCITY -> {
                         // These are looked at.
                     }
                     case POINT_POSITION -> {
                         if (Landmark.ofWord(c.of()).isEmpty()) {
                             unused.add(c.of());
+                        }
+                    }
+                    case JOINT_ANGLE, JOINT_MOMENT, JOINT_POWER -> {
+                        if (columns.joints().stream().noneMatch(j -> j.has(c))) {
+                            unused.add(c.quantity().word());
                         }
                     }
                     default -> unused.add(c.quantity().word());

@@ -54,6 +54,8 @@ public final class TransitionColumns {
     private static final List<String> MEASURED_DISTAL =
             List.of("ankle_foot_work_pos_J", "ankle_foot_work_neg_J", "foot_work_pos_J", "foot_work_neg_J");
 
+    private static final List<String> CONSTITUENT = List.of("ankle_work_pos_J", "ankle_work_neg_J");
+
     private static final List<String> AUDIT = List.of("audit_force_residual_bw", "audit_energy_residual", "findings");
 
     private static final List<String> DIMENSIONLESS =
@@ -79,7 +81,8 @@ public final class TransitionColumns {
                     AUDIT,
                     MEASURED.stream().map(name -> name + SD_SUFFIX).toList(),
                     DIMENSIONLESS,
-                    List.of("of", "n"))
+                    List.of("of", "n"),
+                    CONSTITUENT)
             .flatMap(List::stream)
             .toList();
 

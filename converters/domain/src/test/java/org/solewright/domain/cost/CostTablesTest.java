@@ -35,7 +35,7 @@ class CostTablesTest {
                         + "crossover_low_m,crossover_step_length_m,crossover_reference,"
                         + "ankle_foot_work_pos_J,ankle_foot_work_neg_J,foot_work_pos_J,foot_work_neg_J,"
                         + "audit_force_residual_bw,audit_energy_residual,findings,step_length_m_sd,")
-                .endsWith(",speed_nd,step_length_nd,push_off_nd,collision_nd,of,n");
+                .endsWith(",speed_nd,step_length_nd,push_off_nd,collision_nd,of,n,ankle_work_pos_J,ankle_work_neg_J");
         assertThat(TransitionColumns.ALL).doesNotHaveDuplicates();
     }
 

@@ -37,7 +37,9 @@ class PostureCostTableTest {
     @Test
     void headerIsTheFixedOrderThenDeviationsThenDimensionlessThenSummary() {
         String header = new String(PostureCostTable.bytes(List.of()), StandardCharsets.UTF_8);
-        assertThat(header).startsWith(FIXED).endsWith(",speed_nd,step_length_nd,push_off_nd,collision_nd,of,n\n");
+        assertThat(header)
+                .startsWith(FIXED)
+                .endsWith(",speed_nd,step_length_nd,push_off_nd,collision_nd,of,n,ankle_work_pos_J,ankle_work_neg_J\n");
         List<String> between = Arrays.asList(
                 header.substring(FIXED.length(), header.indexOf(",speed_nd")).split(","));
         assertThat(between).allMatch(name -> name.endsWith("_sd")).contains("push_off_J_sd", "speed_m_s_sd");
