@@ -25,6 +25,7 @@ import picocli.CommandLine.ScopeType;
             LandmarksCommand.class,
             FitCommand.class,
             RollOverCommand.class,
+            ExportCommand.class,
             AppraiseCommand.class,
             MapCommand.class,
             PosturesCommand.class,

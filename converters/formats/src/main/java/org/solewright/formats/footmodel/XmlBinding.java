@@ -17,17 +17,15 @@ import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Objects;
 import javax.xml.XMLConstants;
-import javax.xml.parsers.ParserConfigurationException;
-import javax.xml.parsers.SAXParserFactory;
 import javax.xml.validation.Schema;
 import javax.xml.validation.SchemaFactory;
 import javax.xml.validation.ValidatorHandler;
+import org.solewright.formats.io.ClosedXml;
 import org.solewright.formats.io.FormatException;
 import org.xml.sax.ErrorHandler;
 import org.xml.sax.InputSource;
 import org.xml.sax.SAXException;
 import org.xml.sax.SAXParseException;
-import org.xml.sax.XMLReader;
 
 /**
  * Reads and writes one kind of XML file: bytes to generated classes and back, past the guard and the schema in one go.
@@ -108,7 +106,7 @@ final class XmlBinding<T> {
             throw new FormatException(
                     source, "the file is larger than " + LARGEST_BYTES + " bytes", "give a file of that kind");
         }
-        XmlGuard guard = new XmlGuard(secureReader(), rootName, namespace, words);
+        XmlGuard guard = new XmlGuard(ClosedXml.reader(), rootName, namespace, words);
         IdentityHashMap<Object, Integer> lines = new IdentityHashMap<>();
         try {
             UnmarshallerHandler binder = binder(guard, lines);
@@ -154,22 +152,6 @@ final class XmlBinding<T> {
             }
         });
         return unmarshaller.getUnmarshallerHandler();
-    }
-
-    private static XMLReader secureReader() {
-        try {
-            SAXParserFactory factory = SAXParserFactory.newInstance();
-            factory.setNamespaceAware(true);
-            factory.setXIncludeAware(false);
-            factory.setFeature(XMLConstants.FEATURE_SECURE_PROCESSING, true);
-            factory.setFeature("http://apache.org/xml/features/disallow-doctype-decl", true);
-            factory.setFeature("http://xml.org/sax/features/external-general-entities", false);
-            factory.setFeature("http://xml.org/sax/features/external-parameter-entities", false);
-            factory.setFeature("http://apache.org/xml/features/nonvalidating/load-external-dtd", false);
-            return factory.newSAXParser().getXMLReader();
-        } catch (ParserConfigurationException | SAXException e) {
-            throw new IllegalStateException("this Java has no XML parser that can be closed against entities", e);
-        }
     }
 
     private static FormatException refused(String source, XmlGuard guard, SAXParseException e) {
