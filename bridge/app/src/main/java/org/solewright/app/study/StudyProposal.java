@@ -48,7 +48,7 @@ public final class StudyProposal {
             "orthosis", StudyTrial.Condition.ORTHOSIS,
             "insole", StudyTrial.Condition.ORTHOSIS,
             "prosthesis", StudyTrial.Condition.PROSTHESIS));
-    /** Farther than anybody sways, nearer than anybody walks; m. */
+    /** Farther than people sway, nearer than they walk; m. */
     private static final double SWAY = 0.3;
 
     private static final int DEEPEST = 12;
