@@ -249,10 +249,10 @@ public final class AppraiseUseCase {
             Annotation annotation = new Annotation(pass, tracks.recording().frames());
             for (Map.Entry<Side, ModelLimb> e : models.entrySet()) {
                 ModelLimb limb = e.getValue();
-                limb.shank(tracks).ifPresent(s -> {
-                    annotation.joint(e.getKey(), "KNEE", f -> limb.knee(s, f), "knee centre of the model");
-                    annotation.joint(e.getKey(), "ANKLE", f -> limb.ankle(s, f), "ankle centre of the model");
-                });
+                if (limb.hasShank(tracks)) {
+                    annotation.joint(e.getKey(), "KNEE", f -> limb.knee(tracks, f), "knee centre of the model");
+                    annotation.joint(e.getKey(), "ANKLE", f -> limb.ankle(tracks, f), "ankle centre of the model");
+                }
             }
             Path file = files.get(pass.trial().name());
             if (file != null) {

@@ -12,7 +12,6 @@ import org.solewright.analysis.cost.StepMechanics;
 import org.solewright.analysis.fitting.FittedArc;
 import org.solewright.analysis.fitting.RollOver;
 import org.solewright.analysis.fitting.RollOverPath;
-import org.solewright.analysis.fitting.SegmentTracking;
 import org.solewright.analysis.gait.LandmarkTracks;
 import org.solewright.analysis.gait.Pass;
 import org.solewright.analysis.gait.Step;
@@ -121,9 +120,9 @@ final class ModelColumns {
     /** Work distal to the shank of the trailing limb over its stance. */
     private void distalWork(TransitionRow.Builder row, ModelLimb limb) {
         Stance trailing = step.loads().trailing();
-        Optional<SegmentTracking> shank = limb.shank(tracks);
-        Optional<PowerWork> work = shank.flatMap(s ->
-                platform().flatMap(p -> distal(s::pose).over(p, markerCutoff, trailing.start(), trailing.end())));
+        Optional<PowerWork> work = platform()
+                .flatMap(p ->
+                        distal(f -> limb.shankPose(tracks, f)).over(p, markerCutoff, trailing.start(), trailing.end()));
         if (work.isEmpty()) {
             findings.add(Finding.note(
                     "distal.unknown",
@@ -186,23 +185,22 @@ final class ModelColumns {
     private void rollingRadius(TransitionRow.Builder row, ModelLimb limb) {
         Stance trailing = step.loads().trailing();
         String where = pass.trial().name() + " step " + step.number();
-        Optional<SegmentTracking> shank = limb.shank(tracks);
-        if (!trailing.allows(Use.ROLL_OVER) || shank.isEmpty()) {
+        boolean hasShank = limb.hasShank(tracks);
+        if (!trailing.allows(Use.ROLL_OVER) || !hasShank) {
             findings.add(Finding.note(
                     "rolling.stance-unused",
                     where,
-                    shank.isEmpty()
+                    !hasShank
                             ? "the points of the model's shank are not tracked: no rolling radius"
                             : "no rolling radius: " + trailing.why()));
             return;
         }
-        SegmentTracking s = shank.get();
         double weight = limb.model().subject().mass().value() * step.loads().gravity();
         Optional<RollOverPath> path = RollOverShapes.of(
                         pass,
                         trailing,
-                        f -> limb.ankle(s, f),
-                        f -> limb.knee(s, f),
+                        f -> limb.ankle(tracks, f),
+                        f -> limb.knee(tracks, f),
                         RollOverShapes.leastLoad(weight, limb.model().subject().population() != Population.OTHER))
                 .filter(RollOver::isLongEnough);
         if (path.isEmpty()) {

@@ -16,6 +16,7 @@ import org.solewright.domain.foot.LandmarkPosition;
 import org.solewright.domain.foot.Pad;
 import org.solewright.domain.foot.Rolling;
 import org.solewright.domain.foot.SegmentName;
+import org.solewright.domain.geometry.Pose;
 import org.solewright.domain.geometry.Vec3;
 
 /**
@@ -146,10 +147,10 @@ final class ModelLimb {
                 .orElse(PLANTARFLEXION_LIMIT);
     }
 
-    /** The pose of the shank frame by frame; empty where fewer than three of its points are tracked. */
-    Optional<SegmentTracking> shank(LandmarkTracks walking) {
+    /** Whether three points of the shank or more are tracked. */
+    boolean hasShank(LandmarkTracks walking) {
         track(walking);
-        return shank;
+        return shank.isPresent();
     }
 
     /** Poses of all segments; empty where fewer than three points of the shank are tracked. */
@@ -196,11 +197,17 @@ final class ModelLimb {
                 : name.equals(landmark.word());
     }
 
-    Optional<Vec3> ankle(SegmentTracking shank, int frame) {
-        return shank.at(ankle_S(), frame);
+    /** X_LS of the shank in a frame: that of the chain, else of its own points alone, as a fit has it. */
+    Optional<Pose> shankPose(LandmarkTracks walking, int frame) {
+        track(walking);
+        return chain.flatMap(c -> c.pose(SegmentName.SHANK, frame)).or(() -> shank.flatMap(s -> s.pose(frame)));
     }
 
-    Optional<Vec3> knee(SegmentTracking shank, int frame) {
-        return shank.at(Vec3.ZERO, frame);
+    Optional<Vec3> ankle(LandmarkTracks walking, int frame) {
+        return shankPose(walking, frame).map(x -> x.transformPosition(ankle_S()));
+    }
+
+    Optional<Vec3> knee(LandmarkTracks walking, int frame) {
+        return shankPose(walking, frame).map(Pose::position);
     }
 }

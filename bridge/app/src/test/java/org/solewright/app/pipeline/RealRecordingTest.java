@@ -228,6 +228,18 @@ class RealRecordingTest {
     }
 
     @Test
+    void rollingRadiusOfAStepIsThatOfTheChainsPose() {
+        // independent: band of design 03 section 9 for the chain pose; the right shank's points alone leave it (0.364
+        // m).
+        for (int walk : new int[] {1, 3}) {
+            assertThat(row(walk).number("rolling_radius_m").orElseThrow()).isBetween(0.24, 0.36);
+        }
+        assertThat(row(2).number("rolling_radius_m"))
+                .as("foot over the rear border")
+                .isEmpty();
+    }
+
+    @Test
     void arcsAreFiniteWithTheirSpread() throws IOException, FormatException {
         for (Side side : Side.values()) {
             FootModel model = FootModelFile.read(folder.resolve("foot-model-" + side.word() + ".xml"));
