@@ -128,23 +128,26 @@ final class FitUncertainty {
         return runs;
     }
 
-    /** SD of a number by Monte Carlo; empty where it is not known. */
+    /**
+     * Uncertainty of a number by Monte Carlo: root mean square of the runs about the measured value, not about their own
+     * mean. Errors do not only scatter an extreme of a curve, they move it outwards; the measured one has been moved like
+     * that already. Empty where it is not known.
+     */
     OptionalDouble measurementSd(String name) {
+        double[] own = nominal.get(name);
         double[] values = drawn.getOrDefault(name, new double[0]);
-        double sum = 0;
+        double measured = own == null ? Double.NaN : meanWhereKnown(own, own);
+        double squares = 0;
         int n = 0;
         for (double v : values) {
-            sum += Double.isNaN(v) ? 0 : v;
-            n += Double.isNaN(v) ? 0 : 1;
+            if (!Double.isNaN(v)) {
+                squares += (v - measured) * (v - measured);
+                n++;
+            }
         }
-        if (n < FEWEST_RUNS) {
-            return OptionalDouble.empty();
-        }
-        double squares = 0;
-        for (double v : values) {
-            squares += Double.isNaN(v) ? 0 : (v - sum / n) * (v - sum / n);
-        }
-        return OptionalDouble.of(Math.sqrt(squares / (n - 1)));
+        return n < FEWEST_RUNS || Double.isNaN(measured)
+                ? OptionalDouble.empty()
+                : OptionalDouble.of(Math.sqrt(squares / n));
     }
 
     /** Root mean square of the SDs of three components. */
